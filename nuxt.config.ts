@@ -1,0 +1,84 @@
+import VueRollup from 'unplugin-vue/rollup'
+
+const dayS = 86_400
+
+export default defineNuxtConfig({
+  compatibilityDate: '2026-05-01',
+  telemetry: false,
+  devtools: { enabled: false },
+  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', '@formkit/nuxt', '@sidebase/nuxt-auth'],
+  css: [
+    '@fontsource/work-sans/latin-400.css',
+    '@fontsource/work-sans/latin-500.css',
+    '@fontsource/work-sans/latin-600.css',
+    '@fontsource/work-sans/latin-700.css',
+  ],
+  tailwindcss: { cssPath: '~/assets/css/tailwind.css', viewer: false },
+  formkit: { autoImport: true },
+  typescript: { strict: true, typeCheck: false },
+  // Inline styles would need 'unsafe-inline' in the content policy.
+  features: { inlineStyles: false },
+  experimental: { payloadExtraction: false },
+  app: {
+    head: {
+      htmlAttrs: { lang: 'en-GB' },
+      title: 'Oxmere Spring Works',
+      meta: [{ name: 'viewport', content: 'width=device-width, initial-scale=1' }],
+      link: [{ rel: 'icon', type: 'image/svg+xml', href: '/mark.svg' }],
+    },
+  },
+
+  auth: {
+    baseURL: '/api/auth',
+    provider: {
+      type: 'local',
+      endpoints: {
+        signIn: { path: '/login', method: 'post' },
+        signOut: { path: '/logout', method: 'post' },
+        signUp: false,
+        getSession: { path: '/session', method: 'get' },
+      },
+      pages: { login: '/sign-in' },
+      token: {
+        signInResponseTokenPointer: '/token',
+        cookieName: 'auth.token',
+        maxAgeInSeconds: 30 * dayS,
+        sameSiteAttribute: 'lax',
+        secureCookieAttribute: true,
+        httpOnlyCookieAttribute: false,
+      },
+      session: {
+        dataType: { id: 'string', name: 'string', email: 'string', roles: 'Role[]', companyName: 'string | null' },
+        dataResponsePointer: '/user',
+      },
+    },
+    sessionRefresh: { enableOnWindowFocus: false, enablePeriodically: false },
+    globalAppMiddleware: { isEnabled: true, allow404WithoutAuth: true, addDefaultCallbackUrl: true },
+  },
+
+  routeRules: {
+    // The public pages hold nothing personal, so each is rendered once and kept.
+    '/': { cache: { maxAge: 3600, swr: true } },
+    '/order': { cache: { maxAge: 3600, swr: true } },
+  },
+
+  nitro: {
+    compressPublicAssets: true,
+    experimental: { tasks: true },
+    // Each process claims its work in the database, so several processes may run these side by side.
+    scheduledTasks: { '*/5 * * * *': ['payments:reconcile'], '17 * * * *': ['housekeeping'] },
+    rollupConfig: { plugins: [VueRollup()] },
+  },
+
+  runtimeConfig: {
+    databaseUrl: '',
+    mode: 'production',
+    origin: '',
+    trustedProxies: '',
+    limits: 'on',
+    shopTimeZone: 'Europe/Dublin',
+    stripe: { secretKey: '', webhookSecrets: '', host: '', port: '', protocol: 'https', livemode: 'false' },
+    smtp: { host: '', port: '587', secure: 'false', user: '', password: '' },
+    mail: { from: 'Oxmere Spring Works <orders@oxmere.invalid>', replyTo: '' },
+  },
+})
