@@ -1,0 +1,6 @@
+export * from './people'
+export * from './catalogue'
+export * from './orders'
+export * from './payments'
+export * from './shop'
+export * from './outbox'

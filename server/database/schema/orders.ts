@@ -1,0 +1,126 @@
+import { sql } from 'drizzle-orm'
+import { bigint, boolean, check, date, index, integer, jsonb, numeric, pgEnum, pgTable, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core'
+import { ORDER_STATES, QUOTE_STATES } from '../../../shared/schemas/order-states'
+import type { EnquiryRequest } from '../../../shared/schemas/enquiry'
+import type { GateReason, StoredDesign } from '../../../shared/schemas/quote'
+import { amountMinor, bytes, createdAt, id, moment } from './columns'
+import { priceBooks, wireProducts } from './catalogue'
+import { companies, people } from './people'
+
+export const orderState = pgEnum('order_state', ORDER_STATES)
+export const quoteState = pgEnum('quote_state', QUOTE_STATES)
+
+/** One order from the first enquiry to the last payment. Its state changes only together with a row in order_events. */
+export const orders = pgTable('orders', {
+  id: id(),
+  number: bigint('number', { mode: 'number' }).generatedAlwaysAsIdentity({ startWith: 2401 }).unique(),
+  /** SHA-256 of the secret in the customer's link. */
+  accessHash: bytes('access_hash').notNull(),
+  state: orderState('state').notNull().default('enquiry'),
+  version: integer('version').notNull().default(1),
+  companyId: uuid('company_id').references(() => companies.id),
+  personId: uuid('person_id').references(() => people.id),
+  contactName: text('contact_name').notNull(),
+  contactEmail: text('contact_email').notNull(),
+  firmName: text('firm_name').notNull(),
+  countryCode: text('country_code').notNull(),
+  vatNumber: text('vat_number'),
+  title: text('title').notNull(),
+  /** What the customer wrote, as it was written and parsed; never changed afterwards. */
+  request: jsonb('request').$type<EnquiryRequest>().notNull(),
+  gateReasons: jsonb('gate_reasons').$type<GateReason[]>().notNull(),
+  couldHurt: boolean('could_hurt').notNull(),
+  neededOn: date('needed_on', { mode: 'string' }),
+  answerBy: moment('answer_by'),
+  assignedTo: uuid('assigned_to').references(() => people.id),
+  acceptedQuantity: integer('accepted_quantity'),
+  acceptedQuoteId: uuid('accepted_quote_id'),
+  createdAt: createdAt(),
+  updatedAt: moment('updated_at').notNull().defaultNow(),
+}, t => [
+  index('orders_state_created').on(t.state, t.createdAt, t.id),
+  index('orders_company').on(t.companyId, t.createdAt),
+  index('orders_contact_email').on(t.contactEmail),
+  index('orders_person').on(t.personId),
+  check('orders_email_lower', sql`${t.contactEmail} = lower(${t.contactEmail})`),
+  check('orders_accepted', sql`${t.state} in ('enquiry', 'quoted', 'withdrawn', 'expired', 'cancelled') or (${t.acceptedQuantity} is not null and ${t.acceptedQuoteId} is not null)`),
+])
+
+/** Append-only: each move of an order, who made it and why. */
+export const orderEvents = pgTable('order_events', {
+  id: bigint('id', { mode: 'number' }).generatedAlwaysAsIdentity().primaryKey(),
+  orderId: uuid('order_id').notNull().references(() => orders.id),
+  at: moment('at').notNull().defaultNow(),
+  personId: uuid('person_id').references(() => people.id),
+  fromState: orderState('from_state'),
+  toState: orderState('to_state').notNull(),
+  why: text('why').notNull(),
+}, t => [index('order_events_order').on(t.orderId, t.id)])
+
+/** A revision of the quote. Once sent it never changes. */
+export const quotes = pgTable('quotes', {
+  id: id(),
+  orderId: uuid('order_id').notNull().references(() => orders.id),
+  revision: text('revision').notNull(),
+  state: quoteState('state').notNull().default('draft'),
+  version: integer('version').notNull().default(1),
+  priceBookId: uuid('price_book_id').notNull().references(() => priceBooks.id),
+  wireProductId: uuid('wire_product_id').references(() => wireProducts.id),
+  /** Null while no spring that passes is known. */
+  design: jsonb('design').$type<StoredDesign>(),
+  marginPercentOverride: numeric('margin_percent_override', { precision: 7, scale: 3 }),
+  marginReason: text('margin_reason'),
+  currency: text('currency').notNull(),
+  depositPercent: numeric('deposit_percent', { precision: 7, scale: 3 }).notNull(),
+  taxPercent: numeric('tax_percent', { precision: 7, scale: 3 }).notNull(),
+  noteToCustomer: text('note_to_customer').notNull().default(''),
+  validUntil: date('valid_until', { mode: 'string' }).notNull(),
+  createdBy: uuid('created_by').references(() => people.id),
+  createdAt: createdAt(),
+  sentAt: moment('sent_at'),
+  sentBy: uuid('sent_by').references(() => people.id),
+}, t => [
+  uniqueIndex('quotes_order_revision').on(t.orderId, t.revision),
+  uniqueIndex('quotes_one_draft').on(t.orderId).where(sql`${t.state} = 'draft'`),
+  uniqueIndex('quotes_one_sent').on(t.orderId).where(sql`${t.state} = 'sent'`),
+  check('quotes_sent_complete', sql`${t.state} = 'draft' or (${t.sentAt} is not null and ${t.design} is not null)`),
+])
+
+/** One rung of the price ladder. */
+export const quotePrices = pgTable('quote_prices', {
+  id: id(),
+  quoteId: uuid('quote_id').notNull().references(() => quotes.id, { onDelete: 'cascade' }),
+  quantity: integer('quantity').notNull(),
+  costMinor: amountMinor('cost_minor').notNull(),
+  netMinor: amountMinor('net_minor').notNull(),
+  taxMinor: amountMinor('tax_minor').notNull(),
+  grossMinor: amountMinor('gross_minor').notNull(),
+  depositMinor: amountMinor('deposit_minor').notNull(),
+  wirePlannedKg: numeric('wire_planned_kg', { precision: 12, scale: 4 }).notNull(),
+  dispatchOn: date('dispatch_on', { mode: 'string' }),
+}, t => [
+  uniqueIndex('quote_prices_quantity').on(t.quoteId, t.quantity),
+  check('quote_prices_add_up', sql`${t.netMinor} + ${t.taxMinor} = ${t.grossMinor} and ${t.depositMinor} between 0 and ${t.grossMinor} and ${t.quantity} > 0 and ${t.netMinor} >= 0`),
+])
+
+/** Where each euro of a rung comes from. The computed amount stays beside an estimator's. */
+export const quoteLines = pgTable('quote_lines', {
+  id: id(),
+  quotePriceId: uuid('quote_price_id').notNull().references(() => quotePrices.id, { onDelete: 'cascade' }),
+  position: integer('position').notNull(),
+  code: text('code').notNull(),
+  label: text('label').notNull(),
+  basis: text('basis').notNull(),
+  rateText: text('rate_text').notNull(),
+  quantity: numeric('quantity', { precision: 16, scale: 6 }).notNull(),
+  quantityUnit: text('quantity_unit').notNull(),
+  rate: numeric('rate', { precision: 16, scale: 6 }).notNull(),
+  computedAmountMinor: amountMinor('computed_amount_minor').notNull(),
+  amountMinor: amountMinor('amount_minor').notNull(),
+  overrideReason: text('override_reason'),
+  overriddenBy: uuid('overridden_by').references(() => people.id),
+  overriddenAt: moment('overridden_at'),
+}, t => [
+  uniqueIndex('quote_lines_code').on(t.quotePriceId, t.code),
+  check('quote_lines_override', sql`(${t.overrideReason} is null and ${t.overriddenBy} is null) or (length(${t.overrideReason}) > 0 and ${t.overriddenBy} is not null and ${t.overriddenAt} is not null)`),
+])

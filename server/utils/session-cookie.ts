@@ -1,0 +1,15 @@
+import type { H3Event } from 'h3'
+
+const NAME = '__Host-sid'
+
+/** The secret of the session cookie, or undefined. */
+export const readSessionCookie = (event: H3Event): string | undefined => getCookie(event, NAME)
+
+/** Lax, not strict: the customer must still be signed in when coming back from the payment page. */
+export function setSessionCookie(event: H3Event, secret: string, maxAgeS: number): void {
+  setCookie(event, NAME, secret, { httpOnly: true, secure: true, sameSite: 'lax', path: '/', maxAge: maxAgeS })
+}
+
+export function clearSessionCookie(event: H3Event): void {
+  deleteCookie(event, NAME, { httpOnly: true, secure: true, sameSite: 'lax', path: '/' })
+}

@@ -1,0 +1,88 @@
+import { z } from 'zod'
+import { countrySchema, daySchema, emailSchema, lineSchema, textSchema } from './shared-fields'
+import { COMPRESSION_ENDS, MATERIAL_CODES } from './spring'
+
+const positive = (what: string, max: number) => z.number({ error: issue => issue.input === undefined || issue.input === null ? `Give ${what}.` : `Give ${what} as a number.` })
+  .positive(`${what[0]!.toUpperCase()}${what.slice(1)} must be more than nought.`).max(max, `At most ${max}.`)
+const forceN = positive('the load', 1_000_000)
+const lengthMm = positive('the length', 10_000)
+const rateNPerMm = positive('the rate', 1_000_000)
+const loadAtLength = z.strictObject({ forceN, lengthMm })
+
+/** What the customer knows about the spring. */
+export const needSchema = z.discriminatedUnion('knows', [
+  z.strictObject({ knows: z.literal('two-loads'), first: loadAtLength, second: loadAtLength }),
+  z.strictObject({ knows: z.literal('load-and-rate'), load: loadAtLength, rateNPerMm }),
+  z.strictObject({ knows: z.literal('rate-and-length'), rateNPerMm, freeLengthMm: lengthMm, shortestLengthMm: lengthMm }),
+], 'Choose what you know about the spring.')
+export type Need = z.infer<typeof needSchema>
+
+export const SURROUNDINGS = ['dry', 'damp', 'outdoors', 'salt', 'food', 'chemical'] as const
+
+/** The spring a customer asks for, in SI; everything but who asks. */
+export const requirementSchema = z.strictObject({
+  kind: z.literal('compression', 'Compression springs only, for now.'),
+  need: needSchema,
+  boreMm: positive('the bore', 10_000).optional(),
+  rodMm: positive('the rod', 10_000).optional(),
+  maxFreeLengthMm: positive('the longest free length', 10_000).optional(),
+  maxSolidLengthMm: positive('the shortest room', 10_000).optional(),
+  hand: z.enum(['either', 'left', 'right']).default('either'),
+  surroundings: z.enum(SURROUNDINGS).default('dry'),
+  coldestC: z.number().min(-273, 'Not below -273 °C.').max(1000, 'At most 1000 °C.').default(5),
+  hottestC: z.number().min(-273, 'Not below -273 °C.').max(1000, 'At most 1000 °C.').default(40),
+  strokes: z.number().int('Whole strokes.').min(1, 'At least one stroke.').max(1e12, 'At most 10^12.').default(10_000),
+  strokesPerMinute: z.number().min(0, 'Not below nought.').max(100_000, 'At most 100 000.').default(0),
+  couldHurt: z.enum(['no', 'yes-or-unsure'], 'Say whether a break could hurt someone.'),
+  material: z.enum(['any', ...MATERIAL_CODES], 'Choose a material from the list.').default('any'),
+  ends: z.enum(COMPRESSION_ENDS, 'Choose the ends from the list.').default('closed-ground'),
+  toleranceGrade: z.union([z.literal(1), z.literal(2), z.literal(3)], 'Choose grade 1, 2 or 3.').default(2),
+  certificate: z.boolean().default(false),
+  quantities: z.array(z.int('A whole number of springs.').min(1, 'At least one spring.').max(1_000_000, 'At most 1 000 000 springs.'))
+    .min(1, 'Give at least one quantity.').max(6, 'At most six quantities.')
+    .refine(list => new Set(list).size === list.length, 'Each quantity once.'),
+  neededOn: daySchema.optional(),
+}).superRefine((value, context) => {
+  const issue = (path: (string | number)[], message: string) => context.addIssue({ code: 'custom', path, message })
+  if (value.boreMm !== undefined && value.rodMm !== undefined && value.boreMm <= value.rodMm)
+    issue(['boreMm'], 'The bore must be wider than the rod.')
+  if (value.coldestC > value.hottestC) issue(['hottestC'], 'The hottest must not be below the coldest.')
+  const need = value.need
+  if (need.knows === 'two-loads') {
+    if (need.first.lengthMm <= need.second.lengthMm) issue(['need', 'second', 'lengthMm'], 'The second length must be shorter than the first: the spring is pressed further.')
+    if (need.first.forceN >= need.second.forceN) issue(['need', 'second', 'forceN'], 'The second load must be higher than the first: a shorter spring pushes harder.')
+  }
+  if (need.knows === 'rate-and-length' && need.shortestLengthMm >= need.freeLengthMm)
+    issue(['need', 'shortestLengthMm'], 'The shortest working length must be shorter than the free length.')
+  if (need.knows === 'rate-and-length' && value.maxFreeLengthMm !== undefined && need.freeLengthMm > value.maxFreeLengthMm)
+    issue(['need', 'freeLengthMm'], 'The free length is beyond the longest it may be.')
+  const longest = need.knows === 'two-loads' ? need.first.lengthMm : need.knows === 'load-and-rate' ? need.load.lengthMm : 0
+  if (value.maxFreeLengthMm !== undefined && longest >= value.maxFreeLengthMm)
+    issue(['maxFreeLengthMm'], 'A spring under load is shorter than when free: the longest free length must be more than the length under the first load.')
+})
+export type Requirement = z.infer<typeof requirementSchema>
+export type RequirementInput = z.input<typeof requirementSchema>
+
+export const contactSchema = z.strictObject({
+  name: lineSchema('your name', 120),
+  firm: lineSchema('your firm', 160),
+  email: emailSchema,
+  countryCode: countrySchema,
+  vatNumber: z.string().trim().toUpperCase().regex(/^[A-Z]{2}[A-Z0-9+*]{2,12}$/, 'A VAT number starts with the country, such as IE1234567A.').optional(),
+  title: lineSchema('what the spring is for', 120),
+  remarks: textSchema(4000).default(''),
+})
+export type Contact = z.infer<typeof contactSchema>
+
+/** The whole order form. `website` is a field that people do not see; only robots fill it in. */
+export const enquiryRequestSchema = z.strictObject({
+  requirement: requirementSchema,
+  contact: contactSchema,
+  units: z.enum(['metric', 'inch']).default('metric'),
+  website: z.string().max(0, 'Leave this empty.').default(''),
+})
+export type EnquiryRequest = z.infer<typeof enquiryRequestSchema>
+export type EnquiryInput = z.input<typeof enquiryRequestSchema>
+
+/** Price as one types: the requirement, and where it would be sent. */
+export const previewBodySchema = z.strictObject({ requirement: requirementSchema, countryCode: countrySchema.default('IE') })
