@@ -1,0 +1,42 @@
+/** Kinds of spring the house knows. Only compression is calculated so far. */
+export const SPRING_KINDS = ['compression', 'extension', 'torsion'] as const
+export type SpringKind = (typeof SPRING_KINDS)[number]
+
+/** Forms of the two end coils of a compression spring. */
+export const COMPRESSION_ENDS = ['closed-ground', 'closed', 'open', 'open-ground'] as const
+export type CompressionEnds = (typeof COMPRESSION_ENDS)[number]
+
+/** How the stress is corrected and which static limits go with it. */
+export const STRESS_METHODS = ['en13906', 'wahl'] as const
+export type StressMethod = (typeof STRESS_METHODS)[number]
+
+/** Quality grades of EN 15800; 2 applies where none is stated. */
+export const TOLERANCE_GRADES = [1, 2, 3] as const
+export type ToleranceGrade = (typeof TOLERANCE_GRADES)[number]
+
+/** Seating coefficients of EN 13906-1 (both ends fixed, one hinged, both hinged, one free). */
+export const SEATING_COEFFICIENTS = [0.5, 0.707, 1, 2] as const
+export type SeatingCoefficient = (typeof SEATING_COEFFICIENTS)[number]
+
+export const COIL_HANDS = ['left', 'right'] as const
+export type CoilHand = (typeof COIL_HANDS)[number]
+
+/** Where the spring lives. */
+export const SURROUNDINGS = ['dry', 'damp', 'outdoors', 'salt', 'food', 'chemical'] as const
+export type Surroundings = (typeof SURROUNDINGS)[number]
+
+/** Wire materials with strength data by diameter. */
+export const MATERIAL_CODES = [
+  'EN10270-1-SL',
+  'EN10270-1-SM',
+  'EN10270-1-SH',
+  'EN10270-2-FDSiCr',
+  'EN10270-3-1.4310',
+  'ASTM-A228',
+  'ASTM-A229',
+  'ASTM-A227',
+  'ASTM-A232',
+  'ASTM-A401',
+  'ASTM-A313-302',
+] as const
+export type MaterialCode = (typeof MATERIAL_CODES)[number]
