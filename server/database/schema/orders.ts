@@ -3,6 +3,7 @@ import { bigint, boolean, check, date, index, integer, jsonb, numeric, pgEnum, p
 import { ORDER_STATES, QUOTE_STATES } from '../../../shared/schemas/order-states'
 import type { EnquiryRequest } from '../../../shared/schemas/enquiry'
 import type { GateReason, StoredDesign } from '../../../shared/schemas/quote'
+import type { PlannedMinutes } from '../../engine/pricing/types'
 import { amountMinor, bytes, createdAt, id, moment } from './columns'
 import { priceBooks, wireProducts } from './catalogue'
 import { companies, people } from './people'
@@ -97,6 +98,8 @@ export const quotePrices = pgTable('quote_prices', {
   grossMinor: amountMinor('gross_minor').notNull(),
   depositMinor: amountMinor('deposit_minor').notNull(),
   wirePlannedKg: numeric('wire_planned_kg', { precision: 12, scale: 4 }).notNull(),
+  /** Planned minutes of each operation, from which the job's routing is made. */
+  plannedMinutes: jsonb('planned_minutes').$type<PlannedMinutes>().notNull(),
   dispatchOn: date('dispatch_on', { mode: 'string' }),
 }, t => [
   uniqueIndex('quote_prices_quantity').on(t.quoteId, t.quantity),

@@ -1,0 +1,1 @@
+ALTER TABLE "quote_prices" ADD COLUMN "planned_minutes" jsonb NOT NULL;
