@@ -15,8 +15,6 @@ export const quoteState = pgEnum('quote_state', QUOTE_STATES)
 export const orders = pgTable('orders', {
   id: id(),
   number: bigint('number', { mode: 'number' }).generatedAlwaysAsIdentity({ startWith: 2401 }).unique(),
-  /** SHA-256 of the secret in the customer's link. */
-  accessHash: bytes('access_hash').notNull(),
   state: orderState('state').notNull().default('enquiry'),
   version: integer('version').notNull().default(1),
   companyId: uuid('company_id').references(() => companies.id),
@@ -46,6 +44,15 @@ export const orders = pgTable('orders', {
   check('orders_email_lower', sql`${t.contactEmail} = lower(${t.contactEmail})`),
   check('orders_accepted', sql`${t.state} in ('enquiry', 'quoted', 'withdrawn', 'expired', 'cancelled') or (${t.acceptedQuantity} is not null and ${t.acceptedQuoteId} is not null)`),
 ])
+
+/** A link that opens one order without signing in. Only the SHA-256 of its secret is kept; each e-mail may carry a secret of its own. */
+export const orderAccess = pgTable('order_access', {
+  tokenHash: bytes('token_hash').primaryKey(),
+  orderId: uuid('order_id').notNull().references(() => orders.id),
+  createdAt: createdAt(),
+  expiresAt: moment('expires_at').notNull(),
+  revokedAt: moment('revoked_at'),
+}, t => [index('order_access_order').on(t.orderId)])
 
 /** Append-only: each move of an order, who made it and why. */
 export const orderEvents = pgTable('order_events', {
