@@ -7,7 +7,7 @@ export type Shape = PathShape | CircleShape | TextShape | ClipShape
 export interface PathShape {
   readonly kind: 'path'
   readonly look: string
-  /** SVG path data: M, L, H, V, C, A, Z with absolute coordinates, and zero-length 'h0' for a dot. */
+  /** SVG path data: M, L, H, V, C, Z with absolute coordinates, 'l' for short strokes and a zero-length 'h0' for a dot. */
   readonly d: string
   /** Only where the width is a size of the part, such as the wire; else the look gives it. */
   readonly strokePx?: number

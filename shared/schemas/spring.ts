@@ -1,0 +1,3 @@
+export * from './spring/common'
+export * from './spring/evaluate'
+export * from './spring/size'

@@ -1,0 +1,69 @@
+import { z } from 'zod'
+import type { CompressionSizeRequest } from '../../spring/sizing/types'
+import { checkSizeRequirement } from '../../spring/sizing/check-requirement'
+import {
+  CompressionKind, ForceN, FreeLengthMm, LengthMm, MaterialCodeSchema, RateNPerMm, SurroundingsSchema, WireDiameterMm,
+  compressionConditions, quantity,
+} from './common'
+import { EvaluateResponseSchema } from './evaluate'
+
+export const SizePointSchema = z.strictObject({ lengthMm: LengthMm, forceN: ForceN })
+
+export const SizeObjectiveSchema = z.enum(['price', 'mass', 'stress'], { error: 'The objective must be price, mass or stress.' })
+export type SizeObjective = z.infer<typeof SizeObjectiveSchema>
+
+/** Body of `POST /api/v1/springs/size`. */
+export const SizeRequestSchema = z
+  .strictObject({
+    kind: CompressionKind,
+    points: z.array(SizePointSchema, { error: 'Points must be a list of lengths and forces.' }).max(2, { error: 'At most two points.' }),
+    rateNPerMm: RateNPerMm.optional(),
+    freeLengthMm: FreeLengthMm.optional(),
+    materials: z.array(MaterialCodeSchema).min(1, { error: 'Name at least one material, or leave the field out.' }).max(20).optional(),
+    wireDiametersMm: z.array(WireDiameterMm).min(1, { error: 'Name at least one wire diameter, or leave the field out.' }).max(200, { error: 'At most 200 wire diameters.' }).optional(),
+    surroundings: SurroundingsSchema.optional(),
+    objective: SizeObjectiveSchema.default('price'),
+    quantity: z.int({ error: 'The quantity must be a whole number.' }).min(1, { error: 'The quantity must be at least 1.' }).max(10_000_000, { error: 'The quantity must be at most 10000000.' }).optional(),
+    limit: z.int({ error: 'The limit must be a whole number.' }).min(1, { error: 'The limit must be from 1 to 20.' }).max(20, { error: 'The limit must be from 1 to 20.' }).default(5),
+    coilStep: quantity('The coil step', '', { min: 0.05, max: 2 }).optional(),
+    diameterStepMm: quantity('The diameter step', 'mm', { min: 0.005, max: 5 }).optional(),
+    ...compressionConditions,
+  })
+  .check((ctx) => {
+    for (const { path, message } of checkSizeRequirement(ctx.value)) {
+      ctx.issues.push({ code: 'custom', path: [...path], input: ctx.value, message })
+    }
+    if (ctx.value.wireDiametersMm !== undefined && ctx.value.materials !== undefined && ctx.value.objective === 'price') {
+      ctx.issues.push({
+        code: 'custom',
+        path: ['objective'],
+        input: ctx.value.objective,
+        message: 'Wires named by material and diameter may lie outside the catalogue and have no price: ask for mass or stress.',
+      })
+    }
+  }) satisfies z.ZodType<CompressionSizeRequest, unknown>
+
+export type SizeRequest = z.infer<typeof SizeRequestSchema>
+
+export const SizedDesignSchema = z.object({
+  material: MaterialCodeSchema,
+  wireDiameterMm: z.number(),
+  meanDiameterMm: z.number(),
+  activeCoils: z.number(),
+  totalCoils: z.number(),
+  freeLengthMm: z.number(),
+  objectiveValue: z.number(),
+  evaluation: EvaluateResponseSchema,
+})
+
+/** Answer of `POST /api/v1/springs/size`. */
+export const SizeResponseSchema = z.object({
+  designs: z.array(SizedDesignSchema),
+  searched: z.object({ wires: z.number(), feasibleWires: z.number() }),
+  conflict: z.object({
+    requirements: z.array(z.string()),
+    changes: z.array(z.object({ path: z.string(), from: z.number(), to: z.number(), design: SizedDesignSchema })),
+  }).nullable(),
+})
+
+export type SizeResponse = z.infer<typeof SizeResponseSchema>
