@@ -73,6 +73,7 @@ export const RATE_CODES = [
   row('inspection.first-off-minutes', 'First-off, each job', 'minutes', 'inspection', '15', 'practice'),
   row('inspection.minutes-per-measurement', 'One measurement', 'minutes', 'inspection', '0.30', 'practice'),
   row('inspection.measurements-per-spring', 'Measurements on each sampled spring', 'number', 'inspection', '3', 'practice'),
+  row('inspection.aql', 'Acceptance quality limit of the sample: 0.65, 1.0, 1.5, 2.5, 4.0 or 6.5', 'percent', 'inspection', '1.0', 'policy'),
   row('certificate.2.1', 'Statement of compliance 2.1', 'currency', 'inspection', '6.00', 'practice'),
   row('certificate.2.2', 'Test report 2.2', 'currency', 'inspection', '12.00', 'practice'),
   row('certificate.3.1', 'Inspection certificate 3.1', 'currency', 'inspection', '18.00', 'practice'),

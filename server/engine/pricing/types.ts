@@ -88,10 +88,10 @@ export interface PriceLine {
   basis: string
   /** The rate, as it is shown. */
   rateText: string
-  /** Decimal text in `quantityUnit`. */
+  /** Decimal text in `quantityUnit`; where that is `%`, the amount in major units the percentage is taken of. */
   quantity: string
   quantityUnit: PriceQuantityUnit
-  /** Decimal text: money for one unit of `quantityUnit`, or percent. */
+  /** Decimal text: money for one unit of `quantityUnit`, or the percentage. */
   rate: string
   amountMinor: number
 }
@@ -100,6 +100,9 @@ export type OperationKind = 'coiling' | 'stress-relief' | 'end-grinding' | 'insp
 
 /** Planned time of each operation in whole minutes; the routing is built from it. */
 export type PlannedMinutes = Partial<Record<OperationKind, { setUpMinutes: number, runMinutes: number }>>
+
+/** Why a tax rate applies; the invoice says it in words. */
+export type TaxKind = 'domestic' | 'eu-business' | 'export'
 
 /** The price of one quantity. `netMinor` is the sum of `lines`; `grossMinor` is `netMinor + taxMinor`. */
 export interface PricedQuantity {
@@ -112,13 +115,18 @@ export interface PricedQuantity {
   netMinor: number
   /** Decimal text, three decimals in euro. */
   unitPrice: string
+  taxKind: TaxKind
   /** Decimal text. */
   taxPercent: string
   taxMinor: number
   grossMinor: number
   /** Margin line as a percentage of net, decimal text with one decimal. */
   marginPercent: string
+  /** Decimal text, from the price book. */
+  marginFloorPercent: string
   isBelowMarginFloor: boolean
+  /** The smallest order before tax, from the price book; the margin line is raised to reach it. */
+  minimumOrderMinor: number
   plannedMinutes: PlannedMinutes
   /** Wire the job takes, with scrap and coil ends, decimal text. */
   wirePlannedKg: string
