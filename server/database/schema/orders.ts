@@ -99,6 +99,8 @@ export const quotePrices = pgTable('quote_prices', {
   id: id(),
   quoteId: uuid('quote_id').notNull().references(() => quotes.id, { onDelete: 'cascade' }),
   quantity: integer('quantity').notNull(),
+  /** Price of one spring before tax, as shown; its digits are kept. */
+  unitPrice: numeric('unit_price').notNull(),
   costMinor: amountMinor('cost_minor').notNull(),
   netMinor: amountMinor('net_minor').notNull(),
   taxMinor: amountMinor('tax_minor').notNull(),

@@ -1,0 +1,1 @@
+ALTER TABLE "quote_prices" ADD COLUMN "unit_price" numeric NOT NULL;
