@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { countrySchema, daySchema, emailSchema, lineSchema, textSchema } from './shared-fields'
-import { COMPRESSION_ENDS, MATERIAL_CODES } from './spring'
+import { COMPRESSION_ENDS, MATERIAL_CODES, SURROUNDINGS } from '../spring/codes'
 
 const positive = (what: string, max: number) => z.number({ error: issue => issue.input === undefined || issue.input === null ? `Give ${what}.` : `Give ${what} as a number.` })
   .positive(`${what[0]!.toUpperCase()}${what.slice(1)} must be more than nought.`).max(max, `At most ${max}.`)
@@ -16,8 +16,6 @@ export const needSchema = z.discriminatedUnion('knows', [
   z.strictObject({ knows: z.literal('rate-and-length'), rateNPerMm, freeLengthMm: lengthMm, shortestLengthMm: lengthMm }),
 ], 'Choose what you know about the spring.')
 export type Need = z.infer<typeof needSchema>
-
-export const SURROUNDINGS = ['dry', 'damp', 'outdoors', 'salt', 'food', 'chemical'] as const
 
 /** The spring a customer asks for, in SI; everything but who asks. */
 export const requirementSchema = z.strictObject({

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { accessKeySchema, reasonSchema, textSchema, versionSchema } from './shared-fields'
-import type { CompressionEvaluation, CompressionEnds, MaterialCode } from './spring'
+import type { CompressionEnds, MaterialCode } from '../spring/codes'
+import type { CompressionEvaluation } from '../spring/mechanics/types'
 import type { OrderState } from './order-states'
 import type { PaymentStatus } from './payment'
 import type { EnquiryRequest } from './enquiry'

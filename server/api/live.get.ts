@@ -1,0 +1,2 @@
+/** Liveness: the process answers. It says nothing about the database. */
+export default defineRoute({ access: 'public' }, () => ({ status: 'alive' }))
