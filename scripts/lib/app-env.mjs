@@ -7,9 +7,8 @@ import { APP_ROLE, OWNER_ROLE, databaseUrl } from './postgres-roles.mjs'
  * @property {string} stripeStateFile where the Stripe fake keeps what it knows
  * @property {string} mailFolder
  * @property {string} demoSignInsFile written by the seed: [{ role, email, password }]
+ * @property {'demo' | 'test'} mode never production: both allow the fakes and the demo sign-ins
  */
-
-const DEMO_MODE = 'demo'
 
 /**
  * The address people reach the app at, as put in links and sent to the payment host.
@@ -32,10 +31,10 @@ function inheritedEnv() {
  * @param {Surroundings} surroundings
  * @returns {NodeJS.ProcessEnv}
  */
-export function buildMigrationEnv({ ports, secrets, demoSignInsFile }) {
+export function buildMigrationEnv({ ports, secrets, demoSignInsFile, mode }) {
   return {
     ...inheritedEnv(),
-    WIREWRIGHT_MODE: DEMO_MODE,
+    WIREWRIGHT_MODE: mode,
     NUXT_DATABASE_OWNER_URL: databaseUrl(ports.postgres, OWNER_ROLE, secrets.databaseOwnerPassword),
     NUXT_DATABASE_URL: databaseUrl(ports.postgres, APP_ROLE, secrets.databaseAppPassword),
     WIREWRIGHT_APP_ROLE: APP_ROLE,
@@ -49,13 +48,15 @@ export function buildMigrationEnv({ ports, secrets, demoSignInsFile }) {
  * @returns {NodeJS.ProcessEnv}
  */
 export function buildAppEnv(surroundings, port = surroundings.ports.app) {
-  const { ports, secrets } = surroundings
+  const { ports, secrets, mode } = surroundings
   return {
     ...inheritedEnv(),
-    WIREWRIGHT_MODE: DEMO_MODE,
+    WIREWRIGHT_MODE: mode,
+    NUXT_MODE: mode,
+    // Tests send thousands of requests from one address; the ones about limits start an app of their own with them on.
+    NUXT_LIMITS: mode === 'test' ? 'off' : 'on',
     NITRO_HOST: '127.0.0.1',
     NITRO_PORT: String(port),
-    NUXT_PUBLIC_SITE_URL: siteUrl(surroundings),
     NUXT_ORIGIN: siteUrl(surroundings),
     NUXT_DATABASE_URL: databaseUrl(ports.postgres, APP_ROLE, secrets.databaseAppPassword),
     NUXT_STRIPE_SECRET_KEY: secrets.stripeSecretKey,
@@ -66,7 +67,7 @@ export function buildAppEnv(surroundings, port = surroundings.ports.app) {
     NUXT_SMTP_HOST: '127.0.0.1',
     NUXT_SMTP_PORT: String(ports.smtp),
     NUXT_SMTP_SECURE: 'false',
-    NUXT_MAIL_FROM: 'Oxmere Spring Works <orders@oxmere.example>',
+    NUXT_MAIL_FROM: 'Oxmere Spring Works <orders@oxmere.invalid>',
   }
 }
 

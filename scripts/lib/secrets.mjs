@@ -13,12 +13,12 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs'
 /** @returns {Secrets} */
 export function makeSecrets() {
   const random = () => randomBytes(24).toString('base64url')
-  // Hexadecimal after Stripe's prefixes: both must read as one token in a header.
+  // The word in the key lets a production start recognise and refuse it.
   return {
     databaseAdminPassword: random(),
     databaseOwnerPassword: random(),
     databaseAppPassword: random(),
-    stripeSecretKey: `sk_test_${randomBytes(24).toString('hex')}`,
+    stripeSecretKey: `sk_test_wirewright_fake_${randomBytes(24).toString('hex')}`,
     stripeWebhookSecret: `whsec_${randomBytes(24).toString('hex')}`,
   }
 }

@@ -20,7 +20,7 @@ import { runLogged } from './run.mjs'
  * @property {AbortSignal} [signal]
  *
  * @typedef {object} Service one part of the shop that can be started and stopped by itself
- * @property {() => Promise<void>} start
+ * @property {(env?: NodeJS.ProcessEnv) => Promise<void>} start with settings that differ from the usual ones, if any
  * @property {() => Promise<void>} stop
  * @property {() => Promise<void>} kill
  *
@@ -50,7 +50,6 @@ export async function prepareDatabase(context) {
  * The services by name, none of them started but the database, which `prepareDatabase` has already started.
  * @param {ServiceContext} context
  * @param {ManagedProcess} postgres
- * @returns {Promise<Record<ServiceName, Service> & { secondAppUrl: string }>}
  */
 export async function defineServices(context, postgres) {
   const { surroundings, cluster, processes, logFile } = context
@@ -65,31 +64,32 @@ export async function defineServices(context, postgres) {
    * @param {string} healthUrl
    */
   const node = (name, log, args, env, healthUrl) =>
-    defineService(async () => {
-      const managed = processes.start({ name, command: process.execPath, args, env, logFile: logFile(log) })
+    defineService(async (different) => {
+      const managed = processes.start({ name, command: process.execPath, args, env: { ...env, ...different }, logFile: logFile(log) })
       await waitUntilHealthy(healthUrl, managed)
       return managed
     })
-  return {
+  /** @type {Record<ServiceName, Service>} */
+  const services = {
     database: defineService(() => startCluster(cluster, processes), { running: postgres, kill: killCluster }),
     'stripe-fake': node('the Stripe fake', 'stripe-fake', [...TYPESCRIPT, 'tests/fakes/stripe/main.ts'], buildStripeFakeEnv(surroundings), `http://127.0.0.1:${ports.stripeFake}/health`),
     mail: node('the mail inbox', 'mail', ['scripts/mail-inbox.mjs'], buildMailInboxEnv(surroundings), `http://127.0.0.1:${ports.mailWeb}/api/healthz`),
     app: node('the app', 'app', [APP_ENTRY], buildAppEnv(surroundings), `${siteUrl(surroundings)}/api/health`),
     'second-app': node('the second app', 'second-app', [APP_ENTRY], buildAppEnv(surroundings, secondAppPort), `http://127.0.0.1:${secondAppPort}/api/health`),
-    secondAppUrl: `http://127.0.0.1:${secondAppPort}`,
   }
+  return { services, secondAppUrl: `http://127.0.0.1:${secondAppPort}` }
 }
 
 /**
- * @param {() => Promise<ManagedProcess>} launch
+ * @param {(different?: NodeJS.ProcessEnv) => Promise<ManagedProcess>} launch
  * @param {{ running?: ManagedProcess, kill?: (managed: ManagedProcess) => Promise<void> }} [options]
  * @returns {Service}
  */
 function defineService(launch, { running, kill = (managed) => managed.kill() } = {}) {
   let current = running
   return {
-    start: async () => {
-      if (!current || current.hasExited()) current = await launch()
+    start: async (different) => {
+      if (!current || current.hasExited()) current = await launch(different)
     },
     stop: async () => {
       await current?.stop()

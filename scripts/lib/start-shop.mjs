@@ -33,7 +33,9 @@ export async function startShop(ports, processes, signal) {
   await ensureNpmPackages({ logFile: logFile('npm-ci'), signal })
 
   const secrets = readOrMakeSecrets(join(DATA_FOLDER, 'secrets.json'))
+  /** @type {import('./app-env.mjs').Surroundings} */
   const surroundings = {
+    mode: 'demo',
     ports,
     secrets,
     stripeStateFile: join(DATA_FOLDER, 'stripe-fake.json'),
@@ -46,7 +48,7 @@ export async function startShop(ports, processes, signal) {
   say('Starting the database ...')
   const postgres = await prepareDatabase(context)
   say(`Starting the Stripe fake, the mail inbox and the app (${APP_ENTRY.replace(`${join(DATA_FOLDER, '..')}/`, '')}) ...`)
-  const services = await defineServices(context, postgres)
+  const { services } = await defineServices(context, postgres)
   for (const name of /** @type {const} */ (['stripe-fake', 'mail', 'app'])) {
     signal.throwIfAborted()
     await services[name].start()
