@@ -5,8 +5,8 @@ import { DomainError } from './errors'
 /** Who acts. A guest with the link of an order is no actor: the link is passed beside. */
 export type Actor = { personId: string, name: string, email: string, roles: readonly Role[], companyId: string | null, sessionId: string }
 
-/** What every service is given: the database, the present moment, who asks, and the request's id for the log. */
-export type ServiceContext = { db: Database, now: Date, actor: Actor | null, requestId: string, origin: string }
+/** What every service is given: the database, the present moment, who asks, the request's id for the log, where links lead and the shop's zone. */
+export type ServiceContext = { db: Database, now: Date, actor: Actor | null, requestId: string, origin: string, timeZone: string }
 
 /** Refuses unless the actor holds one of the roles. Checked here as well as at the route: jobs and pages call services too. */
 export function assertRole(context: Pick<ServiceContext, 'actor'>, ...roles: readonly Role[]): Actor {

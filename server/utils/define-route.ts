@@ -43,7 +43,7 @@ export function defineRoute<Body extends z.ZodType, Query extends z.ZodType, Par
       if (options.limit && settings.limits === 'on') await takeFromLimit(useDatabase(), options.limit, clientAddress(event))
       const actor = await findActor(useDatabase(), readSessionCookie(event), new Date())
       event.context.actorId = actor?.personId
-      const context: ServiceContext = { db: useDatabase(), now: new Date(), actor, requestId, origin: settings.origin }
+      const context: ServiceContext = { db: useDatabase(), now: new Date(), actor, requestId, origin: settings.origin, timeZone: settings.shopTimeZone }
       assertAccess(context, options.access)
       const params = options.params ? parse(options.params, getRouterParams(event, { decode: true }), 'not-found') : undefined
       const query = options.query ? parse(options.query, readQuery(event)) : undefined

@@ -6,6 +6,7 @@ import { benchRecords, jobs, operations, orders, wireProducts, wireReservations,
 import { assertRole, brokenConstraint, inTransaction, type Actor, type ServiceContext, type Transaction } from '../context'
 import { conflict, DomainError, invalid, notFound } from '../errors'
 import { enqueueMail } from '../mail/enqueue'
+import { readJobMailFacts } from '../jobs/mail-facts'
 import { moveOrder } from '../orders/move'
 import { readClock } from './clock'
 import { readBench } from './view'
@@ -37,7 +38,7 @@ async function writeRecord(tx: Transaction, context: ServiceContext, actor: Acto
   const [found] = await tx.select({ jobId: operations.jobId }).from(operations).where(eq(operations.id, operationId))
   if (!found) throw notFound('operation')
   // One lock order everywhere: order, job, operation.
-  const [head] = await tx.select({ orderId: orders.id, email: orders.contactEmail, number: orders.number, title: orders.title, contactName: orders.contactName })
+  const [head] = await tx.select({ orderId: orders.id })
     .from(orders).innerJoin(jobs, eq(jobs.orderId, orders.id)).where(eq(jobs.id, found.jobId)).for('update', { of: orders })
   const [job] = await tx.select().from(jobs).where(eq(jobs.id, found.jobId)).for('update')
   const [operation] = await tx.select().from(operations).where(eq(operations.id, operationId)).for('update')
@@ -70,7 +71,8 @@ async function writeRecord(tx: Transaction, context: ServiceContext, actor: Acto
   if (record.act === 'start' && job.state === 'planned') {
     await tx.update(jobs).set({ state: 'in-work', version: job.version + 1 }).where(eq(jobs.id, job.id))
     await moveOrder(tx, { orderId: head.orderId, from: ['planned'], to: 'in-work', why: `${OPERATION_NAMES[operation.kind]} started`, personId: actor.personId, now: context.now })
-    await enqueueMail(tx, { kind: 'job-in-work', objectId: job.id, recipient: head.email, orderId: head.orderId, payload: { ref: `OX-${head.number}`, title: head.title, name: head.contactName } })
+    const facts = await readJobMailFacts(tx, job.id, context)
+    await enqueueMail(tx, { kind: 'job-in-work', objectId: job.id, recipient: facts.recipient, orderId: facts.orderId, payload: { ...facts.about, quantity: facts.quantity, leavesOn: facts.leavesOn, orderUrl: facts.orderUrl } })
   }
   if (record.act === 'finish') await finishJobIfLast(tx, context, actor, job, head)
   return centre.code
@@ -120,10 +122,14 @@ async function useWire(tx: Transaction, jobId: string, wireKg: number): Promise<
   }
 }
 
-async function finishJobIfLast(tx: Transaction, context: ServiceContext, actor: Actor, job: typeof jobs.$inferSelect, head: { orderId: string, email: string, number: number, title: string, contactName: string }): Promise<void> {
+async function finishJobIfLast(tx: Transaction, context: ServiceContext, actor: Actor, job: typeof jobs.$inferSelect, head: { orderId: string }): Promise<void> {
   const [open] = await tx.select({ id: operations.id }).from(operations).where(and(eq(operations.jobId, job.id), sql`${operations.state} <> 'finished'`)).limit(1)
   if (open) return
   await tx.update(jobs).set({ state: 'finished', finishedAt: context.now, version: sql`${jobs.version} + 1` }).where(eq(jobs.id, job.id))
   await moveOrder(tx, { orderId: head.orderId, from: ['in-work'], to: 'finished', why: 'The last operation is finished', personId: actor.personId, now: context.now })
-  await enqueueMail(tx, { kind: 'job-finished', objectId: job.id, recipient: head.email, orderId: head.orderId, payload: { ref: `OX-${head.number}`, title: head.title, name: head.contactName } })
+  const facts = await readJobMailFacts(tx, job.id, context)
+  await enqueueMail(tx, {
+    kind: 'job-finished', objectId: job.id, recipient: facts.recipient, orderId: facts.orderId,
+    payload: { ...facts.about, quantity: facts.quantity, balanceMinor: facts.balanceMinor, currency: facts.currency, orderUrl: facts.orderUrl },
+  })
 }
