@@ -1,7 +1,7 @@
 import { centreLine, hasFaces, type DrawnSpring } from './drawn-spring'
 import { halfCoils, type Placement } from './half-coils'
 import { lineH, lineV, px, type PathShape, type Shape } from './shapes'
-import { crownShape, wireShapes } from './wire'
+import { crownShapes, wireShapes } from './wire'
 
 const TAU = 2 * Math.PI
 
@@ -39,25 +39,25 @@ export function compressionShapes(spring: DrawnSpring, lengthMm: number, place: 
   const strands = halfCoils({ centre, meanDiameterMm, fromTurn: 0, toTurn: totalCoils, hand: spring.hand }, place)
   const wirePx = wireDiameterMm * pxPerMm
 
-  const tip = (turns: number, near: boolean): PathShape[] => {
-    const xPx = x0Px + pxPerMm * centre(turns)
-    const yPx = axisYPx - pxPerMm * meanDiameterMm / 2 * Math.cos(TAU * turns)
-    if (Math.abs(Math.sin(TAU * turns)) > SEEN_ACROSS) return near ? [lineH('w-cut', xPx - wirePx / 2, xPx + wirePx / 2, yPx)] : []
-    return wireShapes(`M${px(xPx)} ${px(yPx)}h0`, wirePx, near, true)
-  }
+  const tipAt = (turns: number): readonly [xPx: number, yPx: number] =>
+    [x0Px + pxPerMm * centre(turns), axisYPx - pxPerMm * meanDiameterMm / 2 * Math.cos(TAU * turns)]
+  const isAcross = (turns: number): boolean => Math.abs(Math.sin(TAU * turns)) > SEEN_ACROSS
+  const ball = ([xPx, yPx]: readonly [number, number]) => `M${px(xPx)} ${px(yPx)}h0`
+  const cut = ([xPx, yPx]: readonly [number, number]) => lineH('w-cut', xPx - wirePx / 2, xPx + wirePx / 2, yPx)
   const startIsNear = spring.hand === 'right'
   const endIsNear = (Math.floor(totalCoils * 2 - 1e-9) % 2 === 0) === startIsNear
-  const endIsAcross = Math.abs(Math.sin(TAU * totalCoils)) > SEEN_ACROSS
+  const nearTips = [...(startIsNear ? [0] : []), ...(endIsNear ? [totalCoils] : [])]
+  const farBalls = [0, totalCoils].filter((turns) => !nearTips.includes(turns) && !isAcross(turns)).map((turns) => ball(tipAt(turns))).join('')
+  const nearBalls = nearTips.filter((turns) => !isAcross(turns)).map((turns) => ball(tipAt(turns))).join('')
 
   const shapes: Shape[] = [
-    ...(startIsNear ? [] : tip(0, false)),
-    ...(endIsNear ? [] : tip(totalCoils, false)),
+    ...wireShapes(farBalls, wirePx, false, true),
     ...wireShapes(strands.far, wirePx, false),
-    ...(startIsNear ? tip(0, true) : []),
-    ...(endIsNear && !endIsAcross ? tip(totalCoils, true) : []),
+    ...crownShapes(farBalls, wirePx, false),
+    ...wireShapes(nearBalls, wirePx, true, true),
     ...wireShapes(strands.near, wirePx, true),
-    crownShape(strands.crowns, wirePx),
-    ...(endIsNear && endIsAcross ? tip(totalCoils, true) : []),
+    ...crownShapes(strands.crowns, wirePx, true),
+    ...nearTips.filter(isAcross).map((turns) => cut(tipAt(turns))),
   ]
   if (!hasFaces(spring)) return shapes
 

@@ -95,9 +95,10 @@ export function leader({ fromPx: [xPx, yPx], elbowPx: [elbowX, elbowY], label }:
 /** Chain-dotted centre line, past the part at both ends. */
 export const axisAcross = (x1Px: number, x2Px: number, yPx: number): PathShape => lineH('axis', x1Px, x2Px, yPx)
 
-/** A long break line (ISO 128): straight up the page with two zigzags, for a part that is drawn shortened. */
+/** A long break line (ISO 128): straight up the page with two zigzags, one on a thin part; for a part drawn shortened. */
 export function breakLine(xPx: number, y1Px: number, y2Px: number): PathShape {
   const zigzag = (yPx: number) => `V${px(yPx - 4)}L${px(xPx - 5)} ${px(yPx - 2)}L${px(xPx + 5)} ${px(yPx + 2)}L${px(xPx)} ${px(yPx + 4)}`
-  const third = (y2Px - y1Px) / 3
-  return path('break', `M${px(xPx)} ${px(y1Px)}${zigzag(y1Px + third)}${zigzag(y2Px - third)}V${px(y2Px)}`)
+  const height = y2Px - y1Px
+  const places = height < 80 ? [height / 2] : [height / 3, height * 2 / 3]
+  return path('break', `M${px(xPx)} ${px(y1Px)}${places.map((place) => zigzag(y1Px + place)).join('')}V${px(y2Px)}`)
 }

@@ -29,6 +29,8 @@ export interface ChartFrame {
   readonly heightPx: number
   readonly forceTicksN: readonly number[]
   readonly forceDecimals: number
+  /** Where the title and the name of the force axis begin. */
+  readonly titleXPx: number
   readonly units: UnitSystem
 }
 
@@ -72,8 +74,8 @@ function axes(charted: LoadCharted, frame: ChartFrame): Shape[] {
     const xPx = x0Px + pxPerUnit * tick
     shapes.push(lineV('base', xPx, bottomPx, bottomPx + 8), text('tick', xPx, bottomPx + 23, 'middle', formatNumber(tick, stepDecimals(step))))
   }
-  shapes.push(text('chart-title', 2, topPx - 30, 'start', 'Force at each length'))
-  shapes.push(text('tick', 2, topPx - 10, 'start', `force, ${unitSymbol('force', units)}`))
+  shapes.push(text('chart-title', frame.titleXPx, topPx - 31, 'start', 'Force at each length'))
+  shapes.push(text('tick', frame.titleXPx, topPx - 12, 'start', `force, ${unitSymbol('force', units)}`))
   shapes.push(text('tick', endPx, bottomPx + 43, 'end', `length, ${unitSymbol('length', units)}`))
   return shapes
 }

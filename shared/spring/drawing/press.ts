@@ -77,7 +77,7 @@ export function layoutPress(pressed: PressedSpring, options: PressOptions): Pres
   const topPx = place.axisYPx - outerPx / 2
   const bottomPx = place.axisYPx + outerPx / 2
   const frame: ChartFrame = {
-    x0Px: place.x0Px, pxPerMm, units, forceTicksN: ticksN, forceDecimals: decimals,
+    x0Px: place.x0Px, titleXPx: place.x0Px - leftPx + 2, pxPerMm, units, forceTicksN: ticksN, forceDecimals: decimals,
     topPx: bottomPx + (hasAllDimensions ? 76 : 62), heightPx: options.chartHeightPx ?? (isWide ? 200 : 170),
   }
   const x0Px = place.x0Px
@@ -149,12 +149,17 @@ function furtherDimensions({ spring, place, frame: { units } }: PressLayout, len
   const { wireDiameterMm, meanDiameterMm } = spring
   const innerRadiusPx = (meanDiameterMm - wireDiameterMm) / 2 * place.pxPerMm
   const endPx = chartX(place, lengthMm)
-  const bottomCrownMm = centreLine(spring, lengthMm)(Math.floor(spring.totalCoils / 2) + 0.5)
-  const crownPx = chartX(place, bottomCrownMm)
+  const label = `${diameterSign}${formatWireDiameter(wireDiameterMm, units, { unit: false })} wire`
+  const centre = centreLine(spring, lengthMm)
+  // The leader leaves a crown at the bottom, as near the middle as its lettering stays left of the moving plate
+  let turns = Math.floor(spring.totalCoils / 2) + 0.5
+  while (turns > 1.5 && chartX(place, centre(turns)) + 48 + textWidthPx(label) > endPx) turns -= 1
+  const crownPx = chartX(place, centre(turns))
   const crownYPx = place.axisYPx + meanDiameterMm / 2 * place.pxPerMm
+  const wireRadiusPx = wireDiameterMm / 2 * place.pxPerMm
   return [
     ...dimensionUpright({ y1Px: place.axisYPx - innerRadiusPx, y2Px: place.axisYPx + innerRadiusPx, xPx: endPx + 40, partPx: [endPx, endPx], label: diameterSign + formatLength(meanDiameterMm - wireDiameterMm, units, { unit: false }) }),
-    ...leader({ fromPx: [crownPx, crownYPx], elbowPx: [crownPx + 24, crownYPx + wireDiameterMm / 2 * place.pxPerMm + 26], label: `${diameterSign}${formatWireDiameter(wireDiameterMm, units, { unit: false })} wire` }),
+    ...leader({ fromPx: [crownPx, crownYPx + wireRadiusPx / 2], elbowPx: [crownPx + 24, crownYPx + wireRadiusPx + 26], label }),
   ]
 }
 

@@ -17,14 +17,13 @@ function textMarkup({ look, xPx, yPx, anchor, upright, runs }: TextShape, inks: 
 
 type Inks = (look: string) => string
 
-function shapeMarkup(shape: Shape, inks: Inks, clips: string[]): string {
+function shapeMarkup(shape: Shape, inks: Inks): string {
   if (shape.kind === 'path') return `<path d="${shape.d}"${inks(shape.look)}${shape.strokePx === undefined ? '' : ` stroke-width="${shape.strokePx}"`}/>`
   if (shape.kind === 'circle') return `<circle cx="${px(shape.xPx)}" cy="${px(shape.yPx)}" r="${px(shape.radiusPx)}"${inks(shape.look)}/>`
   if (shape.kind === 'text') return textMarkup(shape, inks)
-  const { xPx, yPx, widthPx, heightPx } = shape.box
-  const id = `cut${clips.length}`
-  clips.push(`<clipPath id="${id}"><rect x="${px(xPx)}" y="${px(yPx)}" width="${px(widthPx)}" height="${px(heightPx)}"/></clipPath>`)
-  return `<g clip-path="url(#${id})">${shape.shapes.map((inner) => shapeMarkup(inner, inks, clips)).join('')}</g>`
+  // An inner svg cuts at its own box and needs no id, so that drawings can stand beside each other in one document
+  const box = [shape.box.xPx, shape.box.yPx, shape.box.widthPx, shape.box.heightPx].map(px)
+  return `<svg x="${box[0]}" y="${box[1]}" width="${box[2]}" height="${box[3]}" viewBox="${box.join(' ')}">${shape.shapes.map((inner) => shapeMarkup(inner, inks)).join('')}</svg>`
 }
 
 // The drawing on paper, where no style sheet is at hand: the tokens' values of design.md
@@ -80,8 +79,7 @@ interface Sheet {
 
 /** The drawing as one self-contained SVG text with its inks written in: for a file, an e-mail or a paper. */
 export function svgMarkup({ widthPx, heightPx, shapes, name }: Sheet): string {
-  const clips: string[] = []
-  const body = shapes.map((shape) => shapeMarkup(shape, paperInks, clips)).join('')
+  const body = shapes.map((shape) => shapeMarkup(shape, paperInks)).join('')
   const size = `width="${px(widthPx)}" height="${px(heightPx)}" viewBox="0 0 ${px(widthPx)} ${px(heightPx)}"`
-  return `<svg xmlns="http://www.w3.org/2000/svg" ${size} role="img" aria-label="${escapeText(name)}" font-family="Work Sans, Arial, sans-serif"><defs>${clips.join('')}</defs>${body}</svg>`
+  return `<svg xmlns="http://www.w3.org/2000/svg" ${size} role="img" aria-label="${escapeText(name)}" font-family="Work Sans, Arial, sans-serif">${body}</svg>`
 }

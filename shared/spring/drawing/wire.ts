@@ -14,5 +14,8 @@ export function wireShapes(d: string, wirePx: number, near: boolean, round = fal
   return [path('w-edge' + look, d, wirePx + line), path('w-body' + look, d, Math.max(0.6, wirePx - line))]
 }
 
-/** The crowns of near strands: body balls that hide the upright cuts. */
-export const crownShape = (d: string, wirePx: number): PathShape => path('w-body near round', d, Math.max(0.5, wirePx - edgePx(wirePx) - 0.1))
+/** Balls in the body's colour that hide the upright cuts where the strand passes from one side to the other. */
+export function crownShapes(d: string, wirePx: number, near: boolean): PathShape[] {
+  if (!d) return []
+  return [path(`w-body ${near ? 'near' : 'far'} round`, d, Math.max(0.5, wirePx - edgePx(wirePx) * (near ? 1 : 0.55) - 0.1))]
+}

@@ -1,0 +1,143 @@
+import {
+  FATIGUE_CYCLES, ZIMMERLI_THICKEST_WIRE_MM, goodmanZimmerliFactor, lifeFractionFactor,
+} from '../fatigue'
+import { figure } from '../figure'
+import type { CompressionModel } from '../model'
+import { forceAtLengthN, greatestForceN, statePitchMm, type CompressionState } from '../state'
+import { shearStressMpa } from '../stress'
+import { stressCorrectionFactor } from '../stress-factors'
+import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
+
+/** Corrected stress at the greatest working load and at the least (zero where there is one point), MPa. */
+export function greatestCorrectedStressMpa(model: CompressionModel, state: CompressionState): number {
+  return stressCorrectionFactor(model.method, state.springIndex)
+    * shearStressMpa(greatestForceN(state), state.meanDiameterMm, model.wireDiameterMm)
+}
+
+export function leastCorrectedStressMpa(model: CompressionModel, state: CompressionState): number {
+  return stressCorrectionFactor(model.method, state.springIndex)
+    * shearStressMpa(forceAtLengthN(state, state.longestLengthMm), state.meanDiameterMm, model.wireDiameterMm)
+}
+
+/** Goodman safety factor on Zimmerli's data between the working loads. */
+export function stateFatigueFactor(model: CompressionModel, state: CompressionState): number {
+  const high = greatestCorrectedStressMpa(model, state)
+  const low = leastCorrectedStressMpa(model, state)
+  return goodmanZimmerliFactor((high - low) / 2, (high + low) / 2, model.tensileStrengthMpa, model.shotPeened)
+}
+
+/** Safety factor by published fractions of tensile strength; null outside their lives. */
+export function stateLifeFractionFactor(model: CompressionModel, state: CompressionState): number | null {
+  const high = greatestCorrectedStressMpa(model, state)
+  const low = leastCorrectedStressMpa(model, state)
+  return lifeFractionFactor((high - low) / 2, (high + low) / 2, model.tensileStrengthMpa, model.cycles, model.shotPeened)
+}
+
+const FATIGUE_CAUTION = 1.2
+
+export const fatigueCheck: CompressionCheck = {
+  code: 'fatigue',
+  applies: (model, state) =>
+    model.cycles >= FATIGUE_CYCLES && !Number.isNaN(state.shortestLengthMm) && !Number.isNaN(model.tensileStrengthMpa),
+  stops: (model, state) =>
+    model.wireDiameterMm > ZIMMERLI_THICKEST_WIRE_MM || fallsShort(stateFatigueFactor(model, state), 1),
+  describe: (model, state) => {
+    const factor = stateFatigueFactor(model, state)
+    const second = stateLifeFractionFactor(model, state)
+    const differs = second !== null && (second >= 1) !== (factor >= 1)
+    const tooThick = model.wireDiameterMm > ZIMMERLI_THICKEST_WIRE_MM
+    const says = `Fatigue safety factor ${figure(factor)} (Goodman through Zimmerli's data, ${model.shotPeened ? 'shot peened' : 'not peened'}, unlimited life)`
+    const other = second === null ? '' : ` By published fractions of tensile strength at ${figure(model.cycles)} strokes it is ${figure(second)}.`
+    return finishCheck(
+      'fatigue',
+      { stop: fatigueCheck.stops(model, state), caution: factor < FATIGUE_CAUTION || differs },
+      factor,
+      1,
+      {
+        stop: tooThick
+          ? `Zimmerli's fatigue data end at ${ZIMMERLI_THICKEST_WIRE_MM} mm wire; a life of ${figure(model.cycles)} strokes cannot be shown for ${model.wireDiameterMm} mm.`
+          : `${says}: under 1, it may break within the life asked for.${other}`,
+        caution: `${says}.${other}`,
+        pass: `${says}.${other}`,
+      },
+    )
+  },
+}
+
+const TEMPERATURE_CAUTION = 0.8
+
+export const temperatureCheck: CompressionCheck = {
+  code: 'temperature',
+  applies: model => !Number.isNaN(model.temperatureC),
+  stops: model => exceeds(model.temperatureC, model.material.temperatureLimitC.value),
+  describe: (model, state) => {
+    const t = model.temperatureC
+    const limit = model.material.temperatureLimitC.value
+    // Music and hard-drawn wire are not for service below freezing (Shigley, Table 10-3).
+    const cold = t < 0 && model.material.family === 'cold-drawn-carbon'
+    return finishCheck(
+      'temperature',
+      { stop: temperatureCheck.stops(model, state), caution: cold || t > TEMPERATURE_CAUTION * limit },
+      t,
+      limit,
+      {
+        stop: `${figure(t)} °C is above the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}).`,
+        caution: cold
+          ? `Cold-drawn carbon wire is not for service below freezing (Shigley, Table 10-3); ${figure(t)} °C is asked for.`
+          : `${figure(t)} °C is over 80 % of the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}): some force will be lost by relaxation.`,
+        pass: `${figure(t)} °C is within the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}).`,
+      },
+    )
+  },
+}
+
+/** Peening: wanted for dynamic duty, workable only where shot reaches between the coils (EN 13906-1, 10.3). */
+export const peeningCheck: CompressionCheck = {
+  code: 'peening',
+  applies: model => model.shotPeened || model.dynamic,
+  stops: () => false,
+  describe: (model, state) => {
+    const gap = statePitchMm(model, state) - model.wireDiameterMm
+    const workable = model.wireDiameterMm > 1 && state.springIndex < 15 && gap > model.wireDiameterMm
+    const rule = 'wire over 1 mm, index under 15, gap between coils over the wire diameter (EN 13906-1)'
+    return finishCheck(
+      'peening',
+      { stop: false, caution: model.shotPeened ? !workable : workable },
+      gap,
+      model.wireDiameterMm,
+      {
+        stop: '',
+        caution: model.shotPeened
+          ? `Shot peening will not work well here: it needs ${rule}; the gap is ${figure(gap)} mm.`
+          : 'Shot peening would lengthen its life: EN 13906-1 asks it for every dynamically loaded spring.',
+        pass: model.shotPeened
+          ? `Shot peening is workable: ${rule}.`
+          : `Not shot peened; peening would not be workable here: it needs ${rule}.`,
+      },
+      'note',
+    )
+  },
+}
+
+/** Corrosion where the spring lives. */
+export const surroundingsCheck: CompressionCheck = {
+  code: 'surroundings',
+  applies: model => model.context.surroundings !== undefined && model.context.surroundings !== 'dry',
+  stops: () => false,
+  describe: (model) => {
+    const place = model.context.surroundings ?? 'dry'
+    const harsh = place === 'salt' || place === 'chemical'
+    return finishCheck(
+      'surroundings',
+      { stop: false, caution: !model.material.resistsCorrosion || harsh },
+      Number.NaN,
+      Number.NaN,
+      {
+        stop: '',
+        caution: `Surroundings: ${place}. ${model.material.corrosionNote}`,
+        pass: `Surroundings: ${place}. ${model.material.corrosionNote}`,
+      },
+      'caution',
+    )
+  },
+}

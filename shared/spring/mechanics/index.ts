@@ -1,0 +1,23 @@
+export { evaluateCompression } from './evaluate-compression'
+export type { EvaluationContext } from './model'
+export { activeCoilsForRate, rateNPerMm } from './rate'
+export { forceAtStressN, shearStressMpa } from './stress'
+export { bergstraesserFactor, directShearFactor, stressCorrectionFactor, wahlFactor } from './stress-factors'
+export { activeCoilsFor, pitchMm, solidLengthMm, totalCoilsFor, type SolidLengthConvention } from './end-geometry'
+export { wireLengthMm, wireMassG } from './wire-length'
+export { minimumClearanceMm } from './clearance'
+export { growthAtSolidMm, growthPitchMm, outerDiameterAtSolidFixedEndsMm } from './diameter-growth'
+export { criticalBucklingDeflectionMm } from './buckling'
+export { naturalFrequencyHz } from './natural-frequency'
+export { modulusAtTemperatureMpa } from './temperature'
+export { staticLimit } from './static-limits'
+export {
+  gerberAmplitudeMpa, gerberEnduranceMpa, goodmanAmplitudeMpa, goodmanEnduranceMpa, goodmanZimmerliFactor, lifeFraction,
+  lifeFractionFactor, shearUltimateMpa, soderbergFactor, ZIMMERLI_PEENED, ZIMMERLI_UNPEENED,
+} from './fatigue'
+export { meanDiameterToleranceMm } from './tolerances/mean-diameter'
+export { freeLengthToleranceMm, loadToleranceN, parallelismMm, squarenessMm } from './tolerances/load-and-length'
+export type {
+  Check, CheckSeverity, CompressionConditions, CompressionEvaluation, CompressionInput, Duty, FatigueResult, Fit, MaterialValues,
+  PointInput, PointResult, Tolerance,
+} from './types'
