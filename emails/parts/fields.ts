@@ -1,9 +1,13 @@
 import { z } from 'zod'
-import { CURRENCY_CODES } from '../../shared/money/index'
+import { isCurrency } from '../../shared/money/index'
 
 /** An absolute link on our own site, built from the configured origin, never from a header of the request. */
 export const linkField = z.url({ protocol: /^https?$/ }).max(500)
-export const currencyField = z.enum(CURRENCY_CODES as [(typeof CURRENCY_CODES)[number], ...typeof CURRENCY_CODES])
+export const currencyField = z.string().transform((code, context) => {
+  if (isCurrency(code)) return code
+  context.addIssue({ code: 'custom', message: 'not a currency we charge in' })
+  return z.NEVER
+})
 /** Minor units of the currency beside it. */
 export const amountField = z.int().min(0)
 /** A calendar day, YYYY-MM-DD. */

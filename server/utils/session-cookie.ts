@@ -1,6 +1,8 @@
 import type { H3Event } from 'h3'
 
 const NAME = '__Host-sid'
+/** Tells the pages that somebody is signed in; it is no secret and opens nothing. */
+const MARKER = 'auth.token'
 
 /** The secret of the session cookie, or undefined. */
 export const readSessionCookie = (event: H3Event): string | undefined => getCookie(event, NAME)
@@ -8,8 +10,10 @@ export const readSessionCookie = (event: H3Event): string | undefined => getCook
 /** Lax, not strict: the customer must still be signed in when coming back from the payment page. */
 export function setSessionCookie(event: H3Event, secret: string, maxAgeS: number): void {
   setCookie(event, NAME, secret, { httpOnly: true, secure: true, sameSite: 'lax', path: '/', maxAge: maxAgeS })
+  setCookie(event, MARKER, 'cookie', { httpOnly: false, secure: true, sameSite: 'lax', path: '/', maxAge: maxAgeS })
 }
 
 export function clearSessionCookie(event: H3Event): void {
   deleteCookie(event, NAME, { httpOnly: true, secure: true, sameSite: 'lax', path: '/' })
+  deleteCookie(event, MARKER, { httpOnly: false, secure: true, sameSite: 'lax', path: '/' })
 }

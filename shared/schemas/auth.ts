@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { emailSchema, linkTokenSchema } from './shared-fields'
-import { roleSchema } from './roles'
+import { roleSchema, type Role } from './roles'
 
 export const signInBodySchema = z.strictObject({ email: emailSchema, password: z.string().min(1, 'Give your password.').max(256) })
 export const signInLinkBodySchema = z.strictObject({ email: emailSchema })
@@ -17,3 +17,13 @@ export type SessionUser = z.infer<typeof sessionUserSchema>
 
 /** What a used link opened: where the browser goes next. */
 export type UsedLink = { user: SessionUser, orderRef: string | null }
+
+/** A place where the person is signed in. Moments as ISO text. */
+export type SessionRow = { id: string, startedAt: string, lastSeenAt: string, expiresAt: string, isThisOne: boolean }
+
+/** Somebody who can sign in, as an administrator sees them. */
+export type PersonRow = {
+  id: string, name: string, email: string, companyName: string | null, roles: Role[], isDemo: boolean, isDisabled: boolean, hasPassword: boolean,
+  emailConfirmedAt: string | null, liveSessions: number, lastSeenAt: string | null,
+}
+export type PeopleView = { rows: PersonRow[], nextCursor: string | null }
