@@ -48,7 +48,7 @@ export default defineNuxtConfig({
         httpOnlyCookieAttribute: false,
       },
       session: {
-        dataType: { id: 'string', name: 'string', email: 'string', roles: 'Role[]', companyName: 'string | null' },
+        dataType: { id: 'string', name: 'string', email: 'string', roles: "('customer' | 'estimator' | 'supervisor' | 'operator' | 'bookkeeper' | 'admin')[]", companyName: 'string | null' },
         dataResponsePointer: '/user',
       },
     },
@@ -77,6 +77,8 @@ export default defineNuxtConfig({
     trustedProxies: '',
     limits: 'on',
     shopTimeZone: 'Europe/Dublin',
+    // Pages show the shop's times in the shop's zone; set NUXT_PUBLIC_SHOP_TIME_ZONE with NUXT_SHOP_TIME_ZONE.
+    public: { shopTimeZone: 'Europe/Dublin' },
     stripe: { secretKey: '', webhookSecrets: '', host: '', port: '', protocol: 'https', livemode: 'false' },
     smtp: { host: '', port: '587', secure: 'false', user: '', password: '' },
     mail: { from: 'Oxmere Spring Works <orders@oxmere.invalid>', replyTo: '' },

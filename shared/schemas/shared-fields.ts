@@ -1,10 +1,10 @@
 import { z } from 'zod'
+import { COUNTRIES } from '../countries'
 
 /** A calendar day, YYYY-MM-DD, that exists. */
 export const daySchema = z.iso.date('Give a date that exists, such as 2026-12-14.')
 
-/** Country codes we deliver to, with the names shown. */
-export const COUNTRIES = { IE: 'Ireland', BE: 'Belgium', DE: 'Germany', FR: 'France', NL: 'Netherlands', GB: 'United Kingdom', US: 'United States' } as const
+export { COUNTRIES }
 export const countrySchema = z.enum(Object.keys(COUNTRIES) as [keyof typeof COUNTRIES, ...(keyof typeof COUNTRIES)[]], 'Choose a country from the list.')
 
 /** One e-mail address, lower-cased; never a list of them. */
