@@ -43,12 +43,13 @@ export type LoadingView = { from: string, to: string, timeZone: string, centres:
 export const benchRecordBodySchema = z.strictObject({
   id: z.uuid(),
   act: z.enum(BENCH_ACTS),
-  good: z.int().min(0).max(1_000_000).default(0),
-  scrap: z.int().min(0).max(1_000_000).default(0),
-  wireKg: z.number().min(0).max(100_000).optional(),
+  /** Counted since the last record; below nought takes back a miscount. */
+  good: z.int('A whole number of springs.').min(-1_000_000).max(1_000_000, 'At most 1 000 000.').default(0),
+  scrap: z.int('A whole number of springs.').min(-1_000_000).max(1_000_000, 'At most 1 000 000.').default(0),
+  wireKg: z.number('Give the mass in kg as a number.').min(0, 'Not below nought.').max(100_000, 'At most 100 000 kg.').optional(),
   /** Corrections to the clock, given at the finish. */
-  setUpMinutes: z.number().min(0).max(100_000).optional(),
-  runMinutes: z.number().min(0).max(100_000).optional(),
+  setUpMinutes: z.number('Give the minutes as a number.').min(0, 'Not below nought.').max(100_000, 'At most 100 000 minutes.').optional(),
+  runMinutes: z.number('Give the minutes as a number.').min(0, 'Not below nought.').max(100_000, 'At most 100 000 minutes.').optional(),
   note: z.string().trim().max(500).default(''),
 })
 export type BenchRecordBody = z.input<typeof benchRecordBodySchema>

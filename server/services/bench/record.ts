@@ -60,6 +60,7 @@ async function writeRecord(tx: Transaction, context: ServiceContext, actor: Acto
   })
   const good = past.reduce((sum, row) => sum + row.good, record.good)
   const scrap = past.reduce((sum, row) => sum + row.scrap, record.scrap)
+  if (good < 0 || scrap < 0) throw invalid(good < 0 ? 'good' : 'scrap', 'More is taken away than was counted.')
   const clock = readClock([...past, { act: record.act, at: context.now }], context.now)
 
   if (record.act === 'finish') await finishOperation(tx, context, { operation, job, record, good, scrap, clock })
