@@ -40,8 +40,9 @@ export function pitchMm(spring: DrawnSpring, lengthMm: number): number {
 /** Place along the axis, in mm from the left face, of the wire's centre after so many turns. */
 export type CentreLine = (turns: number) => number
 
-/** Cubic from (0, a) with slope m to (1, b) with slope s, at u; slopes are per unit of u. */
-function blend(u: number, a: number, m: number, b: number, s: number): number {
+/** Cubic from (0, a) with slope m to (1, b) with slope `slope`, at u; slopes are per unit of u. Steeper than three rises it would dip. */
+function blend(u: number, a: number, m: number, b: number, slope: number): number {
+  const s = Math.min(slope, 3 * (b - a))
   const u2 = u * u
   const u3 = u2 * u
   return a + (b - a) * (3 * u2 - 2 * u3) + m * (u3 - 2 * u2 + u) + s * (u3 - u2)

@@ -131,7 +131,7 @@ export function pressMoving(layout: PressLayout, lengthMm: number): { under: Sha
   const xPx = chartX(place, lengthMm)
   const yPx = chartY(frame, forceAtN(charted, lengthMm))
   const under: Shape[] = [
-    axisAcross(x0Px - 22, xPx + 26, axisYPx),
+    axisAcross(x0Px - 22, Math.min(xPx + 26, layout.widthPx - 2), axisYPx),
     ...compressionShapes(spring, lengthMm, place),
     lineV('plate', xPx + 1, topPx - 10, bottomPx + 10),
   ]
