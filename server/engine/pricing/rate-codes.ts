@@ -115,6 +115,15 @@ export const RATE_CODES = [
   row('gate.material.stainless', 'Stainless wire quoted at once', 'yes is 1', 'gate', '1', 'policy'),
   row('gate.material.copper-alloy', 'Copper alloy wire quoted at once', 'yes is 1', 'gate', '0', 'policy'),
   row('gate.material.other', 'Any other wire quoted at once', 'yes is 1', 'gate', '0', 'policy'),
+  row('gate.surroundings.salt', 'Salt surroundings quoted at once', 'yes is 1', 'gate', '0', 'policy'),
+  row('gate.surroundings.food', 'Food surroundings quoted at once', 'yes is 1', 'gate', '0', 'policy'),
+  row('gate.surroundings.chemical', 'Chemical surroundings quoted at once', 'yes is 1', 'gate', '0', 'policy'),
+  // The cheapest spring lies close to the limits of stress, clearance and fit by its nature, so these cautions do not stop it.
+  row('gate.caution.clearance', 'Quoted at once though close to touching coils', 'yes is 1', 'gate', '1', 'policy'),
+  row('gate.caution.stress', 'Quoted at once though close to an allowed stress', 'yes is 1', 'gate', '1', 'policy'),
+  row('gate.caution.fit', 'Quoted at once though close in bore or over rod', 'yes is 1', 'gate', '1', 'policy'),
+  row('gate.caution.stock', 'Quoted at once though its wire is not stocked', 'yes is 1', 'gate', '1', 'policy'),
+  row('gate.caution.other', 'Quoted at once with any other caution', 'yes is 1', 'gate', '0', 'policy'),
 ] as const
 
 /** Code of a rate; the same text is the key of the database row. */

@@ -1,0 +1,3 @@
+export { judgeGate } from './judge'
+export { cautionGroupOf, materialFamilyOf, readGatePolicy, type CautionGroup, type GatePolicy, type MaterialFamily } from './policy'
+export type { GateCheck, GateCode, GateDesign, GateReason, GateRequirement, GateRung } from './types'
