@@ -20,7 +20,7 @@ export type OrderMove = {
   set?: Partial<Omit<typeof orders.$inferInsert, 'id' | 'state' | 'version' | 'updatedAt'>>
 }
 
-const WORDS: Readonly<Partial<Record<OrderState, string>>> = { 'deposit-paid': 'paid', 'in-work': 'in work' }
+const WORDS: Readonly<Partial<Record<OrderState, string>>> = { 'enquiry': 'still with our estimator', 'deposit-paid': 'paid', 'in-work': 'in work' }
 const wordsOf = (state: OrderState) => WORDS[state] ?? state
 
 /**
@@ -35,8 +35,8 @@ export async function moveOrder(tx: Transaction, move: OrderMove): Promise<{ ver
   }
   const [current] = await tx.select({ state: orders.state, version: orders.version }).from(orders).where(eq(orders.id, move.orderId)).for('update')
   if (!current) throw notFound('order')
-  if (move.version !== undefined && current.version !== move.version) throw stale('order')
   if (!move.from.includes(current.state)) throw conflict(`This order is ${wordsOf(current.state)}, so that is no longer possible.`)
+  if (move.version !== undefined && current.version !== move.version) throw stale('order')
 
   const version = current.version + 1
   await tx.update(orders).set({ ...move.set, state: move.to, version, updatedAt: move.now }).where(eq(orders.id, move.orderId))
