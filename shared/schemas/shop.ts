@@ -1,5 +1,6 @@
 import { z } from 'zod'
-import { versionSchema } from './shared-fields'
+import { daySchema, versionSchema } from './shared-fields'
+import type { StoredDesign } from './quote'
 
 export const CENTRE_KINDS = ['coiling', 'stress-relief', 'end-grinding', 'inspection', 'packing'] as const
 /** An operation is done at a work centre of its own kind. */
@@ -62,3 +63,8 @@ export type BenchSheet = {
   freeLengthMm: number, pitchMm: number, wireLengthMm: number, hand: string, ends: string, stressRelief: string, wirePlannedKg: number,
   loads: { lengthMm: number, forceN: number }[],
 }
+/** One job's own page. */
+export type JobSheetView = JobView & {
+  timeZone: string, design: StoredDesign | null, sheet: BenchSheet | null, centres: CentreView[], history: { at: string, who: string, words: string }[], cautions: string[],
+}
+export const loadingQuerySchema = z.strictObject({ from: daySchema.optional(), days: z.coerce.number().int().min(1).max(60).default(14) })

@@ -21,6 +21,8 @@ export const jobs = pgTable('jobs', {
   state: jobState('state').notNull().default('to-plan'),
   version: integer('version').notNull().default(1),
   promisedOn: date('promised_on', { mode: 'string' }),
+  /** The day of leaving that the customer was last told. */
+  toldOn: date('told_on', { mode: 'string' }),
   waitsForWire: boolean('waits_for_wire').notNull().default(false),
   createdAt: createdAt(),
   finishedAt: moment('finished_at'),
