@@ -9,6 +9,7 @@ const FRAMEWORKS = ['vue', 'vue-router', 'pinia', 'nuxt', '#imports', '#app', 'h
 /**
  * @param {string} why
  * @param {string[]} patterns in the manner of .gitignore
+ * @returns {{ 'no-restricted-imports': ['error', object] }}
  */
 function forbidImports(why, patterns) {
   return { 'no-restricted-imports': ['error', { patterns: [{ group: patterns, message: why }] }] }

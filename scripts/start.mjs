@@ -7,10 +7,9 @@ import { Processes } from './lib/processes.mjs'
 import { START_LOCK, assertNodeVersion, makeDataFolder } from './lib/project.mjs'
 import { PlainError, describeFailure, readLogTail, say } from './lib/say.mjs'
 import { RECORD_FILE, startShop } from './lib/start-shop.mjs'
+import { onStopRequest } from './lib/stop-requests.mjs'
 
 /** @typedef {{ name: string, how: string, logFile: string }} DeadPart */
-
-const STOP_SIGNALS = /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])
 
 async function main() {
   assertNodeVersion()
@@ -37,7 +36,7 @@ async function runUntilStopped(ports) {
   let end = () => {}
   /** @type {Promise<DeadPart | null>} */
   const ended = new Promise((resolve) => (end = resolve))
-  for (const signal of STOP_SIGNALS) process.on(signal, () => end(null))
+  onStopRequest(() => end(null))
   const processes = new Processes({ recordFile: RECORD_FILE, onUnexpectedExit: (name, how, logFile) => end({ name, how, logFile }) })
   const started = startShop(ports, processes, stopping.signal)
   try {

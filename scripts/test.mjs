@@ -4,6 +4,7 @@ import { join } from 'node:path'
 import { ensureNpmPackages } from './lib/npm-packages.mjs'
 import { DATA_FOLDER, assertNodeVersion, makeDataFolder } from './lib/project.mjs'
 import { PlainError, describeFailure, say } from './lib/say.mjs'
+import { onStopRequest } from './lib/stop-requests.mjs'
 import { STAGES, runStage } from './lib/test-stages.mjs'
 
 /** @typedef {import('./lib/test-reports.mjs').StageResult & { name: string, seconds: number }} TimedResult */
@@ -44,7 +45,7 @@ async function main() {
   const stages = chooseStages(process.argv.slice(2))
   makeDataFolder()
   const stopping = new AbortController()
-  for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) process.on(signal, () => stopping.abort())
+  onStopRequest(() => stopping.abort())
   await ensureNpmPackages({ logFile: join(DATA_FOLDER, 'logs', 'npm-ci.log'), signal: stopping.signal })
   /** @type {TimedResult[]} */
   const results = []

@@ -152,12 +152,15 @@ export async function killCluster(postgres) {
  * @param {string} database
  * @param {string} sql
  */
-export async function runAdminSql({ programs, port, adminPassword }, database, sql) {
+export async function runAdminSql({ folder, programs, port, adminPassword }, database, sql) {
   const { exitCode, output, errors } = await run(
     join(programs.folder, 'psql'),
     ['-X', '-q', '-A', '-t', '-v', 'ON_ERROR_STOP=1', '-h', '127.0.0.1', '-p', String(port), '-U', ADMIN_ROLE, '-d', database],
     { env: { PATH: process.env.PATH, PGPASSWORD: adminPassword, PGCONNECT_TIMEOUT: '10' }, cwd: '/', input: sql },
   )
+  if (/password authentication failed/.test(errors)) {
+    throw new PlainError(`The passwords in .data/secrets.json do not belong to the database in ${folder}. Put the right file back, or delete that folder to begin afresh (its demo data is lost).`)
+  }
   if (exitCode !== 0) throw new PlainError(`PostgreSQL refused a set-up step: ${errors.trim()}`)
   return output.trim()
 }

@@ -1,4 +1,4 @@
-import { mkdirSync } from 'node:fs'
+import { chmodSync, existsSync, mkdirSync } from 'node:fs'
 import { holdFreePorts } from './ports.mjs'
 import { buildAppEnv, buildMailInboxEnv, buildMigrationEnv, buildStripeFakeEnv, siteUrl } from './app-env.mjs'
 import { APP_ENTRY } from './build-stamp.mjs'
@@ -43,6 +43,8 @@ export async function prepareDatabase(context) {
   const options = { cwd: projectPath(), env: buildMigrationEnv(surroundings), signal }
   await runLogged('The migration of the database', process.execPath, [...TYPESCRIPT, 'server/database/migrate.ts'], { ...options, logFile: logFile('migrate') })
   await runLogged('Filling the demo shop', process.execPath, [...TYPESCRIPT, 'server/database/seed/main.ts'], { ...options, logFile: logFile('seed') })
+  // The seed writes with the usual rights; the passwords in this file are nobody else's business.
+  if (existsSync(surroundings.demoSignInsFile)) chmodSync(surroundings.demoSignInsFile, 0o600)
   return postgres
 }
 
