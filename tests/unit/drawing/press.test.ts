@@ -4,6 +4,7 @@ import { drawnSolidLengthMm } from '#shared/spring/drawing/drawn-spring'
 import { figureShapes } from '#shared/spring/drawing/figure'
 import { chartX, chartY, forceAtN, forceTicks } from '#shared/spring/drawing/load-chart'
 import { clampLength, layoutPress, pressMoving, sliderPlace, type PressOptions } from '#shared/spring/drawing/press'
+import { pressSteps } from '#shared/spring/drawing/press-steps'
 import { svgMarkup } from '#shared/spring/drawing/svg'
 import { tinyShapes } from '#shared/spring/drawing/tiny'
 import { chartRows, figureSentence, readingSentence, readPress } from '#shared/spring/drawing/words'
@@ -179,5 +180,34 @@ describe('the drawing as SVG text', () => {
 
   it('refuses a look that has no ink', () => {
     expect(() => svgMarkup({ widthPx: 1, heightPx: 1, name: '', shapes: [{ kind: 'path', look: 'unheard-of', d: 'M0 0' }] })).toThrow('unheard-of')
+  })
+})
+
+describe('the stops of the slider', () => {
+  const { charted } = lay()
+
+  it('stops at every tenth of a millimetre from the free length down, and at the solid length last', () => {
+    const steps = pressSteps(charted, 'metric')
+    expect(steps.last).toBe(344)
+    expect([steps.lengthMmAt(344), steps.lengthMmAt(343), steps.lengthMmAt(0)].map((value) => Number(value.toFixed(6)))).toEqual([60, 59.9, 25.625])
+    expect(steps.lengthMmAt(steps.indexOf(42))).toBeCloseTo(42, 9)
+    expect([steps.indexOf(0), steps.indexOf(99)]).toEqual([0, 344])
+  })
+
+  it('stops at round inches for inch units and in about twenty steps for reduced motion', () => {
+    const inch = pressSteps(charted, 'inch')
+    expect((60 - inch.lengthMmAt(inch.last - 1)) / 25.4).toBeCloseTo(0.005, 9)
+    expect(pressSteps(charted, 'metric', true).last).toBe(18)
+  })
+
+  it('always ends at both lengths and rises', () => {
+    fc.assert(fc.property(fc.double({ min: 0.01, max: 600, noNaN: true }), fc.double({ min: 0, max: 1, noNaN: true }), fc.constantFrom('metric', 'inch'), fc.boolean(), (freeLengthMm, share, units, coarse) => {
+      const solidLengthMm = freeLengthMm * share
+      const steps = pressSteps({ freeLengthMm, solidLengthMm }, units, coarse)
+      expect(steps.lengthMmAt(steps.last)).toBe(freeLengthMm)
+      expect(steps.lengthMmAt(0)).toBeCloseTo(solidLengthMm, 9)
+      expect(steps.last).toBeLessThanOrEqual(350)
+      expect(steps.lengthMmAt(1)).toBeGreaterThanOrEqual(steps.lengthMmAt(0))
+    }))
   })
 })
