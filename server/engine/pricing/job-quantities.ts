@@ -1,4 +1,4 @@
-import { wireBandOf } from './wire-band'
+import { wireBandOf, type WireBand } from './wire-band'
 import { isAqlPercent, samplingPlanFor, type AqlPercent } from './sampling'
 import { PriceError } from './errors'
 import type { NumberRates } from './rates'
@@ -45,57 +45,109 @@ export function aqlOf(rates: NumberRates): AqlPercent {
   return aql
 }
 
-function wireQuantities(design: PricedDesign, wire: PricedWireProduct, quantity: number, rates: NumberRates) {
-  const kgPerSpring = design.massG / 1000
-  const kgPerMetre = design.massG / design.wireLengthMm
-  const runningKg = kgPerSpring * quantity * (1 + rates['wire.running-scrap-percent'] / 100)
-  const setUpKg = Math.max(rates['wire.setup-scrap-pieces'] * kgPerSpring, rates['wire.setup-scrap-metres'] * kgPerMetre)
-  const coilKg = Number(wire.smallestPurchaseKg)
-  const wireCoils = coilKg > 0 ? Math.max(1, wholeUp((runningKg + setUpKg) / coilKg)) : 1
-  const wireUsedKg = runningKg + setUpKg + wireCoils * rates['wire.coil-end-metres'] * kgPerMetre
-
-  // The unused rest of a purchase is charged, unless the size is one the shop keeps anyway.
-  const isStocked = wire.isStockSize ?? Number(wire.stockKg) > 0
-  const isSmallestPurchase = !isStocked && coilKg > wireUsedKg
-  return { wireUsedKg, wireCoils, isSmallestPurchase, wireChargedKg: isSmallestPurchase ? coilKg : wireUsedKg }
+/** The rates of one order by plain name, read once: the sizing asks for the quantities of thousands of springs. */
+export interface JobRates {
+  quantity: number
+  sampleSize: number
+  piecesCoiled: number
+  runningFactor: number
+  setUpScrapPieces: number
+  setUpScrapMetres: number
+  coilEndMetres: number
+  furnaceBatchKg: number
+  furnaceHandlingMinutes: number
+  grindingSetUpHours: number
+  firstOffHours: number
+  measuringHours: number
+  packingMinutesPerOrder: number
+  packingMinutesPerKg: number
+  byBand: Readonly<Record<WireBand, BandRates>>
 }
 
-function coilingQuantities(design: PricedDesign, quantity: number, options: PriceOptions, rates: NumberRates) {
-  const band = wireBandOf(design.wireDiameterMm)
-  const feedMinutes = design.wireLengthMm / 1000 / rates[`coiling.feed.${band}`]
-  const formingMinutes = rates[`coiling.forming-seconds.${band}`] / 60
-  const piecesPerMinute = Math.min(rates[`coiling.cap.${band}`], 1 / (feedMinutes + formingMinutes))
-  const piecesCoiled = wholeUp(quantity * (1 + rates['wire.running-scrap-percent'] / 100))
+interface BandRates {
+  setUpHours: number
+  feedMPerMinute: number
+  formingMinutes: number
+  capPerMinute: number
+  /** Part of the scheduled hour that makes springs, 0 to 1. */
+  efficiency: number
+  groundPerHour: number
+}
+
+/** Reads what an order of `quantity` springs needs of a book. Throws PriceError where the sample cannot be found. */
+export function readJobRates(quantity: number, options: PriceOptions, rates: NumberRates): JobRates {
+  const { sampleSize } = samplingPlanFor(quantity, aqlOf(rates))
+  const runningFactor = 1 + rates['wire.running-scrap-percent'] / 100
+  const bandRates = (band: WireBand): BandRates => ({
+    setUpHours: rates[`coiling.setup-hours.${band}`] * rates[`coiling.setup-factor.grade-${options.toleranceGrade}`],
+    feedMPerMinute: rates[`coiling.feed.${band}`],
+    formingMinutes: rates[`coiling.forming-seconds.${band}`] / 60,
+    capPerMinute: rates[`coiling.cap.${band}`],
+    efficiency: rates['coiling.efficiency-percent'] / 100,
+    groundPerHour: rates[`grinding.pieces-per-hour.${band}`],
+  })
   return {
-    piecesCoiled,
-    coilingSetUpHours: rates[`coiling.setup-hours.${band}`] * rates[`coiling.setup-factor.grade-${options.toleranceGrade}`],
-    coilingRunHours: piecesCoiled / piecesPerMinute / 60 / (rates['coiling.efficiency-percent'] / 100),
+    quantity,
+    sampleSize,
+    runningFactor,
+    piecesCoiled: wholeUp(quantity * runningFactor),
+    setUpScrapPieces: rates['wire.setup-scrap-pieces'],
+    setUpScrapMetres: rates['wire.setup-scrap-metres'],
+    coilEndMetres: rates['wire.coil-end-metres'],
+    furnaceBatchKg: rates['furnace.batch-kg'],
+    furnaceHandlingMinutes: rates['furnace.handling-minutes'],
+    grindingSetUpHours: rates['grinding.setup-hours'],
+    firstOffHours: rates['inspection.first-off-minutes'] / 60,
+    measuringHours: sampleSize * rates['inspection.measurements-per-spring'] * rates['inspection.minutes-per-measurement'] / 60,
+    packingMinutesPerOrder: rates['packing.minutes-per-order'],
+    packingMinutesPerKg: rates['packing.minutes-per-kg'],
+    byBand: { fine: bandRates('fine'), light: bandRates('light'), medium: bandRates('medium'), heavy: bandRates('heavy') },
   }
 }
 
-/** Everything a job of `quantity` springs takes, from the book's numbers. Give a design and wire that were checked. */
-export function calculateJobQuantities(
-  { design, wireProduct, quantity, options }: { design: PricedDesign, wireProduct: PricedWireProduct, quantity: number, options: PriceOptions },
-  rates: NumberRates,
-): JobQuantities {
-  const coiling = coilingQuantities(design, quantity, options, rates)
-  const packedKg = design.massG / 1000 * quantity
-  const needsRelief = design.stressReliefMinutes > 0
-  const batches = needsRelief ? Math.max(1, wholeUp(coiling.piecesCoiled * design.massG / 1000 / rates['furnace.batch-kg'])) : 0
+/** The part of a design that decides how much a job takes. */
+export type QuantifiedDesign = Pick<PricedDesign, 'wireDiameterMm' | 'wireLengthMm' | 'massG' | 'ends' | 'stressReliefMinutes'>
+
+/**
+ * Everything the order takes for one design and wire. Give a design and wire that were checked. For one wire diameter every
+ * quantity stays or grows with the length of wire in the spring.
+ */
+export function calculateJobQuantities(design: QuantifiedDesign, wire: PricedWireProduct, job: JobRates): JobQuantities {
+  const band = job.byBand[wireBandOf(design.wireDiameterMm)]
+  const kgPerSpring = design.massG / 1000
+  const kgPerMetre = design.massG / design.wireLengthMm
+
+  const runningKg = kgPerSpring * job.quantity * job.runningFactor
+  const setUpKg = Math.max(job.setUpScrapPieces * kgPerSpring, job.setUpScrapMetres * kgPerMetre)
+  const coilKg = Number(wire.smallestPurchaseKg)
+  const wireCoils = coilKg > 0 ? Math.max(1, wholeUp((runningKg + setUpKg) / coilKg)) : 1
+  const wireUsedKg = runningKg + setUpKg + wireCoils * job.coilEndMetres * kgPerMetre
+  // The unused rest of a purchase is charged, unless the size is one the shop keeps anyway.
+  const isStocked = wire.isStockSize ?? Number(wire.stockKg) > 0
+  const isSmallestPurchase = !isStocked && coilKg > wireUsedKg
+
+  const feedMinutes = design.wireLengthMm / 1000 / band.feedMPerMinute
+  const piecesPerMinute = Math.min(band.capPerMinute, 1 / (feedMinutes + band.formingMinutes))
+  const batches = design.stressReliefMinutes > 0 ? Math.max(1, wholeUp(job.piecesCoiled * kgPerSpring / job.furnaceBatchKg)) : 0
   const grinds = isGround(design)
-  const { sampleSize } = samplingPlanFor(quantity, aqlOf(rates))
+  const packedKg = kgPerSpring * job.quantity
 
   return {
-    ...wireQuantities(design, wireProduct, quantity, rates),
-    ...coiling,
+    wireUsedKg,
+    wireCoils,
+    isSmallestPurchase,
+    wireChargedKg: isSmallestPurchase ? coilKg : wireUsedKg,
+    piecesCoiled: job.piecesCoiled,
+    coilingSetUpHours: band.setUpHours,
+    coilingRunHours: job.piecesCoiled / piecesPerMinute / 60 / band.efficiency,
     stressReliefBatches: batches,
-    stressReliefHours: batches * (design.stressReliefMinutes + rates['furnace.handling-minutes']) / 60,
-    grindingSetUpHours: grinds ? rates['grinding.setup-hours'] : 0,
-    grindingRunHours: grinds ? coiling.piecesCoiled / rates[`grinding.pieces-per-hour.${wireBandOf(design.wireDiameterMm)}`] : 0,
-    sampleSize,
-    firstOffHours: rates['inspection.first-off-minutes'] / 60,
-    measuringHours: sampleSize * rates['inspection.measurements-per-spring'] * rates['inspection.minutes-per-measurement'] / 60,
+    stressReliefHours: batches * (design.stressReliefMinutes + job.furnaceHandlingMinutes) / 60,
+    grindingSetUpHours: grinds ? job.grindingSetUpHours : 0,
+    grindingRunHours: grinds ? job.piecesCoiled / band.groundPerHour : 0,
+    sampleSize: job.sampleSize,
+    firstOffHours: job.firstOffHours,
+    measuringHours: job.measuringHours,
     packedKg,
-    packingMinutes: rates['packing.minutes-per-order'] + rates['packing.minutes-per-kg'] * packedKg,
+    packingMinutes: job.packingMinutesPerOrder + job.packingMinutesPerKg * packedKg,
   }
 }

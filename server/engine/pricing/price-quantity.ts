@@ -2,7 +2,7 @@ import { Decimal, roundToMinor } from '#shared/money/decimal'
 import { assemblePrice } from './assemble'
 import { buildCostLines } from './cost-lines'
 import { PriceError } from './errors'
-import { calculateJobQuantities, type JobQuantities } from './job-quantities'
+import { calculateJobQuantities, readJobRates, type JobQuantities } from './job-quantities'
 import { rateText, readNumberRates } from './rates'
 import { resolveTax } from './tax'
 import type { PlannedMinutes, PricedDesign, PricedQuantity, PricedWireProduct, PriceRequest } from './types'
@@ -58,7 +58,7 @@ export function priceQuantity(request: PriceRequest): PricedQuantity {
   const { book, design, wireProduct, quantity } = request
   assertQuantity(quantity)
   assertPriceable(design, wireProduct)
-  const job = calculateJobQuantities(request, readNumberRates(book))
+  const job = calculateJobQuantities(design, wireProduct, readJobRates(quantity, request.options, readNumberRates(book)))
   const tax = resolveTax(request)
   const minimumOrderMinor = roundToMinor(new Decimal(rateText(book, 'policy.minimum-order')), book.currency)
 
