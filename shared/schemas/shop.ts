@@ -56,7 +56,7 @@ export const benchRecordBodySchema = z.strictObject({
 export type BenchRecordBody = z.input<typeof benchRecordBodySchema>
 
 export type BenchOperation = OperationView & { jobRef: string, customer: string, title: string, quantity: number, goodSoFar: number, scrapSoFar: number, runningSince: string | null, previousDone: boolean }
-export type BenchView = { centre: CentreView, current: BenchOperation | null, next: BenchOperation[], sheet: BenchSheet | null, cautions: string[] }
+export type BenchView = { timeZone: string, centre: CentreView, current: BenchOperation | null, next: BenchOperation[], sheet: BenchSheet | null, cautions: string[] }
 /** Set-up values of the operation now at the work centre. */
 export type BenchSheet = {
   material: string, wireDiameterMm: number, meanDiameterMm: number, outerDiameterMm: number, innerDiameterMm: number, activeCoils: number, totalCoils: number,

@@ -31,7 +31,7 @@ const ACTS: Readonly<Record<BenchAct, { from: readonly OperationState[], to: Ope
 export async function recordBench(context: ServiceContext, operationId: string, record: BenchRecord): Promise<BenchView> {
   const actor = assertRole(context, 'operator', 'supervisor', 'admin')
   const code = await inTransaction(context.db, tx => writeRecord(tx, context, actor, operationId, record))
-  return readBench(context.db, code, context.now)
+  return readBench(context, code)
 }
 
 async function writeRecord(tx: Transaction, context: ServiceContext, actor: Actor, operationId: string, record: BenchRecord): Promise<string> {

@@ -1,7 +1,7 @@
 import { and, asc, eq, inArray, ne, sql } from 'drizzle-orm'
 import type { BenchOperation, BenchView, CentreView } from '#shared/schemas/shop'
 import { benchRecords, jobs, operations, orders, quotePrices, quotes, workCentres } from '../../database/schema'
-import { assertRole, type Queryable, type ServiceContext } from '../context'
+import { assertRole, type ServiceContext } from '../context'
 import { notFound } from '../errors'
 import { operationColumns, toOperationView } from '../jobs/operation-columns'
 import { cautionsFor } from './cautions'
@@ -21,11 +21,11 @@ export const toCentreView = (row: typeof workCentres.$inferSelect): CentreView =
  */
 export async function getBench(context: ServiceContext, code: string): Promise<BenchView> {
   assertRole(context, 'operator', 'supervisor', 'admin')
-  return readBench(context.db, code, context.now)
+  return readBench(context, code)
 }
 
 /** The same, for a caller whose rights were checked. */
-export async function readBench(db: Queryable, code: string, now: Date): Promise<BenchView> {
+export async function readBench({ db, now, timeZone }: Pick<ServiceContext, 'db' | 'now' | 'timeZone'>, code: string): Promise<BenchView> {
   const [centre] = await db.select().from(workCentres).where(eq(workCentres.code, code))
   if (!centre) throw notFound('work centre')
   const rows = await db.select({
@@ -52,7 +52,7 @@ export async function readBench(db: Queryable, code: string, now: Date): Promise
   })
   const first = rows[0]
   return {
-    centre: toCentreView(centre), current: views[0] ?? null, next: views.slice(1),
+    timeZone, centre: toCentreView(centre), current: views[0] ?? null, next: views.slice(1),
     sheet: first?.design ? toSheet(first.design, Number(first.wireKg)) : null, cautions: first ? cautionsFor(first.kind) : [],
   }
 }
