@@ -13,7 +13,7 @@ import type { MaterialCode } from '../../../shared/spring/codes'
 import { DEMO_COMPANIES, DEMO_PEOPLE } from './demo-people'
 import { DEMO_CENTRES, DEMO_HOLIDAYS, DEMO_WIRE_PRICES, demoPricePerKg, demoSmallestPurchaseKg, demoStockKg } from './demo-shop'
 
-const CURRENCY = 'EUR'
+const CURRENCY = 'eur'
 const SEED_LOCK = 728_115
 
 async function seedPeople(tx: Transaction): Promise<void> {
