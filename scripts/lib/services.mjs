@@ -1,4 +1,4 @@
-import { chmodSync, existsSync, mkdirSync } from 'node:fs'
+import { mkdirSync } from 'node:fs'
 import { holdFreePorts } from './ports.mjs'
 import { buildAppEnv, buildMailInboxEnv, buildMigrationEnv, buildStripeFakeEnv, siteUrl } from './app-env.mjs'
 import { APP_ENTRY } from './build-stamp.mjs'
@@ -43,8 +43,6 @@ export async function prepareDatabase(context) {
   const options = { cwd: projectPath(), env: buildMigrationEnv(surroundings), signal }
   await runLogged('The migration of the database', process.execPath, [...TYPESCRIPT, 'server/database/migrate.ts'], { ...options, logFile: logFile('migrate') })
   await runLogged('Filling the demo shop', process.execPath, [...TYPESCRIPT, 'server/database/seed/main.ts'], { ...options, logFile: logFile('seed') })
-  // The seed writes with the usual rights; the passwords in this file are nobody else's business.
-  if (existsSync(surroundings.demoSignInsFile)) chmodSync(surroundings.demoSignInsFile, 0o600)
   return postgres
 }
 
@@ -74,7 +72,7 @@ export async function defineServices(context, postgres) {
   /** @type {Record<ServiceName, Service>} */
   const services = {
     database: defineService(() => startCluster(cluster, processes), { running: postgres, kill: killCluster }),
-    'stripe-fake': node('the Stripe fake', 'stripe-fake', [...TYPESCRIPT, 'tests/fakes/stripe/main.ts'], buildStripeFakeEnv(surroundings), `http://127.0.0.1:${ports.stripeFake}/health`),
+    'stripe-fake': node('the Stripe fake', 'stripe-fake', [...TYPESCRIPT, 'tests/fakes/stripe/main.ts'], buildStripeFakeEnv(surroundings), `http://127.0.0.1:${ports.stripeFake}/_fake/health`),
     mail: node('the mail inbox', 'mail', ['scripts/mail-inbox.mjs'], buildMailInboxEnv(surroundings), `http://127.0.0.1:${ports.mailWeb}/api/healthz`),
     app: node('the app', 'app', [APP_ENTRY], buildAppEnv(surroundings), `${siteUrl(surroundings)}/api/health`),
     'second-app': node('the second app', 'second-app', [APP_ENTRY], buildAppEnv(surroundings, secondAppPort), `http://127.0.0.1:${secondAppPort}/api/health`),
