@@ -25,7 +25,7 @@ export function describeAssumptions(model: CompressionModel, state: CompressionS
   if (!isWithinToleranceScope(model, state)) said.push('EN 15800 publishes no tolerances for this size: none are given.')
   if (model.cycles > 0) {
     said.push(`Fatigue: steel wire to ${ZIMMERLI_THICKEST_WIRE_MM} mm, Zimmerli's data for unlimited life; corrosion and surge not counted.`)
-    if (!Number.isNaN(state.shortestLengthMm) && state.longestLengthMm === state.freeLengthMm) {
+    if (!Number.isNaN(state.shortestLengthMm) && Number.isNaN(state.longestLengthMm)) {
       said.push('With one working point the spring is taken to be released fully in every stroke.')
     }
   }

@@ -82,11 +82,10 @@ function pointLengthMm(point: PointInput, state: CompressionState): number {
   return state.freeLengthMm - point.deflectionMm
 }
 
-// With one point the spring works from free: the longest length is the free one.
 function placePoints(state: CompressionState, lengths: readonly number[]): void {
   if (lengths.length === 0) return
   state.shortestLengthMm = Math.min(...lengths)
-  state.longestLengthMm = lengths.length === 1 ? Math.max(state.freeLengthMm, ...lengths) : Math.max(...lengths)
+  state.longestLengthMm = lengths.length === 1 ? Number.NaN : Math.max(...lengths)
   state.ordered = lengths.every((length, i) => i === 0 || length <= (lengths[i - 1] ?? length))
 }
 

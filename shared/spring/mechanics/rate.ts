@@ -11,7 +11,8 @@ export interface RateInput {
  * 1 % of the exact rate to 8 degrees of pitch angle.
  */
 export function rateNPerMm({ shearModulusMpa: G, wireDiameterMm: d, meanDiameterMm: D, activeCoils: n }: RateInput): number {
-  return (G * d ** 4) / (8 * D ** 3 * n)
+  // Products, not powers: this runs in the inner loop of sizing.
+  return (G * d * d * d * d) / (8 * D * D * D * n)
 }
 
 /** Active coils that give a rate: n = G d^4 / (8 D^3 R). */
@@ -22,5 +23,5 @@ export function activeCoilsForRate(input: {
   readonly rateNPerMm: number
 }): number {
   const { shearModulusMpa: G, wireDiameterMm: d, meanDiameterMm: D, rateNPerMm: R } = input
-  return (G * d ** 4) / (8 * D ** 3 * R)
+  return (G * d * d * d * d) / (8 * D * D * D * R)
 }

@@ -20,7 +20,7 @@ export interface CompressionState {
   solidLengthMm: number
   minimumClearanceMm: number
   solidForceN: number
-  /** Shortest and longest working lengths; NaN where there is no point. With one point the longest is the free length. */
+  /** Shortest and longest working lengths; NaN where there is no point. The longest is NaN with one point: it works from free. */
   shortestLengthMm: number
   longestLengthMm: number
   /** False where the points are not in order of rising force. */
@@ -66,6 +66,11 @@ export function fillState(
 /** Force at a length, N. */
 export function forceAtLengthN(state: CompressionState, lengthMm: number): number {
   return state.rateNPerMm * (state.freeLengthMm - lengthMm)
+}
+
+/** Least working force, N; zero where the spring works from free. */
+export function leastForceN(state: CompressionState): number {
+  return Number.isNaN(state.longestLengthMm) ? 0 : forceAtLengthN(state, state.longestLengthMm)
 }
 
 /** Greatest working force, N; NaN without a point. */

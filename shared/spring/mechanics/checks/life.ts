@@ -3,7 +3,7 @@ import {
 } from '../fatigue'
 import { figure } from '../figure'
 import type { CompressionModel } from '../model'
-import { forceAtLengthN, greatestForceN, statePitchMm, type CompressionState } from '../state'
+import { greatestForceN, leastForceN, statePitchMm, type CompressionState } from '../state'
 import { shearStressMpa } from '../stress'
 import { stressCorrectionFactor } from '../stress-factors'
 import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
@@ -16,7 +16,7 @@ export function greatestCorrectedStressMpa(model: CompressionModel, state: Compr
 
 export function leastCorrectedStressMpa(model: CompressionModel, state: CompressionState): number {
   return stressCorrectionFactor(model.method, state.springIndex)
-    * shearStressMpa(forceAtLengthN(state, state.longestLengthMm), state.meanDiameterMm, model.wireDiameterMm)
+    * shearStressMpa(leastForceN(state), state.meanDiameterMm, model.wireDiameterMm)
 }
 
 /** Goodman safety factor on Zimmerli's data between the working loads. */

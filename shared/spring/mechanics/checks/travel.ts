@@ -1,5 +1,8 @@
 import { figure } from '../figure'
+import type { CompressionState } from '../state'
 import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
+
+const greatestLengthMm = (state: CompressionState) => (Number.isNaN(state.longestLengthMm) ? state.shortestLengthMm : state.longestLengthMm)
 
 /** Points in order, within the free length and above solid; the free length above solid. */
 export const orderCheck: CompressionCheck = {
@@ -8,7 +11,7 @@ export const orderCheck: CompressionCheck = {
   stops: (_, state) =>
     !state.ordered
     || !exceeds(state.freeLengthMm, state.solidLengthMm)
-    || exceeds(state.longestLengthMm, state.freeLengthMm)
+    || exceeds(greatestLengthMm(state), state.freeLengthMm)
     || fallsShort(state.shortestLengthMm, state.solidLengthMm),
   describe: (model, state) => {
     const L0 = figure(state.freeLengthMm)
@@ -19,9 +22,9 @@ export const orderCheck: CompressionCheck = {
     if (!exceeds(state.freeLengthMm, state.solidLengthMm)) {
       stop = `The free length (${L0} mm) is no longer than the solid length (${Lc} mm): there is no travel.`
       value = state.freeLengthMm
-    } else if (exceeds(state.longestLengthMm, state.freeLengthMm)) {
-      stop = `A working length of ${figure(state.longestLengthMm)} mm is longer than the free length (${L0} mm).`
-      value = state.longestLengthMm
+    } else if (exceeds(greatestLengthMm(state), state.freeLengthMm)) {
+      stop = `A working length of ${figure(greatestLengthMm(state))} mm is longer than the free length (${L0} mm).`
+      value = greatestLengthMm(state)
       limit = state.freeLengthMm
     } else if (fallsShort(state.shortestLengthMm, state.solidLengthMm)) {
       stop = `A working length of ${figure(state.shortestLengthMm)} mm is under the solid length (${Lc} mm): the coils meet first.`

@@ -1,0 +1,4 @@
+export * from './codes'
+export * from './materials'
+export * from './mechanics'
+export * from './sizing'
