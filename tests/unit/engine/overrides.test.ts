@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { applyOverrides, priceQuantity, PriceError, type OverriddenPrice, type PriceLineCode } from '#server/engine/pricing'
+import { isBelowFloor } from '#server/engine/pricing/totals'
 import { aBook, aRequest } from './factories'
 
 const priced = priceQuantity(aRequest())
@@ -59,6 +60,11 @@ describe('an estimator’s changes', () => {
     expect(lineOf(low, 'margin')).toMatchObject({ rate: '10', overrideReason: 'first order of a large customer', computedAmountMinor: computedOf('margin') })
     expect(applyOverrides(priced, [], { percent: '15', reason: 'at the floor' }).isBelowMarginFloor).toBe(false)
     expect(applyOverrides(priced, [], { percent: '14.5', reason: 'under it' }).isBelowMarginFloor).toBe(true)
+  })
+
+  it('do not call the rounding of the price a breach of the floor', () => {
+    const at = (marginMinor: number, netMinor: number) => isBelowFloor({ marginMinor, netMinor, floorPercent: '15', currency: 'eur' })
+    expect([at(1500, 10_000), at(1499, 10_000), at(1500, 10_006)]).toEqual([false, true, false])
   })
 
   it('take a margin amount to the cent', () => {

@@ -123,6 +123,10 @@ describe('the earliest slot', () => {
     const slot = (durationMinutes: number) => earliestSlot({ calendar: dublin(), busy, durationMinutes, notBeforeMs: at('2026-12-07T06:00:00Z') })
     expect(iso(slot(120).startMs)).toBe('2026-12-07T08:00:00.000Z')
     expect(iso(slot(121).startMs)).toBe('2026-12-07T12:00:00.000Z')
+    // A gap of exactly the time needed is enough.
+    expect(iso(earliestSlot({ calendar: dublin(), busy, durationMinutes: 120, notBeforeMs: at('2026-12-07T08:00:00Z') }).startMs)).toBe('2026-12-07T08:00:00.000Z')
+    // Starts are on the whole minute, never before the time asked for.
+    expect(iso(earliestSlot({ calendar: dublin(), busy: [], durationMinutes: 5, notBeforeMs: at('2026-12-07T08:00:00.001Z') }).startMs)).toBe('2026-12-07T08:01:00.000Z')
   })
 
   it('holds its centre through the night', () => {
@@ -200,6 +204,13 @@ describe('placing a job', () => {
     expect(coilerFor(1.1)).toBe('C1')
     expect(coilerFor(2)).toBe('C2')
     expect(codeOf(() => coilerFor(9))).toBe('no-centre')
+  })
+
+  it('prefers being done sooner to starting sooner', () => {
+    const early = centre('A', 'coiling', null, dublin({ shiftEndMinute: 9 * 60 }))
+    const late = centre('B', 'coiling', null, dublin({ shiftStartMinute: 9 * 60 }))
+    const placed = placeJob({ operations: operations.slice(0, 1), centres: [early, late], busyByCentre: {}, wireDiameterMm: 2, notBeforeMs: at('2026-12-07T06:00:00Z') })
+    expect(placed.operations[0]).toMatchObject({ centreId: 'B', endMs: at('2026-12-07T11:00:00Z') })
   })
 
   it('keeps every centre to one operation at a time and every job in order, job after job', () => {

@@ -1,3 +1,5 @@
+import { readdirSync, readFileSync } from 'node:fs'
+import { fileURLToPath } from 'node:url'
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import {
@@ -150,5 +152,13 @@ describe('deposit and balance', () => {
     expect(codeOf(() => assertChargeable(100_000_000, 'usd'))).toBe('amount-too-large')
     expect(() => assertChargeable(100_000_000, 'usd')).toThrow('$999\u202F999.99')
     expect(codeOf(() => splitDeposit(-1, '40', 'eur'))).toBe('amount-negative')
+  })
+})
+
+describe('what the browser loads', () => {
+  it('is free of the decimal library unless a page asks for it by its own path', () => {
+    const folder = fileURLToPath(new URL('../../../shared/money/', import.meta.url))
+    const importers = readdirSync(folder).filter((name) => /from '(decimal\.js|\.\/decimal)'/.test(readFileSync(folder + name, 'utf8')))
+    expect(importers).toEqual(['decimal.ts'])
   })
 })
