@@ -73,7 +73,7 @@ function setWebhook(fake: Fake, body: string): object {
   const reader = readJsonBody(body)
   const url = reader.text('url')
   const secrets = reader.texts('secrets')
-  const retryGapsMs = reader.texts('retryGapsMs')?.map(Number)
+  const retryGapsMs = reader.numbers('retryGapsMs')
   const isOff = reader.flag('isOff') ?? false
   reader.done()
   if (url !== undefined) {

@@ -6,6 +6,7 @@ export interface BodyReader {
   number: (name: string) => number | undefined
   flag: (name: string) => boolean | undefined
   texts: (name: string) => string[] | undefined
+  numbers: (name: string) => number[] | undefined
   object: (name: string) => Record<string, unknown> | undefined
   /** Text out of a closed set. */
   oneOf: <T extends string>(name: string, values: readonly T[]) => T | undefined
@@ -46,6 +47,7 @@ export function readJsonBody(body: string): BodyReader {
     number: name => read(name, 'a whole number', (value): value is number => Number.isInteger(value)),
     flag: name => read(name, 'true or false', value => typeof value === 'boolean'),
     texts: name => read(name, 'a list of texts', (value): value is string[] => Array.isArray(value) && value.every(item => typeof item === 'string')),
+    numbers: name => read(name, 'a list of whole numbers', (value): value is number[] => Array.isArray(value) && value.every(item => Number.isInteger(item))),
     object: name => read(name, 'an object', isObject),
     oneOf: <T extends string>(name: string, values: readonly T[]) =>
       read(name, `one of ${values.join(', ')}`, (value): value is T => values.some(known => known === value)),
