@@ -1,0 +1,26 @@
+import type { CompressionEnds, MaterialCode, Surroundings, ToleranceGrade } from '#shared/spring/codes'
+
+/** The choices of the order form in plain words; also how the quote says what was chosen. */
+export const SURROUNDINGS_WORDS: Readonly<Record<Surroundings, string>> = {
+  dry: 'Dry, indoors', damp: 'Damp, indoors', outdoors: 'Outdoors', salt: 'Salt', food: 'Food', chemical: 'Chemicals',
+}
+export const ENDS_WORDS: Readonly<Record<CompressionEnds, string>> = {
+  'closed-ground': 'Closed and ground', 'closed': 'Closed, not ground', 'open': 'Open', 'open-ground': 'Open and ground',
+}
+export const TOLERANCE_WORDS: Readonly<Record<ToleranceGrade, string>> = { 1: 'Grade 1, fine', 2: 'Grade 2, usual', 3: 'Grade 3, coarse' }
+export const HAND_WORDS = { either: 'Either', right: 'Right', left: 'Left' } as const
+
+/** Materials with the designation of their standard in the second part. */
+export const MATERIAL_WORDS: Readonly<Record<MaterialCode, string>> = {
+  'EN10270-1-SL': 'Spring steel, light duty: EN 10270-1 SL',
+  'EN10270-1-SM': 'Spring steel, medium duty: EN 10270-1 SM',
+  'EN10270-1-SH': 'Spring steel, high duty: EN 10270-1 SH',
+  'EN10270-2-FDSiCr': 'Silicon chrome, oil-tempered: EN 10270-2 FDSiCr',
+  'EN10270-3-1.4310': 'Stainless steel: EN 10270-3 1.4310',
+  'ASTM-A228': 'Music wire: ASTM A228',
+  'ASTM-A229': 'Oil-tempered steel: ASTM A229',
+  'ASTM-A227': 'Hard-drawn steel: ASTM A227',
+  'ASTM-A232': 'Chrome vanadium: ASTM A232',
+  'ASTM-A401': 'Chrome silicon: ASTM A401',
+  'ASTM-A313-302': 'Stainless steel: ASTM A313, type 302',
+}
