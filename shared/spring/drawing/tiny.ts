@@ -4,8 +4,8 @@ import { halfCoils } from './half-coils'
 import { lineH, path, px, type Shape } from './shapes'
 import { wireShapes } from './wire'
 
-/** The three ways a spring works, as the choice on the order form names them. */
-export type SpringKind = 'compression' | 'extension' | 'torsion'
+/** The way a spring works, as the choice on the order form names it: compression, extension, torsion. */
+export type SpringAction = 'push' | 'pull' | 'twist'
 
 /** Size of each small picture. */
 export const TINY_PX = { widthPx: 120, heightPx: 64 } as const
@@ -59,6 +59,6 @@ function twisting(): Shape[] {
 }
 
 /** A small picture, 120 by 64 px, of a spring that pushes, pulls or twists. */
-export function tinyShapes(kind: SpringKind): Shape[] {
-  return kind === 'compression' ? pushing() : kind === 'extension' ? pulling() : twisting()
+export function tinyShapes(action: SpringAction): Shape[] {
+  return { push: pushing, pull: pulling, twist: twisting }[action]()
 }

@@ -171,7 +171,7 @@ describe('the drawing as SVG text', () => {
     const layout = lay({ allDimensions: true, lengthChain: true })
     const { under, over } = pressMoving(layout, 42)
     const figure = figureShapes({ ...demoSpring, hand: 'left', ends: 'closed' }, { widthPx: 300, units: 'inch' })
-    const shapes = [...under, ...layout.still, ...over, ...figure.shapes, ...(['compression', 'extension', 'torsion'] as const).flatMap(tinyShapes)]
+    const shapes = [...under, ...layout.still, ...over, ...figure.shapes, ...(['push', 'pull', 'twist'] as const).flatMap(tinyShapes)]
     const markup = svgMarkup({ widthPx: 540, heightPx: layout.heightPx, shapes, name: 'a < b & "c"' })
     expect(markup).not.toMatch(/NaN|undefined|<style/)
     expect(markup).toContain('aria-label="a &#60; b &#38; &#34;c&#34;"')
