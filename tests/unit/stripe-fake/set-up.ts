@@ -69,7 +69,7 @@ export async function startReceiver(): Promise<HookReceiver> {
 export interface Bench { running: RunningStripeFake, stripe: Stripe, control: StripeFakeControl, receiver: HookReceiver, close: () => Promise<void> }
 
 /** The real SDK against a fake on this machine. */
-export function createSdk(running: RunningStripeFake, key = running.secretKey): Stripe {
+export function createSdk(running: Pick<RunningStripeFake, 'host' | 'port' | 'secretKey'>, key = running.secretKey): Stripe {
   return new Stripe(key, { host: running.host, port: running.port, protocol: 'http', telemetry: false, maxNetworkRetries: 0, timeout: 5000 })
 }
 
