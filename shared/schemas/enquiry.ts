@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { countrySchema, daySchema, emailSchema, lineSchema, textSchema } from './shared-fields'
+import { COUNTRIES, countrySchema, daySchema, emailSchema, lineSchema, textSchema } from './shared-fields'
 import { COMPRESSION_ENDS, MATERIAL_CODES, SURROUNDINGS } from '../spring/codes'
 
 const positive = (what: string, max: number) => z.number({ error: issue => issue.input === undefined || issue.input === null ? `Give ${what}.` : `Give ${what} as a number.` })
@@ -69,6 +69,10 @@ export const contactSchema = z.strictObject({
   vatNumber: z.string().trim().toUpperCase().regex(/^[A-Z]{2}[A-Z0-9+*]{2,12}$/, 'A VAT number starts with the country, such as IE1234567A.').optional(),
   title: lineSchema('what the spring is for', 120),
   remarks: textSchema(4000).default(''),
+}).superRefine(({ vatNumber, countryCode }, context) => {
+  // The tax depends on both, so they must agree. XI is Northern Ireland.
+  const agrees = vatNumber === undefined || vatNumber.startsWith(countryCode) || (countryCode === 'GB' && vatNumber.startsWith('XI'))
+  if (!agrees) context.addIssue({ code: 'custom', path: ['vatNumber'], message: `A VAT number of ${COUNTRIES[countryCode]} starts with ${countryCode}. Leave it out, or change the country.` })
 })
 export type Contact = z.infer<typeof contactSchema>
 

@@ -27,7 +27,7 @@ export type ConflictView = { words: string, changes: { path: string, label: stri
 /** The answer to the order form as one types. */
 export type PreviewView = {
   design: StoredDesign | null, conflict: ConflictView | null, currency: string, priceBookNumber: number, priceBookInForceFrom: string, taxPercent: string, depositPercent: string,
-  depositBy: string, ladder: LadderRung[], waitsForPerson: GateReason[], points: { forceN: number, lengthMm: number }[],
+  depositBy: string, ladder: LadderRung[], waitsForPerson: Pick<GateReason, 'code' | 'customerText'>[], points: { forceN: number, lengthMm: number }[],
 }
 export type EnquiryOutcome = { ref: string, key: string, outcome: 'quoted' | 'waiting', reasons: string[], answerBy: string | null, quoteUrl: string }
 
@@ -40,7 +40,8 @@ export type QuoteView = {
   ladder: LadderRung[], acceptedQuantity: number | null, addressConfirmed: boolean, isSignedIn: boolean, maskedEmail: string,
   answerBy: string | null, reasons: string[], payment: PaymentStatus, request: EnquiryRequest['requirement'],
 }
-export const quoteAccessQuerySchema = z.strictObject({ key: accessKeySchema.optional() })
+/** A key that cannot be one opens nothing, just as a wrong one: the answer is the same 404. */
+export const quoteAccessQuerySchema = z.strictObject({ key: accessKeySchema.optional().catch(undefined) })
 export const acceptQuoteBodySchema = z.strictObject({ quantity: z.int().min(1).max(1_000_000), version: versionSchema, key: accessKeySchema.optional() })
 export type AcceptedQuote = { state: OrderState, version: number, next: 'confirm-address' | 'pay' }
 export const declineQuoteBodySchema = z.strictObject({ version: versionSchema, reason: textSchema(500).default(''), key: accessKeySchema.optional() })

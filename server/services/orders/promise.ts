@@ -3,15 +3,20 @@ import { buildRouting, PlanningError, promiseDate, wireWaitDays } from '../../en
 import { readNumberRates, type PriceBook, type PricedDesign, type PricedQuantity } from '../../engine/pricing'
 import { officeCalendarOf, planCentresOf, type ShopPlan } from './shop-plan'
 
+/** Work of more than about a year of one shift is not placed by a machine. */
+const MOST_MINUTES = 120_000
+
 /**
  * The day a priced quantity could be dispatched, found by placing its job in the plan as it stands; null where no work centre
- * takes its wire, which a person then looks at.
+ * takes its wire or the work is beyond a year, which a person then looks at.
  */
 export function promiseDispatch(
   { design, wire, priced, book, plan, clock }:
   { design: PricedDesign, wire: CatalogueWire, priced: PricedQuantity, book: PriceBook, plan: ShopPlan, clock: { now: Date, timeZone: string } },
 ): string | null {
   const rates = readNumberRates(book)
+  const minutes = Object.values(priced.plannedMinutes).reduce((sum, { setUpMinutes, runMinutes }) => sum + setUpMinutes + runMinutes, 0)
+  if (minutes > MOST_MINUTES) return null
   try {
     return promiseDate({
       nowMs: clock.now.getTime(),

@@ -15,13 +15,14 @@ export function workingPointsOf({ need }: Pick<Requirement, 'need'>): LoadPoint[
   }
 }
 
-/** A customer's requirement as the search takes it. The rate and one load at a length fix the free length as well. */
+/** A customer's requirement as the search takes it. One load at a length with a rate, or with a free length, fixes the rest. */
 export function sizeRequestOf(requirement: Requirement, limit: number): CompressionSizeRequest {
   const { need } = requirement
   return {
     kind: 'compression',
     points: workingPointsOf(requirement),
-    rateNPerMm: need.knows === 'two-loads' ? undefined : need.rateNPerMm,
+    rateNPerMm: need.knows === 'load-and-rate' ? need.rateNPerMm : undefined,
+    freeLengthMm: need.knows === 'rate-and-length' ? need.freeLengthMm : undefined,
     ends: requirement.ends,
     toleranceGrade: requirement.toleranceGrade,
     temperatureC: requirement.hottestC,

@@ -1,0 +1,63 @@
+import type { Requirement } from '#shared/schemas/enquiry'
+import { sizeCompression } from '#shared/spring/sizing'
+import type { SizedDesign, SizingCandidate, SizingResult } from '#shared/spring/sizing/types'
+import type { CompressionEnds, MaterialCode } from '#shared/spring/codes'
+import type { CatalogueWire } from '../catalogue/list-wires'
+import { createPriceObjective, type PriceBook, type PriceOptions } from '../../engine/pricing'
+import { allowedMaterialsFor } from './allowed-materials'
+import { sizeRequestOf } from './requirement'
+import { pricedDesignOf } from './stored-design'
+
+export type FoundDesign = {
+  best: SizedDesign<CatalogueWire> | null
+  result: SizingResult<CatalogueWire>
+  /** Why some materials were left out; null where none was. */
+  materialRule: string | null
+}
+
+/** What makes one candidate better than another: the price of one spring at a quantity. */
+export function priceObjectiveOf({ book, quantity, options, ends }: { book: PriceBook, quantity: number, options: PriceOptions, ends: CompressionEnds }): (candidate: SizingCandidate<CatalogueWire>) => number {
+  const price = createPriceObjective({ book, quantity, options })
+  return candidate => price(pricedDesignOf(candidate.wire.material, { ...candidate, wireDiameterMm: candidate.wire.wireDiameterMm, ends }), candidate.wire)
+}
+
+/** Wires of the allowed materials that are priced in the book's currency. */
+export const wiresFor = (wires: readonly CatalogueWire[], materials: readonly MaterialCode[], book: Pick<PriceBook, 'currency'>): CatalogueWire[] =>
+  wires.filter(wire => wire.currency === book.currency && materials.includes(wire.material))
+
+/** The quantity a spring is made cheapest for: the middle one asked for, the lower of two. */
+export function mainQuantityOf(quantities: readonly number[]): number {
+  const sorted = [...quantities].sort((a, b) => a - b)
+  return sorted[Math.floor((sorted.length - 1) / 2)]!
+}
+
+/** The options of a price that a requirement asks for. */
+export const priceOptionsOf = (requirement: Pick<Requirement, 'toleranceGrade' | 'certificate'>): PriceOptions =>
+  ({ toleranceGrade: requirement.toleranceGrade, certificate: requirement.certificate ? '3.1' : 'none' })
+
+const MOST_KEPT = 40
+const kept = new WeakMap<readonly CatalogueWire[], Map<string, FoundDesign>>()
+
+/**
+ * The spring of the catalogue that does what is asked for at the lowest price, or what stands in the way. Finding out what
+ * clashes takes about a second of computing, so the answers to the last questions are kept while wire and prices stay the same.
+ */
+export function findDesign(requirement: Requirement, { wires, book }: { wires: readonly CatalogueWire[], book: PriceBook }): FoundDesign {
+  const found = kept.get(wires) ?? new Map<string, FoundDesign>()
+  kept.set(wires, found)
+  const question = JSON.stringify([book.number, requirement])
+  const known = found.get(question)
+  if (known) return known
+  const answer = searchDesign(requirement, { wires, book })
+  const [oldest] = found.keys()
+  if (found.size >= MOST_KEPT && oldest !== undefined) found.delete(oldest)
+  found.set(question, answer)
+  return answer
+}
+
+function searchDesign(requirement: Requirement, { wires, book }: { wires: readonly CatalogueWire[], book: PriceBook }): FoundDesign {
+  const { materials, rule } = allowedMaterialsFor(requirement)
+  const objective = priceObjectiveOf({ book, quantity: mainQuantityOf(requirement.quantities), options: priceOptionsOf(requirement), ends: requirement.ends })
+  const result = sizeCompression(sizeRequestOf(requirement, 1), wiresFor(wires, materials, book), { objective })
+  return { best: result.designs[0] ?? null, result, materialRule: rule }
+}
