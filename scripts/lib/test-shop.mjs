@@ -23,6 +23,7 @@ import { defineServices, prepareDatabase } from './services.mjs'
  * @property {string} stripeSecretKey
  * @property {string} stripeWebhookSecret
  * @property {string} mailUrl the inbox: its API is under /api
+ * @property {number} smtpPort where the inbox takes mail
  * @property {string} databaseUrl for the role that runs the app
  * @property {string} databaseOwnerUrl for the role that owns the tables
  * @property {import('./announcement.mjs').DemoSignIn[]} demoSignIns
@@ -86,6 +87,7 @@ export function startTestShop(suite) {
       stripeSecretKey: secrets.stripeSecretKey,
       stripeWebhookSecret: secrets.stripeWebhookSecret,
       mailUrl: `http://127.0.0.1:${ports.mailWeb}`,
+      smtpPort: ports.smtp,
       databaseUrl: databaseUrl(ports.postgres, APP_ROLE, secrets.databaseAppPassword),
       databaseOwnerUrl: databaseUrl(ports.postgres, OWNER_ROLE, secrets.databaseOwnerPassword),
       demoSignIns: readDemoSignIns(surroundings.demoSignInsFile),
