@@ -1,5 +1,5 @@
-/** How the ends of a compression spring are made; the codes of the public API. */
-export type SpringEnds = 'closed-ground' | 'closed' | 'open' | 'open-ground'
+import type { CoilHand, CompressionEnds } from '../codes'
+import { solidLengthMm } from '../mechanics/end-geometry'
 
 /** What has to be known of a compression spring to draw it to scale. */
 export interface DrawnSpring {
@@ -8,8 +8,8 @@ export interface DrawnSpring {
   readonly activeCoils: number
   readonly totalCoils: number
   readonly freeLengthMm: number
-  readonly ends: SpringEnds
-  readonly hand: 'right' | 'left'
+  readonly ends: CompressionEnds
+  readonly hand: CoilHand
 }
 
 /** True if every size is a positive number and the coils can lie within the outline: only such a spring is drawn. */
@@ -18,12 +18,10 @@ export function isDrawable(spring: DrawnSpring): boolean {
   return [d, D, n, nt, L0].every((size) => Number.isFinite(size) && size > 0) && D > d && nt >= n && nt <= 500 && L0 >= drawnSolidLengthMm(spring) * (1 - 1e-9)
 }
 
-const isGround = (ends: SpringEnds): boolean => ends === 'closed-ground' || ends === 'open-ground'
+const isGround = (ends: CompressionEnds): boolean => ends === 'closed-ground' || ends === 'open-ground'
 
-/** Length at which the drawn coils touch: nt d for ground ends, (nt + 1) d for others (reference/springs.md 2.2). */
-export function drawnSolidLengthMm({ wireDiameterMm, totalCoils, ends }: DrawnSpring): number {
-  return (totalCoils + (isGround(ends) ? 0 : 1)) * wireDiameterMm
-}
+/** Length at which the drawn coils touch: that of the textbooks, since the drawing has the nominal wire. */
+export const drawnSolidLengthMm = ({ wireDiameterMm, totalCoils, ends }: DrawnSpring): number => solidLengthMm('textbook', ends, totalCoils, wireDiameterMm)
 
 /** Turns of each end that lie closed. */
 function closedTurns({ activeCoils, totalCoils, ends }: DrawnSpring): number {
@@ -31,8 +29,8 @@ function closedTurns({ activeCoils, totalCoils, ends }: DrawnSpring): number {
   return ends.startsWith('open') || turns < 0.05 ? 0 : turns
 }
 
-/** Pitch of the open coils when the spring is `lengthMm` long: closed and ground L0 = n p + 2 d, and so on by ends. */
-export function pitchMm(spring: DrawnSpring, lengthMm: number): number {
+/** Pitch of the open coils when the spring is `lengthMm` long; unlike the mechanics' it holds for a loaded spring and for any count of end coils. */
+export function drawnPitchMm(spring: DrawnSpring, lengthMm: number): number {
   const closed = closedTurns(spring)
   return (lengthMm - 2 * closed * spring.wireDiameterMm - (isGround(spring.ends) ? 0 : spring.wireDiameterMm)) / (spring.totalCoils - 2 * closed)
 }
@@ -56,7 +54,7 @@ function blend(u: number, a: number, m: number, b: number, slope: number): numbe
 export function centreLine(spring: DrawnSpring, lengthMm: number): CentreLine {
   const { wireDiameterMm: d, totalCoils } = spring
   const ground = isGround(spring.ends)
-  const pitch = pitchMm(spring, lengthMm)
+  const pitch = drawnPitchMm(spring, lengthMm)
   const closed = closedTurns(spring)
   const tipMm = ground ? 0 : d / 2
   // An end that is not about one turn long is the one-turn profile drawn out or shortened; a longer one goes on turn by turn

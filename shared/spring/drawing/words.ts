@@ -1,9 +1,11 @@
 import { fromSi, type UnitSystem } from '../../units/convert'
 import { decimalsFor, formatForce, formatLength, formatNumber, formatShare, formatWireDiameter } from '../../units/format'
-import type { DrawnSpring, SpringEnds } from './drawn-spring'
+import type { CompressionEnds } from '../codes'
+import { shearStressMpa } from '../mechanics/stress'
+import type { DrawnSpring } from './drawn-spring'
 import { forceAtN, type LoadCharted } from './load-chart'
 
-const ENDS_WORDS: Record<SpringEnds, string> = {
+const ENDS_WORDS: Record<CompressionEnds, string> = {
   'closed-ground': 'closed and ground', 'closed': 'closed, not ground', 'open': 'open', 'open-ground': 'open and ground',
 }
 
@@ -37,16 +39,11 @@ export interface PressReading {
   readonly stateWords: string
 }
 
-/** Uncorrected shear stress tau = 8 F D / (pi d^3) in MPa (reference/springs.md 2.1). */
-export function uncorrectedStressMpa({ wireDiameterMm, meanDiameterMm }: Pick<DrawnSpring, 'wireDiameterMm' | 'meanDiameterMm'>, forceN: number): number {
-  return 8 * forceN * meanDiameterMm / (Math.PI * wireDiameterMm ** 3)
-}
-
 /** What is read off at a length; the places do not change while the spring is pressed, so that the line stands still. */
 export function readPress(spring: DrawnSpring, charted: LoadCharted, lengthMm: number, units: UnitSystem, allowableStressMpa?: number | null): PressReading {
   const { solidLengthMm, freeLengthMm, leastWorkingLengthMm } = charted
   const forceN = forceAtN(charted, lengthMm)
-  const share = allowableStressMpa ? uncorrectedStressMpa(spring, forceN) / allowableStressMpa : null
+  const share = allowableStressMpa ? shearStressMpa(forceN, spring.meanDiameterMm, spring.wireDiameterMm) / allowableStressMpa : null
   const near = freeLengthMm * 1e-3
   const state: PressState = lengthMm <= solidLengthMm + near / 2
     ? 'solid'

@@ -1,20 +1,27 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { centreLine, drawnSolidLengthMm, isDrawable, pitchMm } from '#shared/spring/drawing/drawn-spring'
+import { centreLine, drawnSolidLengthMm, drawnPitchMm, isDrawable } from '#shared/spring/drawing/drawn-spring'
+import { pitchMm } from '#shared/spring/mechanics/end-geometry'
 import { anySpring, demoSpring } from './springs'
 
 describe('the centre line of the wire', () => {
   it('gives the pitch of L0 = n p + 2 d for closed and ground ends', () => {
     // mock study 1: pitch 6.67 mm, solid length 25.6 mm
-    expect(pitchMm(demoSpring, 60)).toBeCloseTo((60 - 5) / 8.25, 12)
+    expect(drawnPitchMm(demoSpring, 60)).toBeCloseTo((60 - 5) / 8.25, 12)
     expect(drawnSolidLengthMm(demoSpring)).toBeCloseTo(25.625, 12)
   })
 
   it('follows the pitch formulas of every kind of end', () => {
     // reference/springs.md 2.2, pitch column
-    expect(pitchMm({ ...demoSpring, ends: 'closed' }, 60)).toBeCloseTo((60 - 7.5) / 8.25, 12)
-    expect(pitchMm({ ...demoSpring, ends: 'open', totalCoils: 8.25 }, 60)).toBeCloseTo((60 - 2.5) / 8.25, 12)
-    expect(pitchMm({ ...demoSpring, ends: 'open-ground', totalCoils: 9.25 }, 60)).toBeCloseTo(60 / 9.25, 12)
+    expect(drawnPitchMm({ ...demoSpring, ends: 'closed' }, 60)).toBeCloseTo((60 - 7.5) / 8.25, 12)
+    expect(drawnPitchMm({ ...demoSpring, ends: 'open', totalCoils: 8.25 }, 60)).toBeCloseTo((60 - 2.5) / 8.25, 12)
+    expect(drawnPitchMm({ ...demoSpring, ends: 'open-ground', totalCoils: 9.25 }, 60)).toBeCloseTo(60 / 9.25, 12)
+  })
+
+  it('has the free pitch that the mechanics calculate', () => {
+    fc.assert(fc.property(anySpring, (spring) => {
+      expect(drawnPitchMm(spring, spring.freeLengthMm)).toBeCloseTo(pitchMm(spring), 9)
+    }))
   })
 
   it('starts a ground tip in the face, half a wire up after 3/4 turn and one wire up after one turn', () => {
@@ -67,7 +74,7 @@ describe('the centre line of the wire', () => {
       const centre = centreLine(spring, lengthMm)
       const step = spring.totalCoils / 400
       // the closing quarter of a ground end rises half a wire, so up to 2.6 wires a turn in its middle
-      const steepest = Math.max(pitchMm(spring, lengthMm), spring.wireDiameterMm) * 2.6 * step
+      const steepest = Math.max(drawnPitchMm(spring, lengthMm), spring.wireDiameterMm) * 2.6 * step
       const places = Array.from({ length: 401 }, (_, i) => centre(i * step))
       const rises = places.slice(1).map((now, i) => now - (places[i] ?? 0))
       expect(Math.min(...rises)).toBeGreaterThan(-1e-9 * lengthMm)
