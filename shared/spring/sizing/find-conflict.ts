@@ -1,8 +1,11 @@
+import type { ToleranceGrade } from '../codes'
 import { getMaterial } from '../materials'
+import { meanDiameterToleranceMm } from '../mechanics/tolerances/mean-diameter'
 import { checkSizeRequirement } from './check-requirement'
 import { anchorPaths, listRequirements, readNumber, writeNumber, type Requirement } from './requirement-paths'
 import { isFeasible, searchWires, type SearchOptions } from './search-wires'
 import type { CompressionSizeRequest, SizingChange, SizingConflict, SizingWire } from './types'
+import { LEAST_INDEX, MOST_INDEX } from './wire-search'
 
 /**
  * Why no wire gives a spring: a set of requirements that cannot hold together although any smaller part of it can, and for
@@ -14,6 +17,10 @@ export function findConflict<W extends SizingWire>(request: CompressionSizeReque
 }
 
 function smallestClash<W extends SizingWire>(request: CompressionSizeRequest, wires: readonly W[]): string[] {
+  const { boreMm, rodMm } = request.fit ?? {}
+  if (boreMm !== undefined && rodMm !== undefined && !wires.some(wire => fitsBetween(boreMm, rodMm, wire, request.toleranceGrade ?? 2))) {
+    return ['fit.boreMm', 'fit.rodMm']
+  }
   const all = listRequirements(request)
   const clashes = (kept: readonly Requirement[]) => !isFeasible(dropAllBut(request, all, kept), wires)
   // Pairs of anchor and one requirement are the plainest answers: look for them first.
@@ -28,6 +35,15 @@ function smallestClash<W extends SizingWire>(request: CompressionSizeRequest, wi
     if (clashes(fewer)) kept = fewer
   }
   return [...anchorPaths(request), ...kept.map(requirement => requirement.path)]
+}
+
+// Room between bore and rod for one thickness of wire and the diameter tolerance, whatever the load; midway is best.
+function fitsBetween(boreMm: number, rodMm: number, wire: SizingWire, grade: ToleranceGrade): boolean {
+  const d = wire.wireDiameterMm
+  const D = Math.min(Math.max((boreMm + rodMm) / 2, LEAST_INDEX * d), MOST_INDEX * d)
+  const tolerance = meanDiameterToleranceMm(D, D / d, grade)
+  const slack = Number.isNaN(tolerance) ? 0 : tolerance
+  return D + d + slack <= boreMm && D - d - slack >= rodMm
 }
 
 function dropAllBut(request: CompressionSizeRequest, all: readonly Requirement[], kept: readonly Requirement[]): CompressionSizeRequest {
