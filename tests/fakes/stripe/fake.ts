@@ -45,7 +45,7 @@ export interface Fake {
   persist: () => void
   /** Writes the state file soon. */
   persistSoon: () => void
-  /** Forgets everything, switches and planned failures too. */
+  /** Forgets everything, switches and planned failures too; the webhook settings are again those of the start. */
   reset: () => void
 }
 
@@ -74,6 +74,7 @@ export function emitInvented(fake: Fake, invented: InventedEvent): object {
 /** Puts the parts together. Reads the state file; starts no timer and opens no port. */
 export function createFake(options: ResolvedOptions): Fake {
   let saveTimer: NodeJS.Timeout | null = null
+  const { webhookUrl, webhookSecrets, retryGapsMs } = options
   const fake: Fake = {
     options,
     state: loadState(options.stateFile),
@@ -113,6 +114,7 @@ export function createFake(options: ResolvedOptions): Fake {
       fake.failures.clear()
       fake.requestLog.length = 0
       Object.assign(fake.state, createEmptyState())
+      Object.assign(options, { webhookUrl, webhookSecrets, retryGapsMs })
       fake.persist()
     },
   }

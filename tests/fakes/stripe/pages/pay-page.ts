@@ -60,11 +60,13 @@ ${wrong ? html`<p class="error" id="${field.name}-error">${wrong}</p>` : null}</
 }
 
 function problemSummary(view: PayPageView): SafeHtml | null {
-  const problems = Object.values(view.errors)
+  const problems = Object.entries(view.errors)
   if (problems.length === 0 && view.declineMessage === null) return null
   const heading = problems.length > 0 ? 'Something needs correcting' : 'The payment did not go through'
-  const lines = problems.length > 0 ? problems : [`${view.declineMessage ?? ''} Nothing was taken. You can try again with another card.`]
-  return html`<div class="summary" role="alert"><h2>${heading}</h2>${lines.map(line => html`<p>${line}</p>`)}</div>`
+  const lines = problems.length > 0
+    ? problems.map(([field, message]) => html`<p><a href="#${field}">${message}</a></p>`)
+    : [html`<p>${view.declineMessage} Nothing was taken. You can try again with another card.</p>`]
+  return html`<div class="summary" role="alert"><h2>${heading}</h2>${lines}</div>`
 }
 
 /** The payment page of an open session. */
@@ -95,7 +97,7 @@ ${view.knownEmail === null
   : html`<p class="wrap">E-mail address: ${view.knownEmail}</p>`}
 ${textField(view, { name: 'name', label: 'Name (optional)', autocomplete: 'name' })}
 <h2>How to pay</h2>
-<fieldset><legend>Choose a way to pay</legend>
+<fieldset id="choice"><legend>Choose a way to pay</legend>
 ${view.errors.choice ? html`<p class="error">${view.errors.choice}</p>` : null}
 ${hasCard ? cards : []}${hasDebit ? debits : []}</fieldset>
 ${hasCard

@@ -38,6 +38,13 @@ function showPayPage(page: OpenPage, values: PayFormValues, errors: PayFormError
   })
 }
 
+/** Who tried last, so that a second try need not ask again. */
+function lastPayer({ fake, session }: OpenPage): { email: string, name: string } {
+  const intent = typeof session.payment_intent === 'string' ? fake.state.paymentIntents[session.payment_intent] : undefined
+  const details = intent?.last_payment_error?.payment_method?.billing_details
+  return { email: details?.email ?? '', name: details?.name ?? '' }
+}
+
 /** A second click sends the number of an attempt that has been made: it is shown the present state, and charges nothing. */
 function isStale({ setup, form }: OpenPage): boolean {
   return form.attempt !== String(setup.nextAttemptNumber)
@@ -77,7 +84,7 @@ function submitAuthentication(page: OpenPage): HttpAnswer {
 }
 
 const ROUTES: readonly Route<(page: OpenPage) => HttpAnswer>[] = [
-  { method: 'GET', path: '/c/pay/:id', handler: page => showPayPage(page, readPayForm(emptyTable()), {}) },
+  { method: 'GET', path: '/c/pay/:id', handler: page => showPayPage(page, { ...readPayForm(emptyTable()), ...lastPayer(page) }, {}) },
   { method: 'POST', path: '/c/pay/:id', handler: submitPayment },
   { method: 'GET', path: '/c/pay/:id/authenticate', handler: showAuthentication },
   { method: 'POST', path: '/c/pay/:id/authenticate', handler: submitAuthentication },

@@ -35,6 +35,7 @@ legend{font-weight:600;padding:0;margin-bottom:.25rem}
 .field input{width:100%;max-width:24rem;min-height:2.75rem;padding:.5rem;font:inherit;color:${text};background:${ground};border:1px solid ${line};border-radius:2px}
 .field input[aria-invalid=true]{border:2px solid ${error}}
 .short input{max-width:9rem}
+details{margin-top:1rem}
 .error{color:${error};font-weight:600;margin:.25rem 0 0}
 .summary{border:2px solid ${error};padding:.75rem 1rem;margin:0 0 1.5rem}
 .summary h2{margin:0 0 .25rem}
