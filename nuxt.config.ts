@@ -1,6 +1,17 @@
+import type { NitroConfig } from 'nitropack/types'
 import VueRollup from 'unplugin-vue/rollup'
+import { slimFormKit } from './formkit/slim-plugin'
 
 const dayS = 86_400
+
+// Typed here, since Nuxt's own type of this key knows only part of Nitro's settings.
+const nitro: NitroConfig = {
+  compressPublicAssets: true,
+  experimental: { tasks: true },
+  // Each process claims its work in the database, so several processes may run these side by side.
+  scheduledTasks: { '*/5 * * * *': ['payments:reconcile'], '17 * * * *': ['housekeeping'] },
+  rollupConfig: { plugins: [VueRollup()] },
+}
 
 export default defineNuxtConfig({
   compatibilityDate: '2026-05-01',
@@ -18,7 +29,14 @@ export default defineNuxtConfig({
   typescript: { strict: true, typeCheck: false },
   // Inline styles would need 'unsafe-inline' in the content policy.
   features: { inlineStyles: false },
-  experimental: { payloadExtraction: false },
+  // Other pages' code is fetched when somebody reaches for their link, not with the first page.
+  experimental: { payloadExtraction: false, defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
+  hooks: {
+    'build:manifest': (manifest) => {
+      for (const entry of Object.values(manifest)) entry.dynamicImports = []
+    },
+  },
+  vite: { plugins: [slimFormKit()] },
   app: {
     head: {
       htmlAttrs: { lang: 'en-GB' },
@@ -62,13 +80,7 @@ export default defineNuxtConfig({
     '/order': { cache: { maxAge: 3600, swr: true } },
   },
 
-  nitro: {
-    compressPublicAssets: true,
-    experimental: { tasks: true },
-    // Each process claims its work in the database, so several processes may run these side by side.
-    scheduledTasks: { '*/5 * * * *': ['payments:reconcile'], '17 * * * *': ['housekeeping'] },
-    rollupConfig: { plugins: [VueRollup()] },
-  },
+  nitro,
 
   runtimeConfig: {
     databaseUrl: '',
