@@ -5,7 +5,7 @@ import { slimFormKit } from './formkit/slim-plugin'
 const dayS = 86_400
 
 // Typed here, since Nuxt's own type of this key knows only part of Nitro's settings.
-const nitro: NitroConfig = {
+const nitro: Pick<NitroConfig, 'compressPublicAssets' | 'experimental' | 'scheduledTasks' | 'rollupConfig'> = {
   compressPublicAssets: true,
   experimental: { tasks: true },
   // Each process claims its work in the database, so several processes may run these side by side.
