@@ -4,7 +4,7 @@ import { runLogged } from './run.mjs'
 import { say } from './say.mjs'
 
 /**
- * @typedef {{ version?: string, optional?: boolean, devOptional?: boolean, peer?: boolean, link?: boolean }} LockedPackage
+ * @typedef {{ version?: string, optional?: boolean, devOptional?: boolean, peer?: boolean, extraneous?: boolean }} LockedPackage
  */
 
 /**
@@ -31,8 +31,9 @@ export function areLockedPackagesInstalled() {
  * @param {Record<string, LockedPackage>} installed
  */
 export function isRecordComplete(locked, installed) {
-  return Object.entries(locked).every(([path, { version, optional, devOptional, peer }]) => {
-    if (path === '') return true
+  return Object.entries(locked).every(([path, { version, optional, devOptional, peer, extraneous }]) => {
+    // Extraneous: left over in the lock file from an earlier state, and not installed from it.
+    if (path === '' || extraneous) return true
     const found = installed[path]
     // Optional packages are for other machines, most of them.
     if (!found) return Boolean(optional || devOptional || peer)

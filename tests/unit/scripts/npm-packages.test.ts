@@ -8,6 +8,10 @@ describe("npm's record of what is installed", () => {
     expect(isRecordComplete(locked, { 'node_modules/pg': { version: '8.23.1' } })).toBe(true)
   })
 
+  it('agrees when what is absent is a leftover that npm does not install from the lock file', () => {
+    expect(isRecordComplete({ 'node_modules/old': { version: '1.0.0', extraneous: true } }, {})).toBe(true)
+  })
+
   it('disagrees when a package is absent', () => {
     expect(isRecordComplete(locked, {})).toBe(false)
   })
