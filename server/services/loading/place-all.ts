@@ -5,9 +5,9 @@ import { jobs, operations } from '../../database/schema'
 import { assertRole, databaseErrorCode, inTransaction, type ServiceContext } from '../context'
 import { conflict, DomainError, notFound, stale } from '../errors'
 import { numberOfRef } from '../jobs/refs'
+import { planCentresOf, readPlan } from '../orders/shop-plan'
 import { lockJob, spanOf } from './lock-job'
 import { readOneJob } from './place'
-import { readBusy, readPlanCentres } from './plan-centres'
 import { settlePlan } from './settle-plan'
 
 /**
@@ -18,15 +18,15 @@ export async function placeWholeJob(context: ServiceContext, ref: string, versio
   assertRole(context, 'supervisor', 'admin')
   const [head] = await context.db.select({ id: jobs.id }).from(jobs).where(eq(jobs.number, numberOfRef(ref)))
   if (!head) throw notFound('job')
-  const centres = await readPlanCentres(context.db, context.timeZone)
   try {
     await inTransaction(context.db, async (tx) => {
       const locked = await lockJob(tx, head.id)
       if (locked.job.version !== version) throw stale('job')
       if (locked.job.state !== 'to-plan' && locked.job.state !== 'planned') throw conflict('This job has started. Move its operations one by one.')
+      const shop = await readPlan(tx, { exceptJobId: head.id })
       const plan = placeJob({
         operations: locked.operations.map(row => ({ position: row.position, kind: row.kind, setUpMinutes: Number(row.setUpMinutes), runMinutes: Number(row.runMinutes) })),
-        centres, busyByCentre: await readBusy(tx, context.now, { jobId: head.id }), wireDiameterMm: locked.wireDiameterMm, notBeforeMs: Math.ceil(context.now.getTime() / 300_000) * 300_000,
+        centres: planCentresOf(shop, context.timeZone), busyByCentre: shop.busyByCentre, wireDiameterMm: locked.wireDiameterMm, notBeforeMs: Math.ceil(context.now.getTime() / 300_000) * 300_000,
       })
       for (const row of locked.operations) await tx.update(operations).set({ workCentreId: null, plannedSpan: null }).where(eq(operations.id, row.id))
       for (const placed of plan.operations) {

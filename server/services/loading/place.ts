@@ -6,12 +6,14 @@ import { jobs, operations } from '../../database/schema'
 import { assertRole, databaseErrorCode, inTransaction, type Queryable, type ServiceContext, type Transaction } from '../context'
 import { conflict, invalid, notFound, stale } from '../errors'
 import type { OperationRow } from '../jobs/operation-columns'
+import { planCentresOf, readPlan } from '../orders/shop-plan'
 import { lockJob, spanOf, type LockedJob } from './lock-job'
-import { readBusy, readPlanCentres } from './plan-centres'
 import { readJobs } from './read-jobs'
 import { settlePlan } from './settle-plan'
 
 const EXCLUSION_VIOLATION = '23P01'
+
+const minutesOf = (operation: OperationRow) => Math.max(1, Number(operation.setUpMinutes) + Number(operation.runMinutes))
 
 const momentWords = (ms: number, timeZone: string) =>
   new Intl.DateTimeFormat('en-GB', { timeZone, weekday: 'short', day: 'numeric', month: 'short', hour: '2-digit', minute: '2-digit' }).format(ms)
@@ -31,7 +33,7 @@ async function jobOf(db: Queryable, operationId: string): Promise<string> {
 export async function placeOperation(context: ServiceContext, operationId: string, input: { centreId: string, startsAt: string, version: number }): Promise<JobView> {
   assertRole(context, 'supervisor', 'admin')
   const jobId = await jobOf(context.db, operationId)
-  const centres = await readPlanCentres(context.db, context.timeZone)
+  const centres = planCentresOf(await readPlan(context.db), context.timeZone)
   await inTransaction(context.db, async (tx) => {
     const locked = await lockJob(tx, jobId)
     const operation = assertMovable(locked, operationId, input.version)
@@ -64,7 +66,7 @@ function assertTime(context: ServiceContext, locked: LockedJob, operation: Opera
   if (startMs < context.now.getTime() - 60_000) throw invalid('startsAt', 'This time has passed.')
   const opensMs = nextWorkingInstant(centre.calendar, startMs)
   if (opensMs !== startMs) throw invalid('startsAt', `The work centre is closed then. It opens ${momentWords(opensMs, context.timeZone)}.`)
-  const endMs = addWorkingMinutes(centre.calendar, startMs, Math.max(1, Number(operation.setUpMinutes) + Number(operation.runMinutes)))
+  const endMs = addWorkingMinutes(centre.calendar, startMs, minutesOf(operation))
   for (const other of locked.operations) {
     if (other.position < operation.position && other.endsAt && other.endsAt.getTime() > startMs)
       throw invalid('startsAt', `${OPERATION_NAMES[other.kind]} of this job is done only ${momentWords(other.endsAt.getTime(), context.timeZone)}. Start then or later.`)
@@ -89,8 +91,8 @@ async function writeSpan(tx: Transaction, context: ServiceContext, { operation, 
 async function clashWords(tx: Transaction, context: ServiceContext, { operation, centre, startMs, endMs }: { operation: OperationRow, centre: PlanCentre, startMs: number, endMs: number }): Promise<string> {
   const [other] = await tx.select({ number: jobs.number }).from(operations).innerJoin(jobs, eq(jobs.id, operations.jobId))
     .where(and(eq(operations.workCentreId, centre.id), ne(operations.id, operation.id), sql`${operations.plannedSpan} && ${spanOf(startMs, endMs)}::tstzrange`)).orderBy(sql`lower(${operations.plannedSpan})`).limit(1)
-  const busy = await readBusy(tx, new Date(startMs))
-  const free = earliestSlot({ calendar: centre.calendar, busy: busy[centre.id] ?? [], durationMinutes: (endMs - startMs) / 60_000 > 0 ? Math.max(1, Number(operation.setUpMinutes) + Number(operation.runMinutes)) : 1, notBeforeMs: startMs })
+  const { busyByCentre } = await readPlan(tx)
+  const free = earliestSlot({ calendar: centre.calendar, busy: busyByCentre[centre.id] ?? [], durationMinutes: minutesOf(operation), notBeforeMs: startMs })
   return `J-${other?.number ?? '?'} has this work centre at that time. It is free for this operation from ${momentWords(free.startMs, context.timeZone)}.`
 }
 

@@ -1,6 +1,6 @@
-import { and, asc, eq, isNotNull, sql } from 'drizzle-orm'
+import { and, asc, eq, isNotNull, ne, sql } from 'drizzle-orm'
 import { holidays, operations, workCentres } from '../../database/schema'
-import type { Database } from '../../database/client'
+import type { Database, Queryable } from '../../database/client'
 import { addDays, addWorkingDays, toEpochMs, toLocalTime, WORKING_WEEK, type Interval, type PlanCentre, type WorkCalendar } from '../../engine/planning'
 import { rememberFor } from '../remember'
 
@@ -10,15 +10,15 @@ const SATURDAY = 6
 /** The plan as it stands: work centres, closed days and what is taken. */
 export type ShopPlan = { closedDays: readonly string[], centres: readonly Omit<PlanCentre, 'calendar'>[], shifts: ReadonlyMap<string, Omit<WorkCalendar, 'timeZone' | 'holidays'>>, busyByCentre: Readonly<Record<string, Interval[]>> }
 
-/** Reads the plan; kept for two seconds, since nothing is reserved by a promise. */
-export const readShopPlan: (db: Database) => Promise<ShopPlan> = rememberFor(2_000, async (db) => {
+/** Reads the plan as the caller's transaction sees it: for whoever places operations. `exceptJobId` leaves one job's own places out. */
+export async function readPlan(db: Queryable, { exceptJobId }: { exceptJobId?: string } = {}): Promise<ShopPlan> {
   const [centreRows, closedRows, taken] = await Promise.all([
     db.select().from(workCentres).where(eq(workCentres.isActive, true)).orderBy(asc(workCentres.code)),
     db.select({ day: holidays.day }).from(holidays),
     db.select({
       centreId: operations.workCentreId,
       startMs: sql<string>`extract(epoch from lower(${operations.plannedSpan})) * 1000`, endMs: sql<string>`extract(epoch from upper(${operations.plannedSpan})) * 1000`,
-    }).from(operations).where(and(isNotNull(operations.workCentreId), sql`upper(${operations.plannedSpan}) > now()`)),
+    }).from(operations).where(and(isNotNull(operations.workCentreId), sql`upper(${operations.plannedSpan}) > now()`, exceptJobId ? ne(operations.jobId, exceptJobId) : undefined)),
   ])
   const busyByCentre: Record<string, Interval[]> = {}
   for (const { centreId, startMs, endMs } of taken) {
@@ -32,7 +32,10 @@ export const readShopPlan: (db: Database) => Promise<ShopPlan> = rememberFor(2_0
     }])),
     busyByCentre,
   }
-})
+}
+
+/** The same for a promise; kept for two seconds, since a promise reserves nothing. */
+export const readShopPlan: (db: Database) => Promise<ShopPlan> = rememberFor(2_000, db => readPlan(db))
 
 /** Days on which the office answers and goods leave: Monday to Friday, no closed day. */
 export const officeCalendarOf = (plan: Pick<ShopPlan, 'closedDays'>, timeZone: string): WorkCalendar =>
