@@ -9,7 +9,7 @@ import { migrate } from 'drizzle-orm/node-postgres/migrator'
 import pg from 'pg'
 
 const MIGRATION_LOCK = 728_114
-const APPEND_ONLY = ['order_events', 'ledger_transactions', 'ledger_entries', 'bench_records', 'audit_log']
+const APPEND_ONLY = ['order_events', 'ledger_transactions', 'ledger_entries', 'bench_records', 'wire_receipts', 'audit_log']
 
 /** The statements that give the application's role its rights: data only, and no change to what is append-only. */
 export function grantStatements(appRole: string): string[] {

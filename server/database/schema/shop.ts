@@ -79,3 +79,13 @@ export const benchRecords = pgTable('bench_records', {
   wireKg: numeric('wire_kg', { precision: 12, scale: 4 }),
   note: text('note').notNull().default(''),
 }, t => [index('bench_records_operation').on(t.operationId, t.at)])
+
+/** Append-only: wire that came into the rack. The id is made by the sender, so that a resend counts once. */
+export const wireReceipts = pgTable('wire_receipts', {
+  id: uuid('id').primaryKey(),
+  wireProductId: uuid('wire_product_id').notNull().references(() => wireProducts.id),
+  massKg: numeric('mass_kg', { precision: 12, scale: 3 }).notNull(),
+  at: moment('at').notNull().defaultNow(),
+  personId: uuid('person_id').notNull().references(() => people.id),
+  note: text('note').notNull().default(''),
+}, t => [index('wire_receipts_product').on(t.wireProductId, t.at), check('wire_receipts_positive', sql`${t.massKg} > 0`)])
