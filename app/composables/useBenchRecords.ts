@@ -1,5 +1,6 @@
 import type { BenchRecordBody, BenchView } from '#shared/schemas/shop'
 import { SendError, send, toSendError } from '~/utils/send'
+import { newUuid } from '~/utils/uuid'
 
 type NewRecord = Omit<BenchRecordBody, 'id'>
 
@@ -34,7 +35,7 @@ export function useBenchRecords(apply: (view: BenchView) => void) {
 
   return {
     isBusy: readonly(isBusy), error, failed,
-    record: (operationId: string, record: NewRecord) => post(operationId, { ...record, id: crypto.randomUUID() }),
+    record: (operationId: string, record: NewRecord) => post(operationId, { ...record, id: newUuid() }),
     again: () => failed.value ? post(failed.value.operationId, failed.value.record) : Promise.resolve(false),
   }
 }

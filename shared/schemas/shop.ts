@@ -65,6 +65,6 @@ export type BenchSheet = {
 }
 /** One job's own page. */
 export type JobSheetView = JobView & {
-  timeZone: string, design: StoredDesign | null, sheet: BenchSheet | null, centres: CentreView[], history: { at: string, who: string, words: string }[], cautions: string[],
+  timeZone: string, wireProductId: string | null, design: StoredDesign | null, sheet: BenchSheet | null, centres: CentreView[], history: { at: string, who: string, words: string }[], cautions: string[],
 }
 export const loadingQuerySchema = z.strictObject({ from: daySchema.optional(), days: z.coerce.number().int().min(1).max(60).default(14) })

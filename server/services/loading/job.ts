@@ -16,7 +16,7 @@ export async function getJob(context: ServiceContext, ref: string): Promise<JobS
   assertRole(context, 'supervisor', 'operator', 'admin')
   const [view] = await readJobs(context.db, eq(jobs.number, numberOfRef(ref)), { limit: 1, timeZone: context.timeZone })
   if (!view) throw notFound('job')
-  const [row] = await context.db.select({ jobId: jobs.id, orderId: jobs.orderId, design: quotes.design }).from(jobs)
+  const [row] = await context.db.select({ jobId: jobs.id, orderId: jobs.orderId, design: quotes.design, wireProductId: quotes.wireProductId }).from(jobs)
     .innerJoin(quotePrices, eq(quotePrices.id, jobs.quotePriceId)).innerJoin(quotes, eq(quotes.id, quotePrices.quoteId)).where(eq(jobs.number, numberOfRef(ref)))
   const [centres, moves, records] = await Promise.all([
     context.db.select().from(workCentres).where(eq(workCentres.isActive, true)).orderBy(asc(workCentres.code)).limit(100),
@@ -29,5 +29,5 @@ export async function getJob(context: ServiceContext, ref: string): Promise<JobS
     ...records.filter(record => record.act !== 'count').map(record => ({ at: record.at.toISOString(), who: record.who, words: `${OPERATION_NAMES[record.kind]}: ${record.act}${record.note ? `, ${record.note}` : ''}` })),
   ].sort((a, b) => a.at.localeCompare(b.at))
   const cautions = [...new Set(view.operations.flatMap(operation => cautionsFor(operation.kind)))]
-  return { ...view, timeZone: context.timeZone, design: row?.design ?? null, sheet: row?.design ? toSheet(row.design, view.wireKg) : null, centres: centres.map(toCentreView), history, cautions }
+  return { ...view, timeZone: context.timeZone, wireProductId: row?.wireProductId ?? null, design: row?.design ?? null, sheet: row?.design ? toSheet(row.design, view.wireKg) : null, centres: centres.map(toCentreView), history, cautions }
 }
