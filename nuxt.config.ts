@@ -1,6 +1,7 @@
 import type { NitroConfig } from 'nitropack/types'
 import VueRollup from 'unplugin-vue/rollup'
-import { slimFormKit } from './formkit/slim-plugin'
+import { leanEntry } from './vite/lean-entry'
+import { slimFormKit } from './vite/slim-formkit'
 
 const dayS = 86_400
 
@@ -30,13 +31,13 @@ export default defineNuxtConfig({
   // Inline styles would need 'unsafe-inline' in the content policy.
   features: { inlineStyles: false },
   // Other pages' code is fetched when somebody reaches for their link, not with the first page.
-  experimental: { payloadExtraction: false, defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
+  experimental: { payloadExtraction: false, appManifest: false, defaults: { nuxtLink: { prefetchOn: { visibility: false, interaction: true } } } },
   hooks: {
     'build:manifest': (manifest) => {
       for (const entry of Object.values(manifest)) entry.dynamicImports = []
     },
   },
-  vite: { plugins: [slimFormKit()] },
+  vite: { plugins: [slimFormKit(), leanEntry()] },
   app: {
     head: {
       htmlAttrs: { lang: 'en-GB' },
