@@ -1,4 +1,4 @@
-import { pageQuerySchema } from '#shared/schemas/shared-fields'
+import { wireQuerySchema } from '#shared/schemas/works'
 import { listWireStock } from '../../services/catalogue/list-stock'
 
-export default defineRoute({ access: ['admin', 'supervisor'], query: pageQuerySchema }, ({ context, query }) => listWireStock(context, query))
+export default defineRoute({ access: ['admin', 'supervisor'], query: wireQuerySchema }, ({ context, query }) => listWireStock(context, query))

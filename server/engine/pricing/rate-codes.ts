@@ -1,9 +1,11 @@
+import type { RateGroup } from '#shared/rate-groups'
+
 /** How a rate's value is read. Every value is decimal text. */
 export type RateUnit =
   | 'per hour' | 'hours' | 'minutes' | 'seconds' | 'metres per minute' | 'pieces per minute' | 'pieces per hour' | 'pieces' | 'metres'
   | 'kilograms' | 'percent' | 'factor' | 'currency' | 'per kg' | 'days' | 'millimetres' | 'degrees Celsius' | 'number' | 'yes is 1'
 
-export type RateGroup = 'hourly' | 'coiling' | 'wire' | 'furnace' | 'grinding' | 'inspection' | 'packing' | 'policy' | 'tax' | 'gate' | 'promise'
+export type { RateGroup }
 
 /**
  * `shop-practice`: a starting value the reference on shop practice marks as from memory of common trade practice; no published source.

@@ -1,4 +1,5 @@
-import { asc, sql } from 'drizzle-orm'
+import { and, asc, eq, sql } from 'drizzle-orm'
+import type { MaterialCode } from '#shared/spring/codes'
 import { getMaterial, isMaterialCode } from '#shared/spring/materials'
 import type { WireStockList } from '#shared/schemas/works'
 import { wireProducts } from '../../database/schema'
@@ -7,23 +8,31 @@ import { decodeCursor, encodeCursor } from '../cursor'
 import { invalid } from '../errors'
 import { reservedKg } from '../wire/free-kg'
 
-/** Wire products by material and diameter with what is in the rack and what is set aside, a page at a time. */
-export async function listWireStock(context: ServiceContext, { cursor, limit }: { cursor?: string | undefined, limit: number }): Promise<WireStockList> {
+/** Wire products by material and diameter with what is in the rack, set aside and free, a page at a time; of one material if asked. */
+export async function listWireStock(context: ServiceContext, { cursor, limit, material }: { cursor?: string | undefined, limit: number, material?: MaterialCode | undefined }): Promise<WireStockList> {
   assertRole(context, 'admin', 'supervisor')
   const after = cursor ? readCursor(cursor) : null
   const rows = await context.db.select({
     id: wireProducts.id, material: wireProducts.material, wireDiameterMm: wireProducts.wireDiameterMm, pricePerKg: wireProducts.pricePerKg, currency: wireProducts.currency,
-    stockKg: wireProducts.stockKg, reserved: reservedKg, smallestPurchaseKg: wireProducts.smallestPurchaseKg, leadDays: wireProducts.leadDays, isActive: wireProducts.isActive,
+    stockKg: wireProducts.stockKg, reserved: sql<string>`(${reservedKg})::text`, freeKg: sql<string>`(${wireProducts.stockKg} - ${reservedKg})::text`,
+    smallestPurchaseKg: wireProducts.smallestPurchaseKg, leadDays: wireProducts.leadDays, isActive: wireProducts.isActive,
   }).from(wireProducts)
-    .where(after ? sql`(${wireProducts.material}, ${wireProducts.wireDiameterMm}) > (${after.material}, ${after.wireDiameterMm}::double precision)` : undefined)
+    .where(and(
+      material ? eq(wireProducts.material, material) : undefined,
+      after ? sql`(${wireProducts.material}, ${wireProducts.wireDiameterMm}) > (${after.material}, ${after.wireDiameterMm}::double precision)` : undefined,
+    ))
     .orderBy(asc(wireProducts.material), asc(wireProducts.wireDiameterMm)).limit(limit + 1)
+  const materials = await context.db.selectDistinct({ code: wireProducts.material }).from(wireProducts).orderBy(asc(wireProducts.material))
   const page = rows.slice(0, limit)
   const last = page.at(-1)
   return {
-    rows: page.map(row => ({ ...row, materialName: isMaterialCode(row.material) ? getMaterial(row.material).name : row.material })),
+    rows: page.map(row => ({ ...row, materialName: nameOf(row.material) })),
+    materials: materials.map(({ code }) => ({ code, name: nameOf(code) })),
     nextCursor: rows.length > limit && last ? encodeCursor(last.material, String(last.wireDiameterMm)) : null,
   }
 }
+
+const nameOf = (material: string): string => isMaterialCode(material) ? getMaterial(material).name : material
 
 function readCursor(cursor: string): { material: string, wireDiameterMm: number } {
   const [material = '', diameter = ''] = decodeCursor(cursor, 2)

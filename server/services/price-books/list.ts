@@ -4,6 +4,7 @@ import { priceBookRates, priceBooks } from '../../database/schema'
 import { RATE_CODES } from '../../engine/pricing'
 import { assertRole, type ServiceContext } from '../context'
 import { getCurrentPriceBook } from './get-current'
+import { trimDecimals } from '../decimal-text'
 
 const DEFINITIONS = new Map<string, (typeof RATE_CODES)[number]>(RATE_CODES.map(rate => [rate.code, rate]))
 const POSITION = new Map<string, number>(RATE_CODES.map(({ code }, index) => [code, index]))
@@ -21,9 +22,7 @@ export async function listPriceBooks(context: ServiceContext): Promise<PriceBook
       number: book.number, currency: book.currency, inForceFrom: book.inForceFrom, isInForce: book.id === current.id,
       rates: rates.filter(rate => rate.priceBookId === book.id)
         .sort((a, b) => (POSITION.get(a.code) ?? 0) - (POSITION.get(b.code) ?? 0))
-        .map(({ code, value }) => ({ code, label: DEFINITIONS.get(code)?.label ?? code, unit: DEFINITIONS.get(code)?.unit ?? '', value: trimZeros(value) })),
+        .map(({ code, value }) => ({ code, label: DEFINITIONS.get(code)?.label ?? code, unit: DEFINITIONS.get(code)?.unit ?? '', group: DEFINITIONS.get(code)?.group ?? 'policy', value: trimDecimals(value) })),
     })),
   }
 }
-
-const trimZeros = (value: string) => value.includes('.') ? value.replace(/\.?0+$/, '') : value
