@@ -31,7 +31,8 @@ function inheritedEnv() {
  * @param {Surroundings} surroundings
  * @returns {NodeJS.ProcessEnv}
  */
-export function buildMigrationEnv({ ports, secrets, demoSignInsFile, mode }) {
+export function buildMigrationEnv(surroundings) {
+  const { ports, secrets, demoSignInsFile, mode } = surroundings
   return {
     ...inheritedEnv(),
     WIREWRIGHT_MODE: mode,
@@ -39,6 +40,7 @@ export function buildMigrationEnv({ ports, secrets, demoSignInsFile, mode }) {
     NUXT_DATABASE_URL: databaseUrl(ports.postgres, APP_ROLE, secrets.databaseAppPassword),
     WIREWRIGHT_APP_ROLE: APP_ROLE,
     WIREWRIGHT_DEMO_SIGN_INS_FILE: demoSignInsFile,
+    NUXT_ORIGIN: siteUrl(surroundings),
   }
 }
 

@@ -1,6 +1,6 @@
 import { spawn } from 'node:child_process'
 import { createWriteStream } from 'node:fs'
-import { PlainError, readLogTail } from './say.mjs'
+import { PlainError, readLogOfFailure } from './say.mjs'
 
 /**
  * @typedef {object} RunOptions
@@ -36,7 +36,7 @@ export function run(command, args, { input, ...options } = {}) {
 }
 
 /**
- * Runs a long command with its output in a log file. When it fails, throws a PlainError with the end of that log.
+ * Runs a long command with its output in a log file. When it fails, throws a PlainError with the telling part of that log.
  * @param {string} what for the message: 'The build'
  * @param {string} command
  * @param {readonly string[]} args
@@ -53,6 +53,6 @@ export async function runLogged(what, command, args, { logFile, ...options }) {
   }).finally(() => log.end())
   if (options.signal?.aborted) throw new PlainError(`${what} was stopped.`)
   if (exitCode !== 0) {
-    throw new PlainError(`${what} failed (exit code ${exitCode}). The end of ${logFile}:\n\n${await readLogTail(logFile, 40)}`)
+    throw new PlainError(`${what} failed (exit code ${exitCode}). From ${logFile}:\n\n${await readLogOfFailure(logFile)}`)
   }
 }

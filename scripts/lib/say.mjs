@@ -46,3 +46,13 @@ export async function readLogTail(path, lineCount = 25) {
     return ''
   }
 }
+
+/**
+ * The part of a log that tells why a command failed: from the first line that speaks of an error, or else the last lines.
+ * @param {string} path
+ */
+export async function readLogOfFailure(path) {
+  const lines = (await readLogTail(path, Number.MAX_SAFE_INTEGER)).split('\n')
+  const first = lines.findIndex((line) => /\b(ERROR|npm error|E:|\w*Error:)/.test(line))
+  return (first < 0 ? lines.slice(-25) : lines.slice(Math.max(0, first - 1), first + 24)).join('\n')
+}
