@@ -1,5 +1,6 @@
 import { fileURLToPath } from 'node:url'
 import { defineConfig } from 'vitest/config'
+import { compileMailComponents } from './emails/compile-sfc'
 
 const alias = {
   '#shared': fileURLToPath(new URL('./shared', import.meta.url)),
@@ -14,7 +15,7 @@ const alias = {
 export default defineConfig({
   test: {
     projects: [
-      { resolve: { alias }, test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
+      { plugins: [compileMailComponents()], resolve: { alias }, test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
       { resolve: { alias }, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], environment: 'node', testTimeout: 120_000 } },
       {
         resolve: { alias },
