@@ -7,7 +7,7 @@ import { DATA_FOLDER, PROJECT_FOLDER, START_LOCK, projectPath } from './project.
 import { runLogged } from './run.mjs'
 import { PlainError } from './say.mjs'
 
-const SOURCE_FOLDERS = ['app', 'server', 'shared', 'emails', 'drizzle', 'public']
+const SOURCE_FOLDERS = ['app', 'server', 'shared', 'emails', 'drizzle', 'public', 'formkit', 'vite']
 const SOURCE_FILES = ['nuxt.config.ts', 'formkit.config.ts', 'formkit.theme.ts', 'tailwind.config.ts', 'tailwind.config.js', 'tsconfig.json', 'package.json', 'package-lock.json']
 export const APP_ENTRY = projectPath('.output', 'server', 'index.mjs')
 // Inside the output: whoever deletes or replaces the build takes its stamp along.
