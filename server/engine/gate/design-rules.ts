@@ -12,12 +12,19 @@ function outside(value: number, limit: number, digits: number): string {
   return Number(short) === limit ? figure(value, digits + 3) : short
 }
 
+/** True for a spring whose index, wire and slenderness are quoted at once. Fast: sizing asks it about every candidate. */
+export function isUsualShape({ springIndex, wireDiameterMm, slenderness }: Pick<GateDesign, 'springIndex' | 'wireDiameterMm' | 'slenderness'>, policy: GatePolicy): boolean {
+  return springIndex >= policy.indexMin && springIndex <= policy.indexMax && wireDiameterMm >= policy.wireMinMm && wireDiameterMm <= policy.wireMaxMm && slenderness <= policy.slendernessMax
+}
+
 /** Rules about the spring itself. */
 export function judgeDesign(design: GateDesign, policy: GatePolicy): GateReason[] {
   return [...judgeGeometry(design, policy), ...judgeMaterial(design, policy), ...judgeChecks(design, policy)]
 }
 
-function judgeGeometry({ springIndex, wireDiameterMm, slenderness }: GateDesign, policy: GatePolicy): GateReason[] {
+function judgeGeometry(design: GateDesign, policy: GatePolicy): GateReason[] {
+  if (isUsualShape(design, policy)) return []
+  const { springIndex, wireDiameterMm, slenderness } = design
   const reasons: GateReason[] = []
   if (springIndex < policy.indexMin || springIndex > policy.indexMax) {
     const limit = springIndex < policy.indexMin ? policy.indexMin : policy.indexMax

@@ -3,6 +3,7 @@ import { sizeCompression } from '#shared/spring/sizing'
 import type { SizedDesign, SizingCandidate, SizingResult } from '#shared/spring/sizing/types'
 import type { CompressionEnds, MaterialCode } from '#shared/spring/codes'
 import type { CatalogueWire } from '../catalogue/list-wires'
+import { isUsualShape, readGatePolicy } from '../../engine/gate'
 import { createPriceObjective, type PriceBook, type PriceOptions } from '../../engine/pricing'
 import { allowedMaterialsFor } from './allowed-materials'
 import { sizeRequestOf } from './requirement'
@@ -55,9 +56,22 @@ export function findDesign(requirement: Requirement, { wires, book }: { wires: r
   return answer
 }
 
+/**
+ * The cheapest spring of a usual shape is preferred: wire alone would make the thinnest and longest one, which bows in any bore
+ * that is not close around it and would send every enquiry to a person for a few cents. Where no usual shape does it, the
+ * cheapest of all is taken, and the gate says what is unusual.
+ */
 function searchDesign(requirement: Requirement, { wires, book }: { wires: readonly CatalogueWire[], book: PriceBook }): FoundDesign {
   const { materials, rule } = allowedMaterialsFor(requirement)
-  const objective = priceObjectiveOf({ book, quantity: mainQuantityOf(requirement.quantities), options: priceOptionsOf(requirement), ends: requirement.ends })
-  const result = sizeCompression(sizeRequestOf(requirement, 1), wiresFor(wires, materials, book), { objective })
+  const price = priceObjectiveOf({ book, quantity: mainQuantityOf(requirement.quantities), options: priceOptionsOf(requirement), ends: requirement.ends })
+  const policy = readGatePolicy(book)
+  const usualPrice = (candidate: SizingCandidate<CatalogueWire>) => isUsualShape({
+    springIndex: candidate.meanDiameterMm / candidate.wire.wireDiameterMm, wireDiameterMm: candidate.wire.wireDiameterMm, slenderness: candidate.freeLengthMm / candidate.meanDiameterMm,
+  }, policy) ? price(candidate) : Number.NaN
+  const request = sizeRequestOf(requirement, 1)
+  const allowed = wiresFor(wires, materials, book)
+  // Price does not follow mass once shapes are left out, so every stepped spring of each wire is asked about.
+  const usual = sizeCompression(request, allowed, { objective: usualPrice, candidatesPerWire: Infinity, explainConflict: false })
+  const result = usual.designs.length > 0 ? usual : sizeCompression(request, allowed, { objective: price })
   return { best: result.designs[0] ?? null, result, materialRule: rule }
 }
