@@ -11,6 +11,7 @@ import { hashPassword } from '../../services/sessions/passwords'
 import { standardDiametersMm } from '../../../shared/spring/materials'
 import type { MaterialCode } from '../../../shared/spring/codes'
 import { DEMO_COMPANIES, DEMO_PEOPLE } from './demo-people'
+import { seedHistory } from './history'
 import { DEMO_CENTRES, DEMO_HOLIDAYS, DEMO_WIRE_PRICES, demoPricePerKg, demoSmallestPurchaseKg, demoStockKg } from './demo-shop'
 
 const CURRENCY = 'eur'
@@ -56,14 +57,18 @@ async function main(): Promise<void> {
   if (!connectionString) throw new Error('NUXT_DATABASE_URL is missing.')
   const pool = createPool(connectionString, error => console.error(error.message))
   try {
-    await createDatabase(pool).transaction(async (tx) => {
+    const db = createDatabase(pool)
+    const isNew = await db.transaction(async (tx) => {
       await tx.execute(sql`select pg_advisory_xact_lock(${SEED_LOCK})`)
       const [someone] = await tx.select({ id: people.id }).from(people).limit(1)
-      if (someone) return
+      if (someone) return false
       await seedPeople(tx)
       await seedPriceBooks(tx)
       await seedShop(tx)
+      return true
     })
+    // Tests make their own orders, so they start with none.
+    if (isNew && process.env.WIREWRIGHT_MODE === 'demo') await seedHistory(db, { origin: process.env.NUXT_ORIGIN ?? 'http://127.0.0.1:3000', timeZone: process.env.NUXT_SHOP_TIME_ZONE ?? 'Europe/Dublin', now: new Date() })
     const file = process.env.WIREWRIGHT_DEMO_SIGN_INS_FILE
     if (file) await writeFile(file, `${JSON.stringify(DEMO_PEOPLE.map(({ roles, email, password }) => ({ role: roles.join(', '), email, password })), null, 2)}\n`, { mode: 0o600 })
   }

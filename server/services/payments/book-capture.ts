@@ -18,6 +18,8 @@ export type Capture = {
   /** Both rows locked by the caller, the order first. */
   order: typeof orders.$inferSelect, payment: PaymentRow
   fact: string, sessionId: string, paymentIntentId: string | null
+  /** When the money came; now, unless it is booked later. */
+  now?: Date
 }
 
 /**
@@ -30,7 +32,7 @@ export async function bookCapture(tx: Transaction, desk: PaymentDesk, capture: C
   const [booked] = await tx.select({ id: ledgerTransactions.id }).from(ledgerTransactions).where(eq(ledgerTransactions.fact, fact))
   if (booked) return 'booked already'
 
-  const now = new Date()
+  const now = capture.now ?? new Date()
   const isFirst = await markPaid(tx, capture, now)
   const isWanted = isFirst && PAYABLE_IN[payment.kind].includes(order.state)
   const account = !isWanted ? ACCOUNTS.credit : payment.kind === 'deposit' ? ACCOUNTS.deposits : ACCOUNTS.balances
