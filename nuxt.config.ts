@@ -1,5 +1,5 @@
 import type { NitroConfig } from 'nitropack/types'
-import VueRollup from 'unplugin-vue/rollup'
+import { compileMailComponents } from './emails/compile-sfc'
 import { leanEntry } from './vite/lean-entry'
 import { slimFormKit } from './vite/slim-formkit'
 
@@ -11,7 +11,7 @@ const nitro: Pick<NitroConfig, 'compressPublicAssets' | 'experimental' | 'schedu
   experimental: { tasks: true },
   // Each process claims its work in the database, so several processes may run these side by side.
   scheduledTasks: { '*/5 * * * *': ['payments:reconcile'], '17 * * * *': ['housekeeping'] },
-  rollupConfig: { plugins: [VueRollup()] },
+  rollupConfig: { plugins: [compileMailComponents()] },
 }
 
 export default defineNuxtConfig({
