@@ -1,9 +1,25 @@
-/** Starts the workers of this process; each claims its work in the database, so that several processes share it. */
+/** How long requests may take to finish after a stop was asked for. */
+const FINISH_WITHIN_MS = 10_000
+
+/**
+ * Starts the workers of this process, each claiming its work in the database, so that several processes share it. Asked to stop,
+ * they take nothing new at once; the server finishes its requests, and then the pool is closed and the process ends.
+ */
 export default defineNitroPlugin((nitro) => {
-  outboxWorker.start()
-  stripeEventWorker.start()
+  const workers = [outboxWorker, stripeEventWorker]
+  for (const worker of workers) worker.start()
+
+  // Nitro reads this setting only after its plugins have run; its own default is half a minute.
+  process.env.NITRO_SHUTDOWN_TIMEOUT ??= String(FINISH_WITHIN_MS)
+  for (const signal of ['SIGTERM', 'SIGINT'] as const) {
+    process.once(signal, () => {
+      log.info('stopping', { signal })
+      for (const worker of workers) void worker.stop()
+    })
+  }
   nitro.hooks.hook('close', async () => {
-    await Promise.all([outboxWorker.stop(), stripeEventWorker.stop()])
+    await Promise.all(workers.map(worker => worker.stop()))
     await closeDatabase()
+    log.info('stopped')
   })
 })

@@ -1,0 +1,3 @@
+import { listStuckEvents } from '../../../services/stripe-events/stuck'
+
+export default defineRoute({ access: ['admin'] }, ({ context }) => listStuckEvents(context))
