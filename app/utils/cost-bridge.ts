@@ -25,3 +25,13 @@ export function buildBridge(job: Pick<JobCostView, 'comparedQuotedMinor' | 'actu
     axisFromMinor, axisToMinor: highest + (highest - axisFromMinor) * 0.02, isBroken,
   }
 }
+
+/** Round amounts (1, 2 or 5 times a power of ten of the currency's unit) across the axis, at most `most` of them; minor units of a hundredth. */
+export function axisTicks({ axisFromMinor, axisToMinor }: Pick<Bridge, 'axisFromMinor' | 'axisToMinor'>, most: number): number[] {
+  const least = (axisToMinor - axisFromMinor) / most
+  const power = 10 ** Math.floor(Math.log10(least))
+  const step = Math.max(100, power * ([1, 2, 5, 10].find(times => times * power >= least) ?? 10))
+  const ticks: number[] = []
+  for (let minor = Math.ceil(axisFromMinor / step) * step; minor <= axisToMinor; minor += step) ticks.push(Math.round(minor))
+  return ticks
+}

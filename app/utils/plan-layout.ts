@@ -15,6 +15,21 @@ export function workingDays(from: string, count: number): string[] {
   return days
 }
 
+/** Words beneath a lane, for bars too narrow to hold their own. */
+export type LaneLabel = { leftPercent: number, text: string }
+
+/** Labels for narrow bars (their first pieces, from left to right); those that would overlap are joined: `1207, 1208`, `1207 to 1212`. */
+export function laneLabels(bars: readonly { leftPercent: number, text: string }[], labelWidthPercent: number): LaneLabel[] {
+  const labels: { leftPercent: number, texts: string[] }[] = []
+  for (const { leftPercent, text } of [...bars].sort((a, b) => a.leftPercent - b.leftPercent)) {
+    const last = labels.at(-1)
+    const lastWidth = last ? Math.min(2, last.texts.length) * labelWidthPercent : 0
+    if (last && leftPercent < last.leftPercent + lastWidth) last.texts.push(text)
+    else labels.push({ leftPercent, texts: [text] })
+  }
+  return labels.map(({ leftPercent, texts }) => ({ leftPercent, text: texts.length > 2 ? `${texts[0]} to ${texts.at(-1)}` : texts.join(', ') }))
+}
+
 const formats = new Map<string, Intl.DateTimeFormat>()
 /** Calendar day and minute of the day of a moment in a zone. */
 export function wallClock(moment: Date, timeZone: string): { day: string, minute: number } {

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { buildBridge } from '../../../app/utils/cost-bridge'
+import { axisTicks, buildBridge } from '../../../app/utils/cost-bridge'
 
 const row = (label: string, quotedMinor: number, actualMinor: number | null) => ({
   code: label, label, quotedBasis: '', actualBasis: '', quotedMinor, actualMinor, differenceMinor: actualMinor === null ? null : actualMinor - quotedMinor,
@@ -23,5 +23,16 @@ describe('the cost bridge', () => {
     const empty = buildBridge({ comparedQuotedMinor: 0, actualCostMinor: 0, rows: [row('Wire', 10_000, null)] })
     expect(empty).toMatchObject({ axisFromMinor: 0, isBroken: false })
     expect(empty.axisToMinor).toBeGreaterThan(0)
+  })
+})
+
+describe('the ticks of its axis', () => {
+  it('are round amounts within it', () => {
+    expect(axisTicks({ axisFromMinor: 63_000, axisToMinor: 76_000 }, 5)).toEqual([65_000, 70_000, 75_000])
+    expect(axisTicks({ axisFromMinor: 0, axisToMinor: 10_100 }, 5)).toEqual([0, 5_000, 10_000])
+  })
+  it('are never finer than a whole unit and never more than asked for, but for one at the start', () => {
+    expect(axisTicks({ axisFromMinor: 0, axisToMinor: 250 }, 5)).toEqual([0, 100, 200])
+    expect(axisTicks({ axisFromMinor: 0, axisToMinor: 99_999 }, 3).length).toBeLessThanOrEqual(4)
   })
 })

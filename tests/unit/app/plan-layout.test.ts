@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { barPieces, positionOf, wallClock, workingDays, type PlanWindow } from '../../../app/utils/plan-layout'
+import { barPieces, laneLabels, positionOf, wallClock, workingDays, type PlanWindow } from '../../../app/utils/plan-layout'
 
 const window: PlanWindow = { days: workingDays('2026-12-07', 10), startMinute: 6 * 60, endMinute: 22 * 60, timeZone: 'Europe/Dublin' }
 const early = { startMinute: 6 * 60, endMinute: 14 * 60 }
@@ -52,5 +52,17 @@ describe('a bar', () => {
         expect(piece.leftPercent + piece.widthPercent).toBeLessThanOrEqual(100 + 1e-9)
       }
     }))
+  })
+})
+
+describe('words beneath narrow bars', () => {
+  it('stand at their bar', () => {
+    expect(laneLabels([{ leftPercent: 20, text: '1202' }, { leftPercent: 2, text: '1201' }], 5)).toEqual([{ leftPercent: 2, text: '1201' }, { leftPercent: 20, text: '1202' }])
+  })
+  it('are joined where they would overlap', () => {
+    expect(laneLabels([{ leftPercent: 2, text: '1201' }, { leftPercent: 4, text: '1202' }], 5)).toEqual([{ leftPercent: 2, text: '1201, 1202' }])
+  })
+  it('name the first and the last of many', () => {
+    expect(laneLabels([2, 3, 4, 5, 16].map(leftPercent => ({ leftPercent, text: String(1200 + leftPercent) })), 5)).toEqual([{ leftPercent: 2, text: '1202 to 1205' }, { leftPercent: 16, text: '1216' }])
   })
 })
