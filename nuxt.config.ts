@@ -37,7 +37,7 @@ export default defineNuxtConfig({
       for (const entry of Object.values(manifest)) entry.dynamicImports = []
     },
   },
-  vite: { plugins: [slimFormKit(), leanEntry()] },
+  vite: { plugins: [slimFormKit(), leanEntry()], $client: { build: { rollupOptions: { output: { experimentalMinChunkSize: 3000 } } } } },
   app: {
     head: {
       htmlAttrs: { lang: 'en-GB' },
@@ -72,7 +72,8 @@ export default defineNuxtConfig({
       },
     },
     sessionRefresh: { enableOnWindowFocus: false, enablePeriodically: false },
-    globalAppMiddleware: { isEnabled: true, allow404WithoutAuth: true, addDefaultCallbackUrl: true },
+    // app/middleware/signed-in.global.ts does this.
+    globalAppMiddleware: { isEnabled: false, allow404WithoutAuth: false },
   },
 
   routeRules: {
