@@ -28,7 +28,9 @@ export default defineNitroPlugin((nitro) => {
   const settings = useSettings()
   const payHost = settings.stripe.host ? `${settings.stripe.protocol}://${settings.stripe.host}:${settings.stripe.port}` : 'https://checkout.stripe.com'
   nitro.hooks.hook('request', (event) => {
-    setResponseHeaders(event, { ...FIXED, 'content-security-policy': `default-src 'none'; frame-ancestors 'none'` })
+    setResponseHeaders(event, FIXED)
+    // Only for data: on a page it would come along with 304 Not Modified, and the browser would put it in place of the page's own.
+    if (event.path.startsWith('/api/')) setResponseHeader(event, 'content-security-policy', `default-src 'none'; frame-ancestors 'none'`)
     if (settings.mode === 'production') setResponseHeader(event, 'strict-transport-security', 'max-age=63072000; includeSubDomains')
   })
   nitro.hooks.hook('render:response', (response) => {
