@@ -4,6 +4,7 @@ const PARTS: readonly { name: string, to: string, roles: readonly Role[], tells:
   { name: 'Price books', to: '/works/price-books', roles: ['admin'], tells: 'Every rate that a quote is made from, and since when it holds.' },
   { name: 'Wire', to: '/works/wire', roles: ['admin', 'supervisor'], tells: 'What lies in the rack, what is set aside for jobs, and what a kilogram costs.' },
   { name: 'Mail', to: '/works/mail', roles: ['admin'], tells: 'Which e-mails have gone out, which wait, and which could not be sent.' },
+  { name: 'Payments', to: '/works/payments', roles: ['admin'], tells: 'Messages of the payment service that could not be worked on.' },
   { name: 'People', to: '/works/people', roles: ['admin'], tells: 'Who can sign in, what they may do, and where they are signed in now.' },
 ]
 
