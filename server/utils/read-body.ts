@@ -1,6 +1,11 @@
 import type { H3Event } from 'h3'
 
-const drop = (key: string, value: unknown) => key === '__proto__' ? undefined : value
+/** Leaves out what could reach a prototype, and refuses text that is no Unicode (half of a pair), which the database would not store. */
+function revive(key: string, value: unknown): unknown {
+  if (key === '__proto__') return undefined
+  if (typeof value === 'string' && !value.isWellFormed()) throw new SyntaxError('text that is no Unicode')
+  return value
+}
 
 /**
  * Reads the raw body up to a limit, counting while it streams in.
@@ -28,7 +33,7 @@ export async function readJsonBody(event: H3Event, maxBytes: number): Promise<un
   if (type !== 'application/json') throw new HttpProblem(415, 'Send JSON, with content-type application/json.')
   const raw = await readLimitedBody(event, maxBytes)
   try {
-    return JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(raw), drop)
+    return JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(raw), revive)
   }
   catch {
     throw new HttpProblem(400, 'The body is not valid JSON.')

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { accessKeySchema, reasonSchema, textSchema, versionSchema } from './shared-fields'
+import { accessKeySchema, pageQuerySchema, reasonSchema, textSchema, versionSchema } from './shared-fields'
 import type { CompressionEnds, MaterialCode } from '../spring/codes'
 import type { CompressionEvaluation } from '../spring/mechanics/types'
 import type { OrderState } from './order-states'
@@ -62,12 +62,14 @@ export type EstimatingView = {
   events: { at: string, who: string, from: OrderState | null, to: OrderState, why: string }[],
 }
 const moneyMinor = z.int('A whole number of cents.').min(0).max(99_999_999)
-/** Replace the amount of one line at one quantity; `amountMinor: null` goes back to the computed one. */
+/** Replace the amount of one line at one quantity; `amountMinor: null` goes back to the computed one. `version` is the draft's, as in the next two. */
 export const overrideLineBodySchema = z.strictObject({ version: versionSchema, quantity: z.int().min(1).max(1_000_000), code: z.string().max(40), amountMinor: moneyMinor.nullable(), reason: reasonSchema })
 /** Replace the margin of the whole quote; null goes back to the book's. */
 export const overrideMarginBodySchema = z.strictObject({ version: versionSchema, marginPercent: z.number().min(-50).max(95).nullable(), reason: reasonSchema })
 export const sendQuoteBodySchema = z.strictObject({ version: versionSchema, noteToCustomer: textSchema(2000).default('') })
+/** `version` is the order's, as for revising and taking on. The reason is told to the customer. */
 export const withdrawBodySchema = z.strictObject({ version: versionSchema, reason: reasonSchema })
+export const estimatingQuerySchema = pageQuerySchema.extend({ state: z.enum(['waiting', 'quoted', 'all']).default('waiting'), q: z.string().trim().max(100).refine(text => !/\p{Cc}/u.test(text), 'One line of text.').default('') })
 
 /** The order as its customer follows it. */
 export type OrderRow = { ref: string, title: string, state: OrderState, quantity: number | null, createdAt: string, grossMinor: number | null, currency: string, dispatchOn: string | null }

@@ -9,7 +9,7 @@ export const countrySchema = z.enum(Object.keys(COUNTRIES) as [keyof typeof COUN
 
 /** One e-mail address, lower-cased; never a list of them. */
 export const emailSchema = z.string('Give an e-mail address.').trim().toLowerCase().max(254, 'An e-mail address has at most 254 characters.')
-  .regex(/^[^\s@,;<>"()[\]\\]+@[^\s@,;<>"()[\]\\]+\.[^\s@,;<>"()[\]\\.]{2,}$/, 'Give one e-mail address, such as name@firm.example.')
+  .regex(/^[^\s@,;<>"()[\]\\\p{Cc}]+@[^\s@,;<>"()[\]\\\p{Cc}]+\.[^\s@,;<>"()[\]\\.\p{Cc}]{2,}$/u, 'Give one e-mail address, such as name@firm.example.')
 
 /** One line of text without control characters. */
 export const lineSchema = (what: string, max: number) => z.string(`Give ${what}.`).trim().min(1, `Give ${what}.`).max(max, `At most ${max} characters.`)

@@ -12,7 +12,7 @@ const MOST_MINUTES = 120_000
  */
 export function promiseDispatch(
   { design, wire, priced, book, plan, clock }:
-  { design: PricedDesign, wire: CatalogueWire, priced: PricedQuantity, book: PriceBook, plan: ShopPlan, clock: { now: Date, timeZone: string } },
+  { design: PricedDesign, wire: CatalogueWire, priced: Pick<PricedQuantity, 'quantity' | 'plannedMinutes' | 'wirePlannedKg'>, book: PriceBook, plan: ShopPlan, clock: { now: Date, timeZone: string } },
 ): string | null {
   const rates = readNumberRates(book)
   const minutes = Object.values(priced.plannedMinutes).reduce((sum, { setUpMinutes, runMinutes }) => sum + setUpMinutes + runMinutes, 0)

@@ -3,6 +3,7 @@ import { toCurrency } from '#shared/money'
 import { priceBookRates, priceBooks } from '../../database/schema'
 import type { Queryable } from '../../database/client'
 import { RATE_CODES, type PriceBook, type RateCode } from '../../engine/pricing'
+import { trimDecimals } from '../decimal-text'
 
 /** A price book as it is stored, with its key. */
 export type StoredPriceBook = PriceBook & { id: string }
@@ -19,14 +20,7 @@ export async function readBook(db: Queryable, id: string): Promise<StoredPriceBo
   const rates = Object.fromEntries(RATE_CODES.map(({ code }) => {
     const value = values.get(code)
     if (value === undefined) throw new Error(`price book ${book.number} has no rate ${code}`)
-    return [code, withoutIdleZeros(value)]
+    return [code, trimDecimals(value)]
   })) as Record<RateCode, string>
   return { id: book.id, number: book.number, currency: toCurrency(book.currency), inForceFrom: book.inForceFrom, rates }
-}
-
-/** numeric(16,6) gives six decimals; what a person wrote had fewer: 54.000000 is 54.00, 12.000000 is 12, 0.150000 is 0.15. */
-function withoutIdleZeros(value: string): string {
-  const [whole = '0', fraction = ''] = value.split('.')
-  const kept = fraction.replace(/0+$/, '')
-  return kept === '' ? whole : `${whole}.${kept}`
 }

@@ -14,6 +14,7 @@ import { workingPointsOf } from '../springs/requirement'
 import { findSentRevision, listRungs, type QuoteRecord } from './find-revision'
 import { toLadder } from './ladder'
 import { usageNotesOf } from './notes'
+import { trimDecimals } from '../decimal-text'
 
 /**
  * The quote as its customer reads it, by the link's key or signed in. While a person has to answer there is no spring and no
@@ -45,7 +46,7 @@ async function describeSent(context: ServiceContext, quote: QuoteRecord, order: 
   ])
   const sentOn = quote.sentAt ? toLocalTime(quote.sentAt.getTime(), context.timeZone).day : null
   return {
-    revision: quote.revision, design: quote.design, currency: quote.currency, taxPercent: trimmed(quote.taxPercent), depositPercent: trimmed(quote.depositPercent), validUntil: quote.validUntil,
+    revision: quote.revision, design: quote.design, currency: quote.currency, taxPercent: trimDecimals(quote.taxPercent), depositPercent: trimDecimals(quote.depositPercent), validUntil: quote.validUntil,
     depositBy: sentOn && addDays(sentOn, readNumberRates(book)['policy.deposit-hold-days']), sentAt: quote.sentAt?.toISOString() ?? null,
     checkedBy: checker[0]?.name ?? null, priceBookNumber: book.number, noteToCustomer: quote.noteToCustomer,
     notes: quote.design ? usageNotesOf(quote.design, order.request.requirement) : [], ladder: toLadder(rungs),
@@ -59,6 +60,3 @@ async function describeWaiting(context: ServiceContext): Promise<QuotePart> {
     priceBookNumber: null, noteToCustomer: '', notes: [], ladder: [],
   }
 }
-
-/** A percentage without idle zeros: 20.000 is 20. */
-const trimmed = (percent: string) => percent.includes('.') ? percent.replace(/\.?0+$/, '') : percent
