@@ -1,8 +1,8 @@
-import { and, eq } from 'drizzle-orm'
+import { and, eq, gt } from 'drizzle-orm'
 import type { OrderState } from '#shared/schemas/order-states'
 import type { MailKind } from '../../../emails/payloads'
 import type { Database } from '../../database/client'
-import { orders, outbox, payments, people } from '../../database/schema'
+import { emailTokens, orders, outbox, payments } from '../../database/schema'
 
 type Row = Pick<typeof outbox.$inferSelect, 'orderId' | 'objectId' | 'recipient' | 'createdAt' | 'payload'>
 
@@ -17,7 +17,7 @@ const ENDED: readonly OrderState[] = ['withdrawn', 'expired', 'cancelled']
 export async function findReasonToSkip(db: Database, kind: MailKind, row: Row): Promise<string | null> {
   if (kind === 'sign-in-link') return Date.now() - row.createdAt.getTime() > SIGN_IN_WANTED_MINUTES * 60_000 ? 'asked for too long ago' : null
   if (row.orderId === null) return null
-  const [order] = await db.select({ state: orders.state, personId: orders.personId }).from(orders).where(eq(orders.id, row.orderId))
+  const [order] = await db.select({ state: orders.state }).from(orders).where(eq(orders.id, row.orderId))
   if (!order) return 'the order is gone'
   const isEnded = ENDED.includes(order.state)
   switch (kind) {
@@ -26,7 +26,7 @@ export async function findReasonToSkip(db: Database, kind: MailKind, row: Row): 
     case 'enquiry-waits': case 'staff-enquiry-waits':
       return order.state === 'enquiry' ? null : 'it was answered meanwhile'
     case 'confirm-address':
-      return isEnded ? 'the order has ended' : await isConfirmed(db, order.personId) ? 'the address is confirmed' : null
+      return isEnded ? 'the order has ended' : await isConfirmedSince(db, row.orderId, row.createdAt) ? 'the address was confirmed meanwhile' : null
     case 'payment-failed':
       return isEnded ? 'the order has ended' : await isPaid(db, row.orderId, kindOfPayment(row.payload)) ? 'it is paid meanwhile' : null
     case 'job-finished':
@@ -38,10 +38,11 @@ export async function findReasonToSkip(db: Database, kind: MailKind, row: Row): 
   }
 }
 
-async function isConfirmed(db: Database, personId: string | null): Promise<boolean> {
-  if (personId === null) return false
-  const [person] = await db.select({ emailConfirmedAt: people.emailConfirmedAt }).from(people).where(eq(people.id, personId))
-  return person?.emailConfirmedAt != null
+/** True where a link of this order was used after the mail was written. One confirmed earlier says nothing: the link also signs in. */
+async function isConfirmedSince(db: Database, orderId: string, since: Date): Promise<boolean> {
+  const rows = await db.select({ usedAt: emailTokens.usedAt }).from(emailTokens)
+    .where(and(eq(emailTokens.orderId, orderId), eq(emailTokens.purpose, 'confirm-address'), gt(emailTokens.usedAt, since))).limit(1)
+  return rows.length > 0
 }
 
 async function isPaid(db: Database, orderId: string, kind: 'deposit' | 'balance'): Promise<boolean> {
