@@ -77,8 +77,8 @@ export default defineNuxtConfig({
   },
 
   routeRules: {
-    // The public pages hold nothing personal, so each is rendered once and kept.
-    '/': { cache: { maxAge: 3600, swr: true } },
+    // The form holds nothing personal, so it is rendered once and kept. The front page cannot be: this Nuxt keeps a kept page's
+    // payload under its path, and '/' is no valid key of its storage.
     '/order': { cache: { maxAge: 3600, swr: true } },
   },
 
