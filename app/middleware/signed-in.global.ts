@@ -6,7 +6,7 @@ import { isShowingError } from '~/utils/is-showing-error'
  * because it knows no session while the server renders an error.)
  */
 export default defineNuxtRouteMiddleware((to) => {
-  if (to.meta.auth === false || to.matched.length === 0 || isShowingError()) return
+  if (to.meta.auth === false || to.path === '/sign-in' || to.matched.length === 0 || isShowingError()) return
   if (useAuth().status.value === 'authenticated') return
   return navigateTo({ path: '/sign-in', query: { redirect: to.fullPath } })
 })
