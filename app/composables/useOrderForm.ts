@@ -26,18 +26,29 @@ export function useOrderForm() {
 
   // What is kept on the device, and the units, are known only to the browser: the page is rendered once for everybody.
   let keepLater: ReturnType<typeof setTimeout> | undefined
+  /** Keeps at once what was still to be kept: the page is being left. */
+  const keepNow = () => {
+    if (keepLater === undefined) return
+    clearTimeout(keepLater)
+    keepLater = undefined
+    store.keep(new Date())
+  }
   onMounted(() => {
+    window.addEventListener('pagehide', keepNow)
     units.recall()
     store.recall()
     store.convertTo(units.system)
     watch(() => units.system, system => store.convertTo(system))
     watch(() => store.draft, () => {
       clearTimeout(keepLater)
-      keepLater = setTimeout(() => store.keep(new Date()), KEEP_AFTER_MS)
+      keepLater = setTimeout(keepNow, KEEP_AFTER_MS)
       submit.recheck()
     }, { deep: true })
   })
-  onScopeDispose(() => clearTimeout(keepLater))
+  onScopeDispose(() => {
+    if (import.meta.client) window.removeEventListener('pagehide', keepNow)
+    clearTimeout(keepLater)
+  })
   watch(submit.errors, found => getNode('order-form')?.setErrors([], Object.fromEntries(Object.entries(found).map(([field, message]) => [field, message ?? '']))))
 
   const chosen = ref<number | null>(null)
