@@ -48,8 +48,8 @@ export const ORDER_FIELD_NAMES = Object.keys(ORDER_FIELDS) as OrderFieldName[]
 
 /** The physical quantity typed into a field, if it is one. */
 export function quantityOf(field: OrderFieldName): Quantity | null {
-  const entry: { quantity?: Quantity } = ORDER_FIELDS[field]
-  return entry.quantity ?? null
+  const entry = ORDER_FIELDS[field]
+  return 'quantity' in entry ? entry.quantity : null
 }
 
 /** The id of a field's control on the page. */

@@ -25,10 +25,10 @@ function isFetchError(error: unknown): error is Error & { response?: { status: n
   return error instanceof Error && error.name === 'FetchError'
 }
 
-// Loading Zod for this would cost every page more than the page itself.
+// Loading Zod for this would cost every page more than the page itself: what has a title is taken for what our own server wrote.
 function readProblem(data: unknown): Partial<Problem> | null {
   const value = typeof data === 'string' ? safeParse(data) : data
-  return typeof value === 'object' && value !== null && 'title' in value ? value : null
+  return typeof value === 'object' && value !== null && 'title' in value && typeof value.title === 'string' ? value as Partial<Problem> : null
 }
 
 function safeParse(text: string): unknown {
