@@ -7,12 +7,16 @@ import { send } from '~/utils/send'
 export function useQuote(orderRef: string, key: string | undefined) {
   const quote = useFetch<QuoteView>(`/api/quotes/${orderRef}`, { key: `quote-${orderRef}`, query: { key } })
   const { data: view, refresh } = quote
-  const chosen = ref<number | null>(null)
-  const choose = (value: QuoteView | null | undefined) => {
-    const quantities = value?.ladder.map(rung => rung.quantity) ?? []
-    chosen.value = value?.acceptedQuantity ?? (chosen.value !== null && quantities.includes(chosen.value) ? chosen.value : quantities[Math.floor((quantities.length - 1) / 2)] ?? null)
-  }
-  watch(view, choose, { immediate: true })
+  const picked = ref<number | null>(null)
+  // Follows from the quote, so that server and browser choose alike: what was accepted, else what was picked, else the middle one.
+  const chosen = computed<number | null>({
+    get: () => {
+      const quantities = view.value?.ladder.map(rung => rung.quantity) ?? []
+      const kept = view.value?.acceptedQuantity ?? picked.value
+      return kept !== null && quantities.includes(kept) ? kept : quantities[Math.floor((quantities.length - 1) / 2)] ?? null
+    },
+    set: (quantity) => { picked.value = quantity },
+  })
 
   const pay = usePay(() => orderRef)
   const accept = useAct(async () => {
