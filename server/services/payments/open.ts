@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import Stripe from 'stripe'
 import { toCurrency } from '#shared/money/index'
 import type { OpenedPayment, PaymentKind } from '#shared/schemas/payment'
@@ -7,13 +7,13 @@ import { log } from '../../utils/log'
 import { payments } from '../../database/schema'
 import type { Database } from '../../database/client'
 import { inTransaction, type ServiceContext } from '../context'
-import { conflict, DomainError } from '../errors'
+import { conflict, DomainError, notFound } from '../errors'
 import { isOwnOrder, findOrder, type OrderRecord } from '../orders/access'
 import { orderRefOf } from '../orders/reference'
-import { notFound } from '../errors'
 import { storeSession, takeAttempt, type PaymentRow } from './attempts'
 import { closeSession } from './close'
 import type { PaymentDesk } from './desk'
+import { findSession } from './sync'
 
 const OTHER_CLICK_MS = 6_000
 const wait = (ms: number) => new Promise(resolve => setTimeout(resolve, ms))
@@ -73,16 +73,35 @@ export async function createSession(db: Database, desk: PaymentDesk, order: Pick
     paymentId: payment.id, orderId: order.id, orderRef, kind: payment.kind, attempt: payment.attempt, amountMinor: payment.amountMinor, currency: toCurrency(payment.currency),
     expiresAt: payment.expiresAt, what: `${payment.kind === 'deposit' ? 'Deposit' : 'Balance'} for order ${orderRef}`, returnUrl: `${desk.origin}/account/orders/${orderRef}`,
   })
-  let session: Stripe.Checkout.Session
   try {
-    session = await desk.stripe.checkout.sessions.create(params, { idempotencyKey: payment.idempotencyKey })
+    await storeSession(db, payment.id, await desk.stripe.checkout.sessions.create(params, { idempotencyKey: payment.idempotencyKey }))
   }
   catch (error) {
     if (!(error instanceof Stripe.errors.StripeError)) throw error
-    // The same key with other parameters would be a defect of ours, and so would parameters that Stripe refuses: never a new key by itself.
-    if (error instanceof Stripe.errors.StripeIdempotencyError || error instanceof Stripe.errors.StripeInvalidRequestError) log.error('payment-open-refused', error, { payment: payment.id })
-    else log.warn('payment-open-unanswered', { payment: payment.id, type: error.type, code: error.code ?? null })
+    await recover(db, desk, payment, error)
+  }
+}
+
+/**
+ * After an answer that says nothing, asks Stripe whether it made the session all the same. An error that is replayed for the key
+ * would be so for a day: if there is no session behind it, the attempt is closed, and paying goes on with the next one.
+ * @throws DomainError unavailable while nothing is known
+ */
+async function recover(db: Database, desk: PaymentDesk, payment: PaymentRow, error: InstanceType<typeof Stripe.errors.StripeError>): Promise<void> {
+  // The same key with other parameters is a defect of ours, and so are parameters that Stripe refuses: never a new key by itself.
+  if (error instanceof Stripe.errors.StripeIdempotencyError || error instanceof Stripe.errors.StripeInvalidRequestError) {
+    log.error('payment-open-refused', error, { payment: payment.id })
     throw unanswered()
   }
-  await storeSession(db, payment.id, session)
+  log.warn('payment-open-unanswered', { payment: payment.id, type: error.type, code: error.code ?? null })
+  const isAnswer = (error.statusCode ?? 0) >= 500
+  const sessionId = isAnswer ? await findSession(desk, payment).catch(refuseQuietly) : undefined
+  if (sessionId) await storeSession(db, payment.id, await desk.stripe.checkout.sessions.retrieve(sessionId).catch(refuse))
+  else if (sessionId === null && error.headers?.['idempotent-replayed'] === 'true') await db.update(payments).set({ state: 'expired' }).where(and(eq(payments.id, payment.id), eq(payments.state, 'opening')))
+  else throw unanswered()
 }
+
+function refuse(error: unknown): never {
+  throw error instanceof Stripe.errors.StripeError ? unanswered() : error
+}
+const refuseQuietly = (error: unknown): undefined => error instanceof Stripe.errors.StripeError ? undefined : refuse(error)

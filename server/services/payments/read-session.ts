@@ -13,6 +13,8 @@ export type SessionReading =
  * anything. A value that this version does not know is a mismatch, never a guess.
  */
 export function readSession(session: Stripe.Checkout.Session, payment: Pick<PaymentRow, 'id' | 'stripeSessionId' | 'amountMinor' | 'currency'>, livemode: boolean): SessionReading {
+  // An expired session takes no money, whatever else it says.
+  if (session.status === 'expired' && session.client_reference_id === payment.id) return { sessionId: session.id, paymentIntentId: null, url: null, state: 'expired' }
   const expected: [string, unknown, unknown][] = [
     ['client_reference_id', session.client_reference_id, payment.id],
     ['metadata.payment_id', session.metadata?.payment_id, payment.id],
@@ -29,7 +31,6 @@ export function readSession(session: Stripe.Checkout.Session, payment: Pick<Paym
   const paymentIntentId = intent?.id ?? (typeof session.payment_intent === 'string' ? session.payment_intent : null)
   const ids = { sessionId: session.id, paymentIntentId, url: session.url }
   if (session.status === 'open') return { ...ids, state: 'open' }
-  if (session.status === 'expired') return { ...ids, state: 'expired' }
   if (session.status !== 'complete') return { state: 'mismatch', words: `status is ${String(session.status).slice(0, 40)}` }
   if (session.payment_status === 'paid' || session.payment_status === 'no_payment_required') return { ...ids, state: 'paid', fact: `capture:${paymentIntentId ?? session.id}` }
   if (session.payment_status !== 'unpaid') return { state: 'mismatch', words: `payment_status is ${String(session.payment_status).slice(0, 40)}` }

@@ -3,7 +3,7 @@ import { inject } from 'vitest'
 
 /** Tells the Stripe fake to do something: see its control interface. */
 export async function tellStripe<T = Record<string, unknown>>(path: string, body: object = {}): Promise<T> {
-  const response = await fetch(`${inject('stripeFakeUrl')}/_fake/${path}`, { method: 'POST', headers: { 'content-type': 'application/json' }, body: JSON.stringify(body) })
+  const response = await fetch(`${inject('stripeFakeUrl')}/_fake/${path}`, { method: 'POST', headers: { 'content-type': 'application/json', 'authorization': `Bearer ${inject('stripeSecretKey')}` }, body: JSON.stringify(body) })
   if (!response.ok) throw new Error(`the Stripe fake answered ${path} with ${response.status}: ${await response.text()}`)
   return await response.json() as T
 }
