@@ -1,6 +1,7 @@
 import type { StoredDesign } from '#shared/schemas/quote'
 import type { UnitSystem } from '#shared/units/convert'
 import { formatForce, formatLength, formatNumber, formatRate, formatStress, formatWireDiameter, THIN_SPACE } from '#shared/units/format'
+import { FATIGUE_CYCLES } from '#shared/spring/mechanics/fatigue'
 import { wireDiameterToleranceMm } from '#shared/spring/materials/wire-tolerance'
 import { ENDS_WORDS } from './choice-words'
 
@@ -50,7 +51,7 @@ export function quoteRows(design: StoredDesign, { units, strokes, strokesPerMinu
   const parallelism = evaluation.tolerances.find(one => one.quantity === 'parallelismMm')
   if (squareness && parallelism) rows.push({ name: 'Squareness, parallelism', symbol: 'e_1, e_2', value: `${fine(squareness.plusMinus)}, ${fine(parallelism.plusMinus)}`, limit: 'at most' })
   rows.push(
-    { name: 'Load cycles', symbol: 'N', value: formatNumber(strokes), limit: fatigue ? `reserve ${formatNumber(fatigue.safetyFactor, 2)}` : '' },
+    { name: 'Load cycles', symbol: 'N', value: formatNumber(strokes), limit: fatigue && strokes >= FATIGUE_CYCLES ? `reserve ${formatNumber(fatigue.safetyFactor, 2)}` : '' },
     { name: 'Own frequency', symbol: 'f_e', value: `${formatNumber(evaluation.naturalFrequencyHz)}${THIN_SPACE}Hz`, limit: strokesPerMinute > 0 ? `works at ${formatNumber(strokesPerMinute / 60, strokesPerMinute < 60 ? 2 : 0)}${THIN_SPACE}Hz` : '' },
     { name: 'Material', symbol: '', value: `${design.materialName}${evaluation.tensileStrengthMpa === null ? '' : `, Rm ${formatStress(evaluation.tensileStrengthMpa, units)}`}`, limit: '', isWide: true },
     { name: 'Ends, hand', symbol: '', value: `${ENDS_WORDS[design.ends].toLowerCase()}, ${design.hand}-hand`, limit: '', isWide: true },

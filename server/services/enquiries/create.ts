@@ -59,14 +59,14 @@ async function storeEnquiry(tx: Transaction, context: ServiceContext, request: E
   }
 }
 
-async function insertOrder(tx: Transaction, { actor }: ServiceContext, request: EnquiryRequest, worked: WorkedOut, answerBy: Date | null) {
+async function insertOrder(tx: Transaction, { actor, now }: ServiceContext, request: EnquiryRequest, worked: WorkedOut, answerBy: Date | null) {
   const { contact, requirement } = request
   // A signed-in customer who gives the own address need not confirm it again.
   const owner = actor && actor.email === contact.email && actor.roles.includes('customer') ? actor : null
   const [order] = await tx.insert(orders).values({
     companyId: owner?.companyId ?? null, personId: owner?.personId ?? null,
     contactName: contact.name, contactEmail: contact.email, firmName: contact.firm, countryCode: contact.countryCode, vatNumber: contact.vatNumber ?? null, title: contact.title,
-    request, gateReasons: worked.reasons, couldHurt: requirement.couldHurt !== 'no', neededOn: requirement.neededOn ?? null, answerBy,
+    request, gateReasons: worked.reasons, couldHurt: requirement.couldHurt !== 'no', neededOn: requirement.neededOn ?? null, answerBy, createdAt: now,
   }).returning()
   return order!
 }

@@ -9,7 +9,7 @@ import { lockFreeKg } from '../wire/free-kg'
  * Called inside the transaction that books the deposit; the database refuses a job without one, and a second job.
  * @throws Error when the order has no accepted rung; that is a defect, never the customer's doing
  */
-export async function createJob(tx: Transaction, { orderId }: { orderId: string, now: Date }): Promise<{ jobId: string, jobRef: string }> {
+export async function createJob(tx: Transaction, { orderId, now }: { orderId: string, now: Date }): Promise<{ jobId: string, jobRef: string }> {
   const [rung] = await tx.select({
     quotePriceId: quotePrices.id, quantity: quotePrices.quantity, plannedMinutes: quotePrices.plannedMinutes, wireKg: quotePrices.wirePlannedKg,
     promisedOn: quotePrices.dispatchOn, wireProductId: quotes.wireProductId,
@@ -21,7 +21,7 @@ export async function createJob(tx: Transaction, { orderId }: { orderId: string,
 
   const freeKg = await lockFreeKg(tx, rung.wireProductId)
   const [job] = await tx.insert(jobs).values({
-    orderId, quotePriceId: rung.quotePriceId, quantity: rung.quantity, promisedOn: rung.promisedOn, waitsForWire: freeKg < Number(rung.wireKg),
+    orderId, quotePriceId: rung.quotePriceId, quantity: rung.quantity, promisedOn: rung.promisedOn, waitsForWire: freeKg < Number(rung.wireKg), createdAt: now,
   }).returning({ id: jobs.id, number: jobs.number })
   const jobId = job!.id
 

@@ -38,7 +38,7 @@ export async function bookCapture(tx: Transaction, desk: PaymentDesk, capture: C
   const account = !isWanted ? ACCOUNTS.credit : payment.kind === 'deposit' ? ACCOUNTS.deposits : ACCOUNTS.balances
   const words = `${payment.kind === 'deposit' ? 'Deposit' : 'Balance'} received by card${isWanted ? '' : ', held as credit'}`
   const isNew = await postLedger(tx, {
-    orderId: order.id, paymentId: payment.id, fact, words, currency: payment.currency,
+    orderId: order.id, paymentId: payment.id, fact, words, at: now, currency: payment.currency,
     entries: [{ account: ACCOUNTS.cash, amountMinor: payment.amountMinor }, { account, amountMinor: -payment.amountMinor }],
   })
   if (!isNew) throw new Error(`${fact} was booked beside the lock of its order`)

@@ -3,6 +3,8 @@ import { ledgerEntries, ledgerTransactions } from '../../database/schema'
 
 export type Posting = {
   orderId: string, paymentId: string | null
+  /** When it happened; now, by the database's clock, unless it is given. */
+  at?: Date
   /** Names the fact; a second posting of it does nothing. */
   fact: string
   words: string, currency: string

@@ -56,10 +56,13 @@ export function findDesign(requirement: Requirement, { wires, book }: { wires: r
   return answer
 }
 
+/** What a usual shape may cost over the cheapest of all before a person rather looks at the cheap one (common practice, no source). */
+const WORTH_A_USUAL_SHAPE = 1.5
+
 /**
- * The cheapest spring of a usual shape is preferred: wire alone would make the thinnest and longest one, which bows in any bore
- * that is not close around it and would send every enquiry to a person for a few cents. Where no usual shape does it, the
- * cheapest of all is taken, and the gate says what is unusual.
+ * The cheapest spring of a usual shape is preferred while it costs at most half as much again: wire alone would make the thinnest and longest one,
+ * which bows in any bore that is not close around it and would send nearly every enquiry to a person. Else the cheapest of
+ * all is taken, and the gate says what is unusual.
  */
 function searchDesign(requirement: Requirement, { wires, book }: { wires: readonly CatalogueWire[], book: PriceBook }): FoundDesign {
   const { materials, rule } = allowedMaterialsFor(requirement)
@@ -72,6 +75,9 @@ function searchDesign(requirement: Requirement, { wires, book }: { wires: readon
   const allowed = wiresFor(wires, materials, book)
   // Price does not follow mass once shapes are left out, so every stepped spring of each wire is asked about.
   const usual = sizeCompression(request, allowed, { objective: usualPrice, candidatesPerWire: Infinity, explainConflict: false })
-  const result = usual.designs.length > 0 ? usual : sizeCompression(request, allowed, { objective: price })
+  const [usualBest] = usual.designs
+  const any = sizeCompression(request, allowed, { objective: price, explainConflict: !usualBest })
+  const [cheapest] = any.designs
+  const result = usualBest && (!cheapest || usualBest.objectiveValue <= cheapest.objectiveValue * WORTH_A_USUAL_SHAPE) ? usual : any
   return { best: result.designs[0] ?? null, result, materialRule: rule }
 }
