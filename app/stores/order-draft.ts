@@ -23,7 +23,13 @@ export const useOrderDraftStore = defineStore('order-draft', () => {
 
   function keep(now: Date): void {
     const kept: Partial<OrderDraft> = { ...draft.value }
-    for (const field of PERSONAL_FIELDS) Reflect.deleteProperty(kept, field)
+    const usual: Partial<OrderDraft> = emptyDraft()
+    for (const field of PERSONAL_FIELDS) {
+      Reflect.deleteProperty(kept, field)
+      Reflect.deleteProperty(usual, field)
+    }
+    const isUntouched = Object.entries(usual).every(([field, value]) => field === 'country' || kept[field as keyof OrderDraft] === value)
+    if (isUntouched) return forget()
     const at = now.toISOString()
     if (writeLocal(KEY, JSON.stringify({ draft: kept, units: units.value, keptAt: at, written: written.value } satisfies Kept))) keptAt.value = at
   }
@@ -43,6 +49,9 @@ export const useOrderDraftStore = defineStore('order-draft', () => {
     const fresh = { ...emptyDraft(), name, firm, email, country, vatNumber }
     draft.value = fresh
     written.value = {}
+    forget()
+  }
+  function forget(): void {
     keptAt.value = null
     removeLocal(KEY)
   }
