@@ -1,6 +1,12 @@
-import { describe, expect, inject, it } from 'vitest'
+import { afterAll, describe, expect, inject, it } from 'vitest'
 import type { PeopleView, SessionRow, SessionUser, UsedLink } from '#shared/schemas/auth'
 import type { Problem } from '#shared/schemas/problem'
+import { createDatabase, createPool } from '#server/database/client'
+import { DomainError } from '#server/services/errors'
+import { hasDemoPeople } from '#server/services/people/demo-people'
+import { requestSignInLink } from '#server/services/sessions/request-sign-in-link'
+import { signIn } from '#server/services/sessions/sign-in'
+import { startSession } from '#server/services/sessions/start'
 import { query } from './support/database'
 import { linkTokenIn, mailsTo, waitForMail } from './support/mailbox'
 import { acceptOrder, newAddress, orderReadyToPay } from './support/orders'
@@ -275,5 +281,38 @@ describe('changing the password', () => {
     expect((await customer.post('/api/auth/password', { newPassword: password })).status).toBe(200)
     await signInAs(email, password)
     expect((await new Visitor().post('/api/auth/login', { email, password: password.trim() })).status).toBe(401)
+  })
+})
+
+describe('accounts of the demonstration in production', () => {
+  const pool = createPool(inject('databaseUrl'), () => undefined)
+  const db = createDatabase(pool)
+  afterAll(() => pool.end())
+  const production = { mode: 'production' } as const
+
+  it('are seen, so that the start is refused (S-38)', async () => {
+    expect(await hasDemoPeople(db)).toBe(true)
+  })
+
+  it('sign in by no way, with the right password either', async () => {
+    const attempt = { email: estimator.email, password: estimator.password, address: '192.0.2.1', hasLimits: false }
+    expect((await signIn({ db }, { mode: 'demo' }, attempt)).user.email).toBe(estimator.email)
+    await expect(signIn({ db }, production, attempt)).rejects.toThrow(DomainError)
+    const [person] = await query<{ id: string }>('select id from people where email = $1', [estimator.email])
+    await expect(startSession(db, person!.id, production)).rejects.toThrow(/demonstration/)
+    await requestSignInLink({ db, now: new Date() }, production, { email: estimator.email, hasLimits: false })
+    expect(await query(`select 1 from outbox where kind = 'sign-in-link' and recipient = $1`, [estimator.email])).toEqual([])
+  })
+
+  it('of nobody in particular stop the process at its start; so does a missing secret of the webhook (PAY-25)', async () => {
+    const { secondApp } = useServices()
+    await expect(secondApp.start({ NUXT_STRIPE_WEBHOOK_SECRETS: '' })).rejects.toThrow()
+    const realLooking = {
+      NUXT_MODE: 'production', NUXT_LIMITS: 'on', NUXT_ORIGIN: 'https://springs.example', NUXT_STRIPE_HOST: '', NUXT_STRIPE_PORT: '', NUXT_STRIPE_PROTOCOL: 'https', NUXT_STRIPE_SECRET_KEY: 'sk_test_x',
+      NUXT_MAIL_FROM: 'Springs <orders@springs.example>',
+    }
+    await secondApp.start(realLooking).catch(() => undefined)
+    await expect.poll(async () => fetch(`${inject('secondAppUrl')}/api/live`).then(answer => answer.status, () => 'gone'), { timeout: 20_000 }).toBe('gone')
+    await secondApp.stop()
   })
 })

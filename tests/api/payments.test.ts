@@ -1,9 +1,11 @@
 import { describe, expect, inject, it } from 'vitest'
+import { formatMoney } from '#shared/money/index'
 import type { PaymentStatus } from '#shared/schemas/payment'
 import type { Problem } from '#shared/schemas/problem'
 import { booksOf, cancelAcceptedOrder, query } from './support/database'
 import { mailsTo, waitForMail } from './support/mailbox'
-import { acceptOrder, newAddress, openDeposit, orderReadyToPay, orderView, type AcceptedOrder } from './support/orders'
+import { acceptOrder, newAddress, openDeposit, orderReadyToPay, orderView, sessionIdOf, type AcceptedOrder } from './support/orders'
+import { makeJob } from './support/shop-floor'
 import { endSession, sessionsOf, stripeSdk, tellStripe } from './support/stripe'
 import { signInAsRole, Visitor } from './support/visitor'
 
@@ -204,6 +206,48 @@ describe('the deposit', () => {
     const sessionId = await openDeposit(order)
     await cancelAcceptedOrder(order.ref)
     await expect.poll(async () => (await stripeSdk().checkout.sessions.retrieve(sessionId)).status, { timeout: 45_000, interval: 1_000 }).toBe('expired')
+  })
+})
+
+describe('the balance', () => {
+  it('is asked for when the springs are finished, paid once by the same ways, and settles the order when it is dispatched', async () => {
+    const order = await orderReadyToPay('balance')
+    await endSession(await openDeposit(order), 'paid')
+    await untilPaid(order)
+    const payBalance = () => order.customer.post<{ url: string } & Problem>(`/api/orders/${order.ref}/pay`, { kind: 'balance' })
+    expect((await payBalance()).status).toBe(409)
+
+    const supervisor = await signInAsRole('supervisor')
+    const job = await makeJob(order.ref, supervisor, await signInAsRole('operator'))
+    const view = await orderView(order)
+    expect(view).toMatchObject({ state: 'finished', canPay: 'balance', paidMinor: view.depositMinor })
+    expect((await waitForMail(order.email, /balance .* is due/i)).text).toContain(formatMoney(view.balanceMinor!, 'eur'))
+    const dispatch = async () => {
+      const [row] = await query<{ version: number }>(`select j.version from jobs j where j.number = $1`, [Number(job.ref.slice(2))])
+      return (await supervisor.post(`/api/loading/jobs/${job.ref}/dispatch`, { version: row!.version })).status
+    }
+    expect(await dispatch()).toBe(409)
+
+    const clicks = await Promise.all(Array.from({ length: 5 }, payBalance))
+    expect(clicks.map(click => click.status)).toEqual([200, 200, 200, 200, 200])
+    expect(new Set(clicks.map(click => click.body.url)).size).toBe(1)
+    const sessionId = sessionIdOf(clicks[0]!.body.url)
+    expect((await stripeSdk().checkout.sessions.retrieve(sessionId)).amount_total).toBe(view.balanceMinor)
+    await endSession(sessionId, 'paid')
+    await expect.poll(async () => (await orderView(order)).paidMinor, { timeout: 20_000 }).toBe(view.grossMinor)
+    expect(await orderView(order)).toMatchObject({ state: 'finished', canPay: null })
+    expect((await payBalance()).status).toBe(409)
+
+    expect(await dispatch()).toBe(200)
+    expect((await orderView(order)).state).toBe('settled')
+    expect(await query(`
+      select e.account, sum(e.amount_minor)::int as minor from ledger_entries e join ledger_transactions t on t.id = e.transaction_id join orders o on o.id = t.order_id
+      where o.number = $1 group by e.account order by e.account`, [Number(order.ref.slice(3))])).toEqual([
+      { account: 'balances-received', minor: -view.balanceMinor! }, { account: 'cash-at-stripe', minor: view.grossMinor }, { account: 'deposits-held', minor: -view.depositMinor! },
+    ])
+    await waitForMail(order.email, /on their way/i)
+    const subjects = (await mailsTo(order.email)).map(mail => mail.subject)
+    expect(new Set(subjects).size).toBe(subjects.length)
   })
 })
 

@@ -1,7 +1,8 @@
-import { and, eq, sql } from 'drizzle-orm'
-import { jobs, operations, orders, payments, quotePrices, quotes } from '../../database/schema'
+import { eq, sql } from 'drizzle-orm'
+import { jobs, operations, orders, quotePrices, quotes } from '../../database/schema'
 import type { Transaction } from '../context'
 import { orderRefOf } from '../orders/reference'
+import { findAmountDue } from '../payments/amount-due'
 
 /** What the e-mails about a job tell. */
 export type JobMailFacts = {
@@ -16,18 +17,17 @@ export type JobMailFacts = {
 export async function readJobMailFacts(tx: Transaction, jobId: string, options: { origin: string, timeZone: string }): Promise<JobMailFacts> {
   const [row] = await tx.select({
     orderId: orders.id, number: orders.number, email: orders.contactEmail, title: orders.title, name: orders.contactName,
-    quantity: jobs.quantity, grossMinor: quotePrices.grossMinor, currency: quotes.currency,
+    quantity: jobs.quantity, currency: quotes.currency,
   }).from(jobs).innerJoin(orders, eq(orders.id, jobs.orderId)).innerJoin(quotePrices, eq(quotePrices.id, jobs.quotePriceId)).innerJoin(quotes, eq(quotes.id, quotePrices.quoteId))
     .where(eq(jobs.id, jobId))
   if (!row) throw new Error(`job ${jobId} is gone`)
-  const [paid] = await tx.select({ minor: sql<string>`coalesce(sum(${payments.amountMinor}), 0)` }).from(payments)
-    .where(and(eq(payments.orderId, row.orderId), eq(payments.state, 'paid')))
+  const due = await findAmountDue(tx, row.orderId, 'balance')
   const [plan] = await tx.select({
     leavesOn: sql<string | null>`case when bool_and(${operations.plannedSpan} is not null) then to_char(max(upper(${operations.plannedSpan})) at time zone ${options.timeZone}, 'YYYY-MM-DD') end`,
   }).from(operations).where(eq(operations.jobId, jobId))
   const ref = orderRefOf(row.number)
   return {
     recipient: row.email, orderId: row.orderId, about: { orderRef: ref, title: row.title, contactName: row.name }, quantity: row.quantity, currency: row.currency,
-    balanceMinor: Math.max(0, row.grossMinor - Number(paid?.minor ?? 0)), leavesOn: plan?.leavesOn ?? null, orderUrl: `${options.origin}/account/orders/${ref}`,
+    balanceMinor: due?.amountMinor ?? 0, leavesOn: plan?.leavesOn ?? null, orderUrl: `${options.origin}/account/orders/${ref}`,
   }
 }

@@ -8,7 +8,8 @@ import type { ServiceContext } from '../context'
 import { findSentRevision } from '../quotes/find-revision'
 import { workingPointsOf } from '../springs/requirement'
 import { requireOwnOrder, type OrderRecord } from './access'
-import { findPaymentStatus, paymentKindOf, sumPaidMinor } from './payment-status'
+import { paidMinor as readPaidMinor } from '../payments/amount-due'
+import { findPaymentStatus, paymentKindOf } from './payment-status'
 import { orderRefOf } from './reference'
 
 /**
@@ -19,7 +20,7 @@ export async function getOrderStatus(context: ServiceContext, { ref }: { ref: st
   const order = await requireOwnOrder(context, ref)
   const { db } = context
   const [accepted, sent, paidMinor, events, job] = await Promise.all([
-    findAccepted(db, order), order.state === 'enquiry' ? null : findSentRevision(db, order.id), sumPaidMinor(db, order.id), listEvents(db, order.id), findJob(db, order.id),
+    findAccepted(db, order), order.state === 'enquiry' ? null : findSentRevision(db, order.id), readPaidMinor(db, order.id), listEvents(db, order.id), findJob(db, order.id),
   ])
   const quote = accepted?.quote ?? sent
   const balanceMinor = accepted ? accepted.rung.grossMinor - accepted.rung.depositMinor : null

@@ -1,4 +1,4 @@
-import { and, desc, eq, sql } from 'drizzle-orm'
+import { and, desc, eq } from 'drizzle-orm'
 import type { PaymentKind, PaymentStatus } from '#shared/schemas/payment'
 import type { OrderState } from '#shared/schemas/order-states'
 import { payments } from '../../database/schema'
@@ -9,12 +9,6 @@ export async function findPaymentStatus(db: Queryable, orderId: string, kind: Pa
   const [payment] = await db.select({ state: payments.state, amountMinor: payments.amountMinor, currency: payments.currency }).from(payments)
     .where(and(eq(payments.orderId, orderId), eq(payments.kind, kind))).orderBy(desc(payments.attempt)).limit(1)
   return payment ? { kind, ...payment } : { kind, state: 'none', amountMinor: null, currency: null }
-}
-
-/** What has been paid for an order, in minor units. */
-export async function sumPaidMinor(db: Queryable, orderId: string): Promise<number> {
-  const [sum] = await db.select({ minor: sql<string>`coalesce(sum(${payments.amountMinor}), 0)` }).from(payments).where(and(eq(payments.orderId, orderId), eq(payments.state, 'paid')))
-  return Number(sum?.minor ?? 0)
 }
 
 const BALANCE_STATES: readonly OrderState[] = ['finished', 'dispatched', 'settled']

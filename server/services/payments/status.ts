@@ -1,21 +1,14 @@
-import { and, desc, eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import Stripe from 'stripe'
 import type { PaymentStatus } from '#shared/schemas/payment'
 import { payments } from '../../database/schema'
-import type { Queryable } from '../../database/client'
 import { log } from '../../utils/log'
 import type { ServiceContext } from '../context'
 import { DomainError, notFound } from '../errors'
 import { findOrder, isOwnOrder } from '../orders/access'
+import { findPaymentStatus, paymentKindOf } from '../orders/payment-status'
 import type { PaymentDesk } from './desk'
 import { syncSession } from './sync'
-
-/** The newest attempt of an order as its page shows it. */
-export async function findPaymentStatus(db: Queryable, orderId: string): Promise<PaymentStatus> {
-  const [row] = await db.select({ kind: payments.kind, state: payments.state, amountMinor: payments.amountMinor, currency: payments.currency }).from(payments)
-    .where(eq(payments.orderId, orderId)).orderBy(desc(payments.createdAt), desc(payments.attempt)).limit(1)
-  return row ?? { kind: 'deposit', state: 'none', amountMinor: null, currency: null }
-}
 
 /**
  * The state of an order's payment for its owner. When they come back from Stripe's page before the webhook, Stripe is asked; a
@@ -27,12 +20,12 @@ export async function readPayment(context: Pick<ServiceContext, 'db' | 'actor'>,
   if (!actor) throw new DomainError('unauthenticated', 'Sign in first.')
   const order = await findOrder(db, ref)
   if (!order || !isOwnOrder(actor, order)) throw notFound('order')
-  if (sessionId === undefined) return findPaymentStatus(db, order.id)
+  if (sessionId === undefined) return findPaymentStatus(db, order.id, paymentKindOf(order.state))
 
   const find = () => db.select({ kind: payments.kind, state: payments.state, amountMinor: payments.amountMinor, currency: payments.currency }).from(payments)
     .where(and(eq(payments.orderId, order.id), eq(payments.stripeSessionId, sessionId)))
   const [attempt] = await find()
-  if (!attempt) return findPaymentStatus(db, order.id)
+  if (!attempt) return findPaymentStatus(db, order.id, paymentKindOf(order.state))
   if (attempt.state === 'paid' || attempt.state === 'failed') return attempt
   try {
     await syncSession(db, desk, sessionId)
