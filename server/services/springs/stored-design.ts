@@ -1,7 +1,7 @@
 import type { StoredDesign } from '#shared/schemas/quote'
 import type { Requirement } from '#shared/schemas/enquiry'
 import { getMaterial } from '#shared/spring/materials'
-import type { SizedDesign, SizingResult, SizingWire } from '#shared/spring/sizing/types'
+import type { SizedDesign, SizingResult } from '#shared/spring/sizing/types'
 import type { PricedDesign } from '../../engine/pricing'
 import { handOf } from './requirement'
 
