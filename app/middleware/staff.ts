@@ -8,5 +8,5 @@ export default defineNuxtRouteMiddleware((to) => {
   if (!data.value || isShowingError()) return
   const roles: readonly Role[] = data.value.roles
   if (!roles.some(role => allowed.includes(role)))
-    return abortNavigation(createError({ status: 403, message: 'Your account does not reach this place. If it should, ask the administrator.' }))
+    return abortNavigation(createError({ status: 403, fatal: true, message: 'Your account does not reach this place. If it should, ask the administrator.' }))
 })
