@@ -75,7 +75,7 @@ describe('changing the units', () => {
       let state = { draft: draftOf({ bore: String(hundredths / 100) }), written: {} }
       let units: 'metric' | 'inch' = 'metric'
       for (let turn = 0; turn < turns * 2; turn++) {
-        const to = units === 'metric' ? 'inch' : 'metric'
+        const to: 'metric' | 'inch' = units === 'metric' ? 'inch' : 'metric'
         state = convertDraft(state.draft, { from: units, to, written: state.written })
         units = to
       }
