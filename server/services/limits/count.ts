@@ -19,3 +19,13 @@ export async function readHits(db: Database, counter: Counter, subject: string):
     .where(and(eq(rateCounters.key, keyOf(counter, subject)), eq(rateCounters.windowStart, windowStart(counter))))
   return row?.hits ?? 0
 }
+
+/** Clocks of processes and of the database differ a little: a run counts to the tick that is nearest within this. */
+const CLOCK_SLACK_S = 60
+
+/** True for the first of all processes that comes to this run of a task that is due every so many seconds. */
+export async function claimRun(db: Database, task: string, everyS: number): Promise<boolean> {
+  const tick = sql`to_timestamp(floor((extract(epoch from now()) + ${CLOCK_SLACK_S}) / ${everyS}) * ${everyS})`
+  const rows = await db.insert(rateCounters).values({ key: `run:${task}`, windowStart: tick, hits: 1 }).onConflictDoNothing().returning({ key: rateCounters.key })
+  return rows.length > 0
+}

@@ -1,7 +1,7 @@
 import type Stripe from 'stripe'
-import { eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import { formatMoney, toCurrency } from '#shared/money/index'
-import { ledgerEntries, ledgerTransactions, orders, payments } from '../../database/schema'
+import { auditLog, ledgerEntries, ledgerTransactions, orders, payments } from '../../database/schema'
 import type { Database, Transaction } from '../../database/client'
 import { log } from '../../utils/log'
 import { recordAudit } from '../audit/record'
@@ -43,9 +43,16 @@ async function applyRefund(tx: Transaction, refund: Stripe.Refund): Promise<Sync
 
   const [booked] = await tx.select({ id: ledgerTransactions.id }).from(ledgerTransactions).where(eq(ledgerTransactions.fact, `refund:${refund.id}`))
   const isReversed = booked ? await postLedger(tx, { ...posting, fact: `refund-failed:${refund.id}`, words: 'Refund failed, taken back', entries: out.map(entry => ({ ...entry, amountMinor: -entry.amountMinor })) }) : false
-  await recordAudit(tx, { personId: null, action: 'refund.failed', object: payment.id, detail: `${refund.id}: ${formatMoney(refund.amount, toCurrency(payment.currency))} did not reach the customer.` })
-  log.error('refund-failed', new Error(refund.failure_reason ?? 'no reason given'), { payment: payment.id, refund: refund.id })
+  await alertOnce(tx, payment, refund)
   return { outcome: 'applied', words: isReversed ? 'refund taken back' : 'refund failed' }
+}
+
+/** Several events tell of one failure; staff are alerted by the first. The order's row is locked by the caller. */
+async function alertOnce(tx: Transaction, payment: PaymentRow, refund: Stripe.Refund): Promise<void> {
+  const [known] = await tx.select({ id: auditLog.id }).from(auditLog).where(and(eq(auditLog.action, 'refund.failed'), eq(auditLog.object, refund.id))).limit(1)
+  if (known) return
+  await recordAudit(tx, { personId: null, action: 'refund.failed', object: refund.id, detail: `${formatMoney(refund.amount, toCurrency(payment.currency))} of payment ${payment.id} did not reach the customer.` })
+  log.error('refund-failed', new Error(refund.failure_reason ?? 'no reason given'), { payment: payment.id, refund: refund.id })
 }
 
 /** The payment of an intent with its order, locked in the one order of locks; null when it is not ours. */
