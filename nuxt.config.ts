@@ -1,17 +1,20 @@
+import { fileURLToPath } from 'node:url'
 import type { NitroConfig } from 'nitropack/types'
 import { compileMailComponents } from './emails/compile-sfc'
+import { listApiRoutes } from './vite/api-routes'
 import { leanEntry } from './vite/lean-entry'
 import { slimFormKit } from './vite/slim-formkit'
 
 const dayS = 86_400
 
 // Typed here, since Nuxt's own type of this key knows only part of Nitro's settings.
-const nitro: Pick<NitroConfig, 'compressPublicAssets' | 'experimental' | 'scheduledTasks' | 'rollupConfig'> = {
+const nitro: Pick<NitroConfig, 'compressPublicAssets' | 'experimental' | 'scheduledTasks' | 'rollupConfig' | 'virtual'> = {
   compressPublicAssets: true,
   experimental: { tasks: true },
   // Each process claims its work in the database, so several processes may run these side by side.
   scheduledTasks: { '*/5 * * * *': ['payments:reconcile'], '17 * * * *': ['housekeeping'] },
   rollupConfig: { plugins: [compileMailComponents()] },
+  virtual: { '#api-routes': () => `export default ${JSON.stringify(listApiRoutes(fileURLToPath(new URL('./server/api', import.meta.url))))}` },
 }
 
 export default defineNuxtConfig({
@@ -37,7 +40,7 @@ export default defineNuxtConfig({
       for (const entry of Object.values(manifest)) entry.dynamicImports = []
     },
   },
-  vite: { plugins: [slimFormKit(), leanEntry()], $client: { build: { rollupOptions: { output: { experimentalMinChunkSize: 3000 } } } } },
+  vite: { plugins: [slimFormKit(), leanEntry()] },
   app: {
     head: {
       htmlAttrs: { lang: 'en-GB' },

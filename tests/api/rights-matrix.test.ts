@@ -1,8 +1,7 @@
-import { readdirSync } from 'node:fs'
-import { join, relative } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { beforeAll, describe, expect, inject, it } from 'vitest'
 import type { Role } from '#shared/schemas/roles'
+import { listApiRoutes } from '../../vite/api-routes'
 import { orderReadyToPay, type AcceptedOrder } from './support/orders'
 import { signInAsRole, Visitor } from './support/visitor'
 
@@ -37,14 +36,7 @@ const RIGHTS: Readonly<Record<string, readonly Who[]>> = {
   'GET /api/works/people': ADMIN, 'POST /api/works/people/:id/end-sessions': ADMIN, 'GET /api/works/stripe-events': ADMIN, 'POST /api/works/stripe-events/:id/replay': ADMIN,
 }
 
-/** Every route of the file tree, as `GET /api/orders/:ref`. */
-function routesOfTree(): string[] {
-  return readdirSync(ROOT, { recursive: true, withFileTypes: true }).filter(entry => entry.isFile()).map((entry) => {
-    const file = relative(ROOT, join(entry.parentPath, entry.name))
-    const [, path = '', method = ''] = /^(.*)\.(get|post|put|patch|delete)\.ts$/.exec(file) ?? []
-    return `${method.toUpperCase()} /api/${path.replace(/\/?index$/, '').replace(/\[([^\]]+)\]/g, ':$1')}`.replace(/\/$/, '')
-  }).sort()
-}
+const routesOfTree = () => listApiRoutes(ROOT).map(route => `${route.method} ${route.path}`).sort()
 
 const PARAMETERS: Readonly<Record<string, string>> = { ':id': UUID, ':code': 'C1', ':kind': 'quote-ready' }
 // Signing out, or ending the sessions, would take the visitor's own rights away in the middle of the matrix.
@@ -72,7 +64,10 @@ describe('every route', () => {
 describe('another customer’s order', () => {
   let mine: AcceptedOrder
   let other: AcceptedOrder
-  beforeAll(async () => { [mine, other] = [await orderReadyToPay('mine'), await orderReadyToPay('other')] })
+  it('is there to begin with', async () => {
+    [mine, other] = [await orderReadyToPay('mine'), await orderReadyToPay('other')]
+    expect(mine.ref).not.toBe(other.ref)
+  })
   it.each([['GET', ''], ['GET', '/payment'], ['POST', '/pay']])('is not found: %s /api/orders/:ref%s (S-46)', async (method, path) => {
     const ask = (order: AcceptedOrder) => method === 'GET' ? mine.customer.get(`/api/orders/${order.ref}${path}`) : mine.customer.post(`/api/orders/${order.ref}${path}`, { kind: 'deposit' })
     expect((await ask(other)).status).toBe(404)
@@ -103,7 +98,8 @@ describe('HTTP', () => {
     expect(({} as { access?: string }).access).toBeUndefined()
   })
   it.each(['DELETE', 'PUT', 'PATCH'])('refuses %s where there is no such way', async (method) => {
-    expect((await send('/api/order/preview', { method })).status).toBe(405)
+    const answer = await send('/api/order/preview', { method })
+    expect([answer.status, answer.headers.get('allow')]).toEqual([405, 'POST'])
   })
   it('takes state changes from our own pages only (S-24)', async () => {
     const preview = (headers: Record<string, string>) => send('/api/order/preview', { method: 'POST', body: '{}', headers: { ...json, ...headers } })
