@@ -105,7 +105,7 @@ test('a double click sends the quote once, and a sent one is not changed any mor
 
 test('the customer reads the answer with the engineer’s note, and declines', async ({ page, mailbox }) => {
   await page.goto(linkIn(await mailbox.waitFor(BRAM.email, /^Your quote/), `/quotes/${order.ref}`))
-  await expect(page.getByText('A qualified engineer must review the duty')).toBeVisible()
+  await expect(page.getByText('A qualified engineer must review the duty', { exact: true })).toBeVisible()
   await expect(page.getByText('We have thought of your guard.')).toBeVisible()
   await look(page, 'quote-could-hurt')
   await page.getByRole('button', { name: 'No, thank you' }).click()

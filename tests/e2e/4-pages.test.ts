@@ -14,7 +14,8 @@ test('the order form before anything is typed', async ({ page }) => {
   await look(page, 'order-empty')
 })
 
-test('the order form says what is missing at its head and beside each field, and forgets an error once it is mended', async ({ page }) => {
+test('the order form says what is missing at its head and beside each field, and forgets an error once it is mended', async ({ page, watch }) => {
+  watch.expect(422, /\/api\/order\/preview/)
   const form = new OrderForm(page)
   await form.open()
   await form.send.click()
@@ -97,8 +98,9 @@ for (const part of ['price-books', 'wire', 'people', 'mail?preview=quote-ready',
   test(`Works: ${part}`, async ({ openAs }) => {
     const page = await openAs('admin')
     await page.goto(`/works/${part}`)
-    await expect(page.getByRole('heading', { level: 1 })).toBeVisible()
+    await expect(page.getByRole('heading', { level: 1 }).first()).toBeVisible()
     await expect(page.getByRole('row').nth(1)).toBeVisible()
+    if (part.includes('preview')) await expect(page.getByText('Answer this e-mail to reach a person')).toBeVisible()
     await look(page, `works-${part.replace(/[^a-z]+/g, '-')}`)
   })
 }

@@ -30,17 +30,18 @@ for (const [role, allowed] of Object.entries(MAY) as [Role, readonly string[]][]
   })
 }
 
-test('a link inside the pages to a place of others is refused as well, and the way back works', async ({ openAs }) => {
+test('a step inside the pages to a place of others is refused as well, and the way back works', async ({ openAs }) => {
   const page = await openAs('operator')
-  await page.goto('/bench')
+  await page.goto('/loading')
+  await page.getByRole('link', { name: 'Bench' }).click()
+  await expect(page.getByRole('heading', { level: 1, name: 'Which work centre?' })).toBeVisible()
+  // As a stale link would: through the router, without a new page load.
   await page.evaluate(() => {
-    // As a stale link on a page would: without a new page load.
-    const link = document.querySelector<HTMLAnchorElement>('main a')
-    link?.closest('body')?.querySelector('#__nuxt')
-    history.pushState({}, '', '/ledger')
-    dispatchEvent(new PopStateEvent('popstate', { state: {} }))
+    const { $router } = (window as unknown as { useNuxtApp: () => { $router: { push: (path: string) => Promise<unknown> } } }).useNuxtApp()
+    void $router.push('/ledger').catch(() => {})
   })
   await expect(page.getByRole('heading', { level: 1, name: 'This place is not yours to see' })).toBeVisible()
+  await page.getByRole('link', { name: 'To the front page' }).click()
   await page.goto('/bench')
   await expect(page.getByRole('heading', { level: 1, name: 'Which work centre?' })).toBeVisible()
 })
