@@ -13,9 +13,9 @@ export function orderSteps(order: Pick<OrderStatusView, 'state' | 'events' | 'pr
   return WAY.map((state, at) => {
     const { name, tint } = ORDER_STATE_WORDS[state]
     const when = reached(state)
-    const status = at < here ? 'done' as const : at === here ? 'here' as const : 'todo' as const
+    const status = at < here ? 'done' as const : at === here ? 'here' as const : 'ahead' as const
     const expected = state === 'dispatched' && order.promisedOn ? `expected ${formatDay(order.promisedOn, { hasYear: false })}` : state === 'settled' ? 'after payment' : ''
-    return { name, tint: tint ?? 9, status, note: status === 'todo' ? expected : when ? `${status === 'here' ? 'since ' : ''}${shortDay(when)}` : '' }
+    return { name, tint: tint ?? 9, status, note: status === 'ahead' ? expected : when ? `${status === 'here' ? 'since ' : ''}${shortDay(when)}` : '' }
   })
 }
 
