@@ -27,6 +27,7 @@ const UUID = /^[0-9a-f]{8}-(?:[0-9a-f]{4}-){3}[0-9a-f]{12}$/
  */
 export function decodeMomentCursor(cursor: string): { at: string, id: string } {
   const [at = '', id = ''] = decodeCursor(cursor, 2)
-  if (!/^\d{1,20}$/.test(at) || !UUID.test(id)) throw invalid('cursor', 'This page of the list does not exist. Start at the first one.')
+  // Sixteen digits of microseconds reach to the year 2286; more would be beyond what the database counts in.
+  if (!/^\d{1,16}$/.test(at) || !UUID.test(id)) throw invalid('cursor', 'This page of the list does not exist. Start at the first one.')
   return { at, id }
 }

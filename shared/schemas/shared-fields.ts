@@ -1,8 +1,9 @@
 import { z } from 'zod'
 import { COUNTRIES } from '../countries'
 
-/** A calendar day, YYYY-MM-DD, that exists. */
-export const daySchema = z.iso.date('Give a date that exists, such as 2026-12-14.')
+const NO_DAY = 'Give a date that exists, such as 2026-12-14.'
+/** A calendar day, YYYY-MM-DD, that exists, within the years a plan can hold: the database has no year 0, and no zone beyond 9999. */
+export const daySchema = z.iso.date(NO_DAY).refine(day => day >= '2000-01-01' && day <= '2199-12-31', NO_DAY)
 
 export { COUNTRIES }
 export const countrySchema = z.enum(Object.keys(COUNTRIES) as [keyof typeof COUNTRIES, ...(keyof typeof COUNTRIES)[]], 'Choose a country from the list.')

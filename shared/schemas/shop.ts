@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { daySchema, versionSchema } from './shared-fields'
+import { daySchema, textSchema, versionSchema } from './shared-fields'
 import type { StoredDesign } from './quote'
 
 export const CENTRE_KINDS = ['coiling', 'stress-relief', 'end-grinding', 'inspection', 'packing'] as const
@@ -51,7 +51,7 @@ export const benchRecordBodySchema = z.strictObject({
   /** Corrections to the clock, given at the finish. */
   setUpMinutes: z.number('Give the minutes as a number.').min(0, 'Not below nought.').max(100_000, 'At most 100 000 minutes.').optional(),
   runMinutes: z.number('Give the minutes as a number.').min(0, 'Not below nought.').max(100_000, 'At most 100 000 minutes.').optional(),
-  note: z.string().trim().max(500).default(''),
+  note: textSchema(500).default(''),
 })
 export type BenchRecordBody = z.input<typeof benchRecordBodySchema>
 

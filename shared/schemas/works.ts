@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import type { RateGroup } from '../rate-groups'
-import { pageQuerySchema } from './shared-fields'
+import { pageQuerySchema, textSchema } from './shared-fields'
 import { MATERIAL_CODES } from '../spring/codes'
 
 /** One version of the price book with its rates, as Works shows it. Values are decimal text in their own unit. */
@@ -21,5 +21,5 @@ export type WireStockList = { rows: WireStockRow[], materials: { code: string, n
 export const receiveWireBodySchema = z.strictObject({
   id: z.uuid(),
   massKg: z.number('Give the mass in kg as a number.').min(0.001, 'More than nought.').max(100_000, 'At most 100 000 kg.'),
-  note: z.string().trim().max(200, 'At most 200 characters.').default(''),
+  note: textSchema(200).default(''),
 })

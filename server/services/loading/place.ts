@@ -12,6 +12,8 @@ import { readJobs } from './read-jobs'
 import { settlePlan } from './settle-plan'
 
 const EXCLUSION_VIOLATION = '23P01'
+/** A plan further ahead than two years is a slip of the hand; the database counts no further than the year 9999 anyhow. */
+const FURTHEST_MS = 2 * 366 * 86_400_000
 
 const minutesOf = (operation: OperationRow) => Math.max(1, Number(operation.setUpMinutes) + Number(operation.runMinutes))
 
@@ -64,6 +66,7 @@ function assertAble(centres: readonly PlanCentre[], operation: OperationRow, wir
 
 function assertTime(context: ServiceContext, locked: LockedJob, operation: OperationRow, centre: PlanCentre, startMs: number): number {
   if (startMs < context.now.getTime() - 60_000) throw invalid('startsAt', 'This time has passed.')
+  if (startMs > context.now.getTime() + FURTHEST_MS) throw invalid('startsAt', 'This is more than two years ahead.')
   const opensMs = nextWorkingInstant(centre.calendar, startMs)
   if (opensMs !== startMs) throw invalid('startsAt', `The work centre is closed then. It opens ${momentWords(opensMs, context.timeZone)}.`)
   const endMs = addWorkingMinutes(centre.calendar, startMs, minutesOf(operation))

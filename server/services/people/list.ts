@@ -5,7 +5,7 @@ import { companies, people, personRoles, sessions } from '../../database/schema'
 import { assertRole, type ServiceContext } from '../context'
 import { invalid } from '../errors'
 
-const CURSOR = /^([^\s@]+@[^\s@]+) ([0-9a-f-]{36})$/
+const CURSOR = /^([^\s@\p{Cc}]+@[^\s@\p{Cc}]+) ([0-9a-f]{8}-(?:[0-9a-f]{4}-){3}[0-9a-f]{12})$/u
 
 /**
  * Everybody who can sign in, by address, with the number of sessions that are live. Read by key.

@@ -12,6 +12,9 @@ export const SizePointSchema = z.strictObject({ lengthMm: LengthMm, forceN: Forc
 export const SizeObjectiveSchema = z.enum(['price', 'mass', 'stress'], { error: 'The objective must be price, mass or stress.' })
 export type SizeObjective = z.infer<typeof SizeObjectiveSchema>
 
+/** Wires that one request may name: each costs up to some milliseconds of search, and the request is answered at once. */
+const MOST_NAMED_WIRES = 100
+
 /** Body of `POST /api/v1/springs/size`. */
 export const SizeRequestSchema = z
   .strictObject({
@@ -32,6 +35,15 @@ export const SizeRequestSchema = z
   .check((ctx) => {
     for (const { path, message } of checkSizeRequirement(ctx.value)) {
       ctx.issues.push({ code: 'custom', path: [...path], input: ctx.value, message })
+    }
+    const named = new Set(ctx.value.wireDiametersMm).size * new Set(ctx.value.materials).size
+    if (named > MOST_NAMED_WIRES) {
+      ctx.issues.push({
+        code: 'custom',
+        path: ['wireDiametersMm'],
+        input: ctx.value.wireDiametersMm,
+        message: `These are ${named} wires, each material in each diameter. Name at most ${MOST_NAMED_WIRES} at once.`,
+      })
     }
     if (ctx.value.wireDiametersMm !== undefined && ctx.value.materials !== undefined && ctx.value.objective === 'price') {
       ctx.issues.push({
