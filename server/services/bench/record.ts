@@ -46,11 +46,13 @@ async function writeRecord(tx: Transaction, context: ServiceContext, actor: Acto
   const [centre] = operation.workCentreId ? await tx.select({ code: workCentres.code }).from(workCentres).where(eq(workCentres.id, operation.workCentreId)) : []
   if (!centre) throw conflict('This operation is not planned. The supervisor places it first.')
 
-  const [existing] = await tx.select({ id: benchRecords.id }).from(benchRecords).where(eq(benchRecords.id, record.id))
+  const [existing] = await tx.select({ operationId: benchRecords.operationId }).from(benchRecords).where(eq(benchRecords.id, record.id))
+  if (existing && existing.operationId !== operationId) throw conflict('This record was made for another operation. Load the page again.')
   if (existing) return centre.code
   const act = ACTS[record.act]
   if (!act.from.includes(operation.state)) throw conflict(`This operation is ${operation.state.replace('-', ' ')}, so it cannot be ${act.words} now.`)
-  if (record.act === 'start') await assertMayStart(tx, operation)
+  if (record.act === 'start') await assertTurn(tx, operation, job)
+  if (record.act === 'start' || record.act === 'resume') await assertCentreFree(tx, operation)
 
   const past = await tx.select({ act: benchRecords.act, at: benchRecords.at, good: benchRecords.good, scrap: benchRecords.scrap })
     .from(benchRecords).where(eq(benchRecords.operationId, operationId)).orderBy(asc(benchRecords.at))
@@ -79,10 +81,17 @@ async function writeRecord(tx: Transaction, context: ServiceContext, actor: Acto
   return centre.code
 }
 
-async function assertMayStart(tx: Transaction, operation: typeof operations.$inferSelect): Promise<void> {
+async function assertTurn(tx: Transaction, operation: typeof operations.$inferSelect, job: typeof jobs.$inferSelect): Promise<void> {
+  // Started sooner, the job could be planned anew over work that is being done.
+  if (job.state !== 'planned' && job.state !== 'in-work') throw conflict('Not every operation of this job has its place yet. The supervisor plans the rest first.')
   const [open] = await tx.select({ kind: operations.kind }).from(operations)
     .where(and(eq(operations.jobId, operation.jobId), sql`${operations.position} < ${operation.position}`, sql`${operations.state} <> 'finished'`)).limit(1)
   if (open) throw conflict(`${OPERATION_NAMES[open.kind]} of this job is not finished yet.`)
+}
+
+/** Of two jobs begun at one work centre in the same moment, the second waits here and then sees the first. */
+async function assertCentreFree(tx: Transaction, operation: typeof operations.$inferSelect): Promise<void> {
+  await tx.select({ id: workCentres.id }).from(workCentres).where(eq(workCentres.id, operation.workCentreId!)).for('no key update')
   const [busy] = await tx.select({ id: operations.id }).from(operations)
     .where(and(eq(operations.workCentreId, operation.workCentreId!), sql`${operations.state} in ('setting-up', 'running')`)).limit(1)
   if (busy) throw conflict('Another operation runs at this work centre. Pause or finish it first.')
