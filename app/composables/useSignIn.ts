@@ -1,3 +1,4 @@
+import { getNode } from '@formkit/core'
 import { send, toSendError, type SendError } from '~/utils/send'
 import { safeRedirect } from '~/utils/safe-redirect'
 import { homeOf } from '~/utils/staff-places'
@@ -12,6 +13,8 @@ export function useSignIn() {
   /** Which of the two ways is being gone. */
   const isBusy = ref<'link' | 'password' | null>(null)
   const isSent = ref(false)
+
+  watch(fieldErrors, found => getNode('sign-in')?.setErrors([], found))
 
   function findMissing(how: 'link' | 'password'): Record<string, string> {
     const { email = '', password = '' } = fields.value
