@@ -11,10 +11,13 @@ const FIXED = {
 
 const INLINE_SCRIPT = /<script(?![^>]*\ssrc=)([^>]*)>([\s\S]*?)<\/script>/g
 
-/** The content policy of a page: its own files, and those inline scripts that the renderer wrote, by their hashes. */
-export function contentPolicy(html: string, payHost: string): string {
+/**
+ * The content policy of a page: its own files, and those inline scripts that the renderer wrote, by their hashes.
+ * @param frame what the renderer puts around the page's own body; a script inside the body is nobody's, and gets no hash
+ */
+export function contentPolicy(frame: string, payHost: string): string {
   const hashes = new Set<string>()
-  for (const [, attributes, code] of html.matchAll(INLINE_SCRIPT)) {
+  for (const [, attributes, code] of frame.matchAll(INLINE_SCRIPT)) {
     if (code && !/type="application\/json"/.test(attributes ?? '')) hashes.add(`'sha256-${createHash('sha256').update(code).digest('base64')}'`)
   }
   return [
@@ -33,8 +36,11 @@ export default defineNitroPlugin((nitro) => {
     if (event.path.startsWith('/api/')) setResponseHeader(event, 'content-security-policy', `default-src 'none'; frame-ancestors 'none'`)
     if (settings.mode === 'production') setResponseHeader(event, 'strict-transport-security', 'max-age=63072000; includeSubDomains')
   })
-  nitro.hooks.hook('render:response', (response) => {
+  nitro.hooks.hook('render:html', ({ head, bodyAppend }, { event }) => {
+    event.context.pageFrame = [...head, ...bodyAppend].join('')
+  })
+  nitro.hooks.hook('render:response', (response, { event }) => {
     if (typeof response.body !== 'string' || !response.headers) return
-    response.headers['content-security-policy'] = contentPolicy(response.body, payHost)
+    response.headers['content-security-policy'] = contentPolicy(event.context.pageFrame ?? '', payHost)
   })
 })

@@ -4,6 +4,8 @@ declare module 'h3' {
     startedMs: number
     routeName: string
     actorId?: string
+    /** What the renderer put around the body of the page: head and closing tags. */
+    pageFrame?: string
   }
 }
 export {}
