@@ -49,6 +49,11 @@ describe('signing in with a password', () => {
     expect(first).not.toBe(planted)
     await visitor.post('/api/auth/login', { email: estimator.email, password: estimator.password })
     expect(visitor.cookies.get('__Host-sid')).not.toBe(first)
+    // The session of before is over: who signs in anew leaves none behind.
+    const former = new Visitor()
+    former.cookies.set('__Host-sid', first!)
+    expect((await former.get('/api/auth/session')).status).toBe(401)
+    expect((await visitor.get('/api/auth/session')).status).toBe(200)
   })
 
   it('answers a wrong password and an unknown address in the same words', async () => {

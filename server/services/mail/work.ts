@@ -64,11 +64,20 @@ export async function workOnMails(db: Database, desk: MailDesk, isStopping: () =
       await giveBack(db, row)
       continue
     }
+    // Those before may have taken long: one whose lease ran out meanwhile is another process's by now.
+    if (!(await keepLease(db, row))) continue
     const result = await workOnMail(db, desk, row)
     if (result === 'unreachable') isReachable = false
     if (result === 'ended') ended += 1
   }
   return ended
+}
+
+/** Begins the lease of a claimed mail anew, just before it goes out. False where somebody else has claimed it since: each claim counts a try. */
+async function keepLease(db: Database, row: OutboxRow): Promise<boolean> {
+  const kept = await db.update(outbox).set({ leasedUntil: sql`now() + make_interval(secs => ${LEASE_S})` })
+    .where(and(eq(outbox.id, row.id), eq(outbox.attempts, row.attempts), isOpen())).returning({ id: outbox.id })
+  return kept.length > 0
 }
 
 async function workOnMail(db: Database, desk: MailDesk, row: OutboxRow): Promise<'ended' | 'delayed' | 'unreachable'> {
