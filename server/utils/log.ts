@@ -12,11 +12,14 @@ export const log = {
   error: (event: string, error: unknown, fields: Fields = {}) => write('error', event, { ...fields, ...describeError(error) }),
 }
 
+/** A failed fetch names its whole address: the key of an order or of a link in it is left out. */
+const withoutKeys = (text: string): string => text.replace(/([?&]key=|\/link\/)[A-Za-z0-9_-]+/g, '$1:secret')
+
 /** What may be logged of an error: its kind, code and stack; not the statement's parameters, which hold personal data. */
 function describeError(error: unknown): Fields {
   if (!(error instanceof Error)) return { error: typeof error }
   const root = error.cause instanceof Error ? error.cause : error
   const code = 'code' in root && typeof root.code === 'string' ? root.code : undefined
   const isQuery = error.message.startsWith('Failed query')
-  return { error: root.name, code, message: isQuery ? root.message.slice(0, 200) : error.message.slice(0, 200), stack: root.stack?.split('\n').slice(1, 6).join(' | ') }
+  return { error: root.name, code, message: withoutKeys(isQuery ? root.message : error.message).slice(0, 200), stack: root.stack?.split('\n').slice(1, 6).join(' | ') }
 }

@@ -180,6 +180,24 @@ describe('the outbox', () => {
     expect(sentTo(email)).toHaveLength(1)
   })
 
+  it('leaves a mail to the process that claimed it while the one before took too long (JOB-4)', async () => {
+    const [slow, behind] = [newAddress('slow'), newAddress('behind')]
+    for (const email of [slow, behind]) await enqueueMail(db, inWork(email, 'a'))
+    const takenByOther: string[] = []
+    answer = async (mail) => {
+      if (mail.recipient !== slow) return
+      await query(`update outbox set leased_until = now() - interval '1 second' where recipient = $1`, [behind])
+      takenByOther.push(...(await claimMails(db)).map(row => row.recipient))
+    }
+    await query(`update outbox set run_at = now() - interval '1 minute' where recipient = $1`, [slow])
+    await workOnMails(db, desk, goOn)
+    expect(takenByOther).toContain(behind)
+    expect([sentTo(slow).length, sentTo(behind).length]).toEqual([1, 0])
+    await query(`update outbox set leased_until = now() - interval '1 second' where recipient = $1`, [behind])
+    await workUntilIdle()
+    expect(sentTo(behind)).toHaveLength(1)
+  })
+
   it('looks at the cause again before it sends (MAIL-5)', async () => {
     const [order] = await query<{ id: string }>(`select id from orders where number = $1 and state = 'accepted'`, [Number(acceptedRef.slice(3))])
     expect(order).toBeDefined()
