@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto'
 import { beforeAll, describe, expect, it, vi } from 'vitest'
 
-type Hook = (subject: { body?: string, headers?: Record<string, string>, head?: string[], bodyPrepend?: string[], bodyAppend?: string[] }, context: { event: { context: Record<string, unknown> } }) => void
+type Hook = (subject: { body?: string | string[], headers?: Record<string, string>, head?: string[], bodyPrepend?: string[], bodyAppend?: string[] }, context: { event: { context: Record<string, unknown> } }) => void
 const hooks = new Map<string, Hook>()
 
 /** The plugin as Nitro would start it, with the names that Nitro supplies. */
