@@ -2,6 +2,7 @@ import { and, asc, eq, lt, notInArray, or, sql } from 'drizzle-orm'
 import { orders, payments } from '../../database/schema'
 import type { Database } from '../../database/client'
 import { log } from '../../utils/log'
+import { DomainError } from '../errors'
 import { isUnfinished, type PaymentRow } from './attempts'
 import { PAYABLE_IN } from './amount-due'
 import { closeSession } from './close'
@@ -59,7 +60,14 @@ export async function closeUnwantedPayments(db: Database, desk: PaymentDesk): Pr
     or(and(eq(payments.kind, 'deposit'), notInArray(orders.state, [...PAYABLE_IN.deposit])), and(eq(payments.kind, 'balance'), notInArray(orders.state, [...PAYABLE_IN.balance]))),
   )).limit(BATCH)
   for (const { payment } of rows) {
-    await closeSession(db, desk, payment).catch((error: unknown) => log.error('payment-close', error, { payment: payment.id }))
+    try {
+      await closeSession(db, desk, payment)
+    }
+    catch (error) {
+      log.error('payment-close', error, { payment: payment.id })
+      // Stripe does not answer: the others wait for the next turn, so that they hold up nobody's event meanwhile.
+      if (error instanceof DomainError && error.code === 'unavailable') break
+    }
   }
   return rows.length
 }
