@@ -12,7 +12,7 @@ describe('the tint scale of an order', () => {
   it('shows what is done with its day, where it is, and what is to come', () => {
     const steps = orderSteps({ state: 'deposit-paid', events, promisedOn: '2026-12-15' }, day)
     expect(steps.map(step => `${step.name} ${step.status} ${step.note}`.trim())).toEqual([
-      'Quoted done 2026-12-01', 'Accepted done 2026-12-02', 'Deposit paid here since 2026-12-02', 'Planned todo', 'In work todo', 'Finished todo', 'Dispatched todo expected 15 Dec', 'Settled todo after payment',
+      'Quoted done 2026-12-01', 'Accepted done 2026-12-02', 'Deposit paid here since 2026-12-02', 'Planned ahead', 'In work ahead', 'Finished ahead', 'Dispatched ahead expected 15 Dec', 'Settled ahead after payment',
     ])
   })
 
