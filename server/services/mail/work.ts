@@ -48,8 +48,10 @@ export async function claimMails(db: Database): Promise<OutboxRow[]> {
       ))),
     )).orderBy(asc(outbox.runAt), asc(outbox.id)).limit(BATCH).for('update', { of: outbox, skipLocked: true })
     if (due.length === 0) return []
-    return tx.update(outbox).set({ leasedUntil: sql`now() + make_interval(secs => ${LEASE_S})`, attempts: sql`${outbox.attempts} + 1` })
+    const claimed = await tx.update(outbox).set({ leasedUntil: sql`now() + make_interval(secs => ${LEASE_S})`, attempts: sql`${outbox.attempts} + 1` })
       .where(inArray(outbox.id, due.map(row => row.id))).returning()
+    // An UPDATE gives its rows in any order; the longest due goes first.
+    return claimed.sort((a, b) => a.runAt.getTime() - b.runAt.getTime() || (a.id < b.id ? -1 : 1))
   })
 }
 
