@@ -8,20 +8,35 @@ function revive(key: string, value: unknown): unknown {
 }
 
 /**
- * Reads the raw body up to a limit, counting while it streams in.
+ * Reads the raw body up to a limit, counting while it streams in. Past the limit the rest is let run by unread and the connection
+ * ends with the answer: breaking it off at once would often lose the answer on its way.
  * @throws HttpProblem 413 past the limit
  */
-export async function readLimitedBody(event: H3Event, maxBytes: number): Promise<Buffer> {
-  const tooLarge = () => new HttpProblem(413, `A body of at most ${Math.floor(maxBytes / 1024)} KiB is taken.`)
-  if (Number(getRequestHeader(event, 'content-length') ?? 0) > maxBytes) throw tooLarge()
-  const chunks: Buffer[] = []
-  let size = 0
-  for await (const chunk of event.node.req as AsyncIterable<Buffer>) {
-    size += chunk.length
-    if (size > maxBytes) throw tooLarge()
-    chunks.push(chunk)
+export function readLimitedBody(event: H3Event, maxBytes: number): Promise<Buffer> {
+  const request = event.node.req
+  const tooLarge = () => {
+    setResponseHeader(event, 'connection', 'close')
+    return new HttpProblem(413, `A body of at most ${Math.floor(maxBytes / 1024)} KiB is taken.`)
   }
-  return Buffer.concat(chunks)
+  if (Number(getRequestHeader(event, 'content-length') ?? 0) > maxBytes) return Promise.reject(tooLarge())
+  return new Promise((resolve, reject) => {
+    const chunks: Buffer[] = []
+    let size = 0
+    const collect = (chunk: Buffer) => {
+      size += chunk.length
+      if (size <= maxBytes) {
+        chunks.push(chunk)
+        return
+      }
+      request.off('data', collect)
+      request.resume()
+      reject(tooLarge())
+    }
+    request.on('data', collect)
+    request.once('end', () => resolve(Buffer.concat(chunks)))
+    request.once('error', reject)
+    request.once('close', () => reject(new HttpProblem(400, 'The body ended too early.')))
+  })
 }
 
 /**
