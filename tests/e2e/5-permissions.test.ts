@@ -41,8 +41,7 @@ test('a step inside the pages to a place of others is refused as well, and the w
     void $router.push('/ledger').catch(() => {})
   })
   await expect(page.getByRole('heading', { level: 1, name: 'This place is not yours to see' })).toBeVisible()
-  await page.getByRole('link', { name: 'To the front page' }).click()
-  await page.goto('/bench')
+  await page.getByRole('link', { name: 'Back to your work' }).click()
   await expect(page.getByRole('heading', { level: 1, name: 'Which work centre?' })).toBeVisible()
 })
 

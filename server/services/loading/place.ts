@@ -1,7 +1,7 @@
 import { and, eq, ne, sql } from 'drizzle-orm'
 import type { JobView } from '#shared/schemas/shop'
 import { OPERATION_NAMES } from '#shared/schemas/shop'
-import { addWorkingMinutes, earliestSlot, nextWorkingInstant, takesWire, type PlanCentre } from '../../engine/planning'
+import { addWorkingMinutes, earliestSlot, nextWorkingInstant, PlanningError, takesWire, type PlanCentre } from '../../engine/planning'
 import { jobs, operations } from '../../database/schema'
 import { assertRole, databaseErrorCode, inTransaction, type Queryable, type ServiceContext, type Transaction } from '../context'
 import { conflict, invalid, notFound, stale } from '../errors'
@@ -41,7 +41,7 @@ export async function placeOperation(context: ServiceContext, operationId: strin
     const operation = assertMovable(locked, operationId, input.version)
     const centre = assertAble(centres, operation, locked.wireDiameterMm, input.centreId)
     const startMs = Date.parse(input.startsAt)
-    const endMs = assertTime(context, locked, operation, centre, startMs)
+    const endMs = timeOrRefusal(() => assertTime(context, locked, operation, centre, startMs))
     await writeSpan(tx, context, { operation, centre, startMs, endMs })
     await settlePlan(tx, context, jobId)
   })
@@ -62,6 +62,16 @@ function assertAble(centres: readonly PlanCentre[], operation: OperationRow, wir
   if (centre.kind !== operation.kind) throw invalid('centreId', `${OPERATION_NAMES[operation.kind]} is not done at this work centre.`)
   if (!takesWire(centre, wireDiameterMm)) throw invalid('centreId', `This work centre takes wire of ${centre.wireFromMm} to ${centre.wireToMm} mm; this job's is ${wireDiameterMm} mm.`)
   return centre
+}
+
+/** A work centre that never opens is a refusal in the plan's own words. */
+function timeOrRefusal(find: () => number): number {
+  try {
+    return find()
+  }
+  catch (error) {
+    throw error instanceof PlanningError ? conflict(error.message) : error
+  }
 }
 
 function assertTime(context: ServiceContext, locked: LockedJob, operation: OperationRow, centre: PlanCentre, startMs: number): number {
