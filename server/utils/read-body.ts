@@ -8,16 +8,13 @@ function revive(key: string, value: unknown): unknown {
 }
 
 /**
- * Reads the raw body up to a limit, counting while it streams in. Past the limit the rest is let run by unread and the connection
- * ends with the answer: breaking it off at once would often lose the answer on its way.
+ * Reads the raw body up to a limit, counting while it streams in. Past the limit the rest is let run by unread, as long as the server's
+ * own time for a request lasts: breaking the connection off at once would often lose the answer on its way.
  * @throws HttpProblem 413 past the limit
  */
 export function readLimitedBody(event: H3Event, maxBytes: number): Promise<Buffer> {
   const request = event.node.req
-  const tooLarge = () => {
-    setResponseHeader(event, 'connection', 'close')
-    return new HttpProblem(413, `A body of at most ${Math.floor(maxBytes / 1024)} KiB is taken.`)
-  }
+  const tooLarge = () => new HttpProblem(413, `A body of at most ${Math.floor(maxBytes / 1024)} KiB is taken.`)
   if (Number(getRequestHeader(event, 'content-length') ?? 0) > maxBytes) return Promise.reject(tooLarge())
   return new Promise((resolve, reject) => {
     const chunks: Buffer[] = []
