@@ -1,3 +1,5 @@
+import { toLocalTime } from '#shared/time/zone'
+
 /** The window of the plan: working days side by side, each showing the same hours. Minutes of the day in the shop's zone. */
 export type PlanWindow = { days: readonly string[], startMinute: number, endMinute: number, timeZone: string }
 /** A piece of a bar on one day, in per cent of the whole width. */
@@ -30,21 +32,9 @@ export function laneLabels(bars: readonly { leftPercent: number, text: string }[
   return labels.map(({ leftPercent, texts }) => ({ leftPercent, text: texts.length > 2 ? `${texts[0]} to ${texts.at(-1)}` : texts.join(', ') }))
 }
 
-const formats = new Map<string, Intl.DateTimeFormat>()
-/** Calendar day and minute of the day of a moment in a zone. */
-export function wallClock(moment: Date, timeZone: string): { day: string, minute: number } {
-  let format = formats.get(timeZone)
-  if (!format) {
-    format = new Intl.DateTimeFormat('en-CA', { timeZone, year: 'numeric', month: '2-digit', day: '2-digit', hour: '2-digit', minute: '2-digit', hourCycle: 'h23' })
-    formats.set(timeZone, format)
-  }
-  const parts = Object.fromEntries(format.formatToParts(moment).map(part => [part.type, part.value]))
-  return { day: `${parts.year}-${parts.month}-${parts.day}`, minute: Number(parts.hour) * 60 + Number(parts.minute) }
-}
-
 /** Where a moment stands, in per cent of the width; null outside the window's days. Hours that are not shown are drawn at the edge. */
 export function positionOf(moment: Date, window: PlanWindow): number | null {
-  const { day, minute } = wallClock(moment, window.timeZone)
+  const { day, minute } = toLocalTime(moment.getTime(), window.timeZone)
   const index = window.days.indexOf(day)
   if (index < 0) return null
   const shown = window.endMinute - window.startMinute
@@ -54,8 +44,8 @@ export function positionOf(moment: Date, window: PlanWindow): number | null {
 
 /** The bar of an operation: one piece per day that it touches. Only hours in which its work centre is open are drawn. */
 export function barPieces(startsAt: Date, endsAt: Date, window: PlanWindow, shift: { startMinute: number, endMinute: number }): BarPiece[] {
-  const from = wallClock(startsAt, window.timeZone)
-  const to = wallClock(endsAt, window.timeZone)
+  const from = toLocalTime(startsAt.getTime(), window.timeZone)
+  const to = toLocalTime(endsAt.getTime(), window.timeZone)
   const shown = window.endMinute - window.startMinute
   const pieces: BarPiece[] = []
   window.days.forEach((day, index) => {

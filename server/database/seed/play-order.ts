@@ -7,6 +7,7 @@ import { acceptQuote } from '../../services/quotes/accept'
 import { createEnquiry } from '../../services/enquiries/create'
 import { recordBench } from '../../services/bench/record'
 import { dispatchJob } from '../../services/loading/dispatch'
+import { jobRefOf } from '../../services/jobs/refs'
 import { placeWholeJob } from '../../services/loading/place-all'
 import { bookCapture } from '../../services/payments/book-capture'
 import { findAmountDue } from '../../services/payments/amount-due'
@@ -39,7 +40,7 @@ export async function playOrder(stage: Stage, cast: Cast, demo: DemoOrder, now: 
   if (!reaches('planned')) return
 
   const [job] = await stage.db.select().from(jobs).where(eq(jobs.orderId, order!.id))
-  const jobRef = `J-${job!.number}`
+  const jobRef = jobRefOf(job!.number)
   // A job that is only planned was planned an hour ago, so that its work lies ahead.
   await placeWholeJob(at(reaches('in-work') ? 5 : demo.hoursAgo - 1, cast.supervisor), jobRef, job!.version)
   if (!reaches('in-work')) return

@@ -1,5 +1,5 @@
 import { PlanningError } from './errors'
-import { addDays, MINUTE_MS, toEpochMs, toLocalTime, weekdayOf } from './zone'
+import { addDays, MINUTE_MS, toEpochMs, toLocalTime, weekdayOf } from '#shared/time/zone'
 
 /** When a work centre works: one shift a day in the shop's zone. */
 export interface WorkCalendar {

@@ -1,5 +1,5 @@
 export { PlanningError, type PlanningErrorCode } from './errors'
-export { addDays, toEpochMs, toLocalTime, weekdayOf, type LocalTime } from './zone'
+export { addDays, TimeError, toEpochMs, toLocalTime, weekdayOf, type LocalTime } from '#shared/time/zone'
 export {
   addWorkingDays, addWorkingMinutes, assertCalendar, isWorkingDay, nextWorkingInstant, WORKING_WEEK, workingMinutesBetween,
   type Interval, type WorkCalendar,

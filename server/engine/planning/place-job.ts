@@ -2,7 +2,7 @@ import type { OperationKind } from '../pricing'
 import type { Interval, WorkCalendar } from './calendar'
 import { PlanningError } from './errors'
 import { earliestSlot } from './slot'
-import { toLocalTime } from './zone'
+import { toLocalTime } from '#shared/time/zone'
 
 /** A work centre as the plan sees it. */
 export interface PlanCentre {

@@ -1,6 +1,6 @@
 import { addWorkingDays, type WorkCalendar } from './calendar'
 import { placeJob, type PlacedJob, type PlaceJobRequest } from './place-job'
-import { addDays, toEpochMs, toLocalTime } from './zone'
+import { addDays, toEpochMs, toLocalTime } from '#shared/time/zone'
 
 export interface PromiseRequest extends Omit<PlaceJobRequest, 'notBeforeMs'> {
   /** The moment of asking. */

@@ -1,6 +1,6 @@
 import { addWorkingMinutes, nextWorkingInstant, type Interval, type WorkCalendar } from './calendar'
 import { PlanningError } from './errors'
-import { MINUTE_MS } from './zone'
+import { MINUTE_MS } from '#shared/time/zone'
 
 /** Sorted, merged copy of busy stretches. Throws PlanningError `interval-unreadable`. */
 export function mergeIntervals(intervals: readonly Interval[]): Interval[] {

@@ -4,6 +4,7 @@ import { benchRecords, jobs, operations, orders, quotePrices, quotes, workCentre
 import { assertRole, type ServiceContext } from '../context'
 import { notFound } from '../errors'
 import { operationColumns, toOperationView } from '../jobs/operation-columns'
+import { jobRefOf } from '../jobs/refs'
 import { cautionsFor } from './cautions'
 import { readClock } from './clock'
 import { toSheet } from './sheet'
@@ -45,7 +46,7 @@ export async function readBench({ db, now, timeZone }: Pick<ServiceContext, 'db'
   const views = rows.map((row): BenchOperation => {
     const own = records.filter(record => record.operationId === row.id)
     return {
-      ...toOperationView(row), jobRef: `J-${row.jobNumber}`, customer: row.customer, title: row.title, quantity: row.quantity, previousDone: row.previousDone,
+      ...toOperationView(row), jobRef: jobRefOf(row.jobNumber), customer: row.customer, title: row.title, quantity: row.quantity, previousDone: row.previousDone,
       goodSoFar: own.reduce((sum, record) => sum + record.good, 0), scrapSoFar: own.reduce((sum, record) => sum + record.scrap, 0),
       runningSince: readClock(own, now).runningSince?.toISOString() ?? null,
     }

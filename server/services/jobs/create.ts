@@ -3,6 +3,7 @@ import { OPERATION_KINDS } from '#shared/schemas/shop'
 import { jobs, operations, orders, quotePrices, quotes, wireReservations } from '../../database/schema'
 import type { Transaction } from '../context'
 import { lockFreeKg } from '../wire/free-kg'
+import { jobRefOf } from './refs'
 
 /**
  * Makes the job of an accepted order: its routing with the minutes that were priced, and its wire set aside.
@@ -30,5 +31,5 @@ export async function createJob(tx: Transaction, { orderId, now }: { orderId: st
     jobId, position: index + 1, kind: step.kind, setUpMinutes: String(step.setUpMinutes), runMinutes: String(step.runMinutes),
   })))
   await tx.insert(wireReservations).values({ jobId, wireProductId: rung.wireProductId, massKg: rung.wireKg })
-  return { jobId, jobRef: `J-${job!.number}` }
+  return { jobId, jobRef: jobRefOf(job!.number) }
 }

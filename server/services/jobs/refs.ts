@@ -1,2 +1,5 @@
-/** The number inside a job's or an order's reference: J-1207 is 1207. Give a reference that a schema has parsed. */
-export const numberOfRef = (ref: string): number => Number(ref.slice(ref.indexOf('-') + 1))
+/** The number of a job as people write it: J-1207. */
+export const jobRefOf = (number: number): string => `J-${number}`
+
+/** The number behind a reference that was checked with `jobRefSchema`. */
+export const jobNumberOf = (ref: string): number => Number(ref.slice('J-'.length))

@@ -4,7 +4,7 @@ import { OPERATION_NAMES } from '#shared/schemas/shop'
 import { benchRecords, jobs, ledgerEntries, ledgerTransactions, operations, orders, people, priceBooks, quotePrices, quotes, wireProducts } from '../../database/schema'
 import { assertRole, type ServiceContext } from '../context'
 import { notFound } from '../errors'
-import { numberOfRef } from '../jobs/refs'
+import { jobNumberOf } from '../jobs/refs'
 import { orderRefOf } from '../orders/reference'
 import { getCurrentPriceBook } from '../price-books/get-current'
 import { jobKeyColumns, onQuote, onQuotePrice, onWire, readJobCosts } from './job-costs'
@@ -16,7 +16,7 @@ export async function getJobCost(context: ServiceContext, ref: string): Promise<
     ...jobKeyColumns, orderId: orders.id, orderNumber: orders.number, customer: orders.firmName, title: orders.title, quantity: jobs.quantity, finishedAt: jobs.finishedAt,
     priceMinor: quotePrices.netMinor, priceBookNumber: priceBooks.number,
   }).from(jobs).innerJoin(orders, eq(orders.id, jobs.orderId)).innerJoin(quotePrices, onQuotePrice).innerJoin(quotes, onQuote).innerJoin(priceBooks, eq(priceBooks.id, quotes.priceBookId)).leftJoin(wireProducts, onWire)
-    .where(eq(jobs.number, numberOfRef(ref)))
+    .where(eq(jobs.number, jobNumberOf(ref)))
   if (!row) throw notFound('job')
   const book = await getCurrentPriceBook(context)
   const [costs, records, entries] = await Promise.all([

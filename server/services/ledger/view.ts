@@ -4,6 +4,7 @@ import { jobs, ledgerEntries, orders, quotePrices, quotes, wireProducts } from '
 import { assertRole, type ServiceContext } from '../context'
 import { decodeCursor, encodeCursor } from '../cursor'
 import { invalid } from '../errors'
+import { jobRefOf } from '../jobs/refs'
 import { orderRefOf } from '../orders/reference'
 import { ACCOUNTS } from '../payments/accounts'
 import { getCurrentPriceBook } from '../price-books/get-current'
@@ -27,7 +28,7 @@ export async function getLedger(context: ServiceContext, page: { cursor?: string
       const total = costs.get(row.jobId)!.total
       const isRecorded = total.actualMinor > 0
       return {
-        jobRef: `J-${row.number}`, orderRef: orderRefOf(row.orderNumber), customer: row.customer, title: row.title, quantity: row.quantity, state: row.state, finishedAt: row.finishedAt?.toISOString() ?? null, currency: row.currency, priceMinor: row.priceMinor,
+        jobRef: jobRefOf(row.number), orderRef: orderRefOf(row.orderNumber), customer: row.customer, title: row.title, quantity: row.quantity, state: row.state, finishedAt: row.finishedAt?.toISOString() ?? null, currency: row.currency, priceMinor: row.priceMinor,
         quotedCostMinor: total.quotedMinor, actualCostMinor: isRecorded ? total.actualMinor : null, differenceMinor: isRecorded ? total.differenceMinor : null, isComplete: total.isComplete,
       }
     }),

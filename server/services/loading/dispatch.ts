@@ -5,7 +5,7 @@ import { jobs } from '../../database/schema'
 import { assertRole, inTransaction, type ServiceContext } from '../context'
 import { conflict, notFound, stale } from '../errors'
 import { readJobMailFacts } from '../jobs/mail-facts'
-import { numberOfRef } from '../jobs/refs'
+import { jobNumberOf } from '../jobs/refs'
 import { enqueueMail } from '../mail/enqueue'
 import { moveOrder } from '../orders/move'
 import { lockJob } from './lock-job'
@@ -17,7 +17,7 @@ import { readOneJob } from './place'
  */
 export async function dispatchJob(context: ServiceContext, ref: string, version: number): Promise<JobView> {
   const actor = assertRole(context, 'supervisor', 'admin')
-  const [head] = await context.db.select({ id: jobs.id }).from(jobs).where(eq(jobs.number, numberOfRef(ref)))
+  const [head] = await context.db.select({ id: jobs.id }).from(jobs).where(eq(jobs.number, jobNumberOf(ref)))
   if (!head) throw notFound('job')
   await inTransaction(context.db, async (tx) => {
     const { job, orderId } = await lockJob(tx, head.id)

@@ -7,17 +7,17 @@ import { notFound } from '../errors'
 import { toCentreView } from '../bench/view'
 import { cautionsFor } from '../bench/cautions'
 import { toSheet } from '../bench/sheet'
-import { numberOfRef } from '../jobs/refs'
+import { jobNumberOf } from '../jobs/refs'
 import { workCentres } from '../../database/schema'
 import { readJobs } from './read-jobs'
 
 /** The sheet of one job: spring, routing, history. @throws DomainError not-found */
 export async function getJob(context: ServiceContext, ref: string): Promise<JobSheetView> {
   assertRole(context, 'supervisor', 'operator', 'admin')
-  const [view] = await readJobs(context.db, eq(jobs.number, numberOfRef(ref)), { limit: 1, timeZone: context.timeZone })
+  const [view] = await readJobs(context.db, eq(jobs.number, jobNumberOf(ref)), { limit: 1, timeZone: context.timeZone })
   if (!view) throw notFound('job')
   const [row] = await context.db.select({ jobId: jobs.id, orderId: jobs.orderId, design: quotes.design, wireProductId: quotes.wireProductId }).from(jobs)
-    .innerJoin(quotePrices, eq(quotePrices.id, jobs.quotePriceId)).innerJoin(quotes, eq(quotes.id, quotePrices.quoteId)).where(eq(jobs.number, numberOfRef(ref)))
+    .innerJoin(quotePrices, eq(quotePrices.id, jobs.quotePriceId)).innerJoin(quotes, eq(quotes.id, quotePrices.quoteId)).where(eq(jobs.number, jobNumberOf(ref)))
   const [centres, moves, records] = await Promise.all([
     context.db.select().from(workCentres).where(eq(workCentres.isActive, true)).orderBy(asc(workCentres.code)).limit(100),
     context.db.select({ at: orderEvents.at, who: people.name, words: orderEvents.why }).from(orderEvents).leftJoin(people, eq(people.id, orderEvents.personId)).where(eq(orderEvents.orderId, row!.orderId)).orderBy(asc(orderEvents.id)).limit(200),

@@ -4,7 +4,7 @@ import { placeJob, PlanningError } from '../../engine/planning'
 import { jobs, operations } from '../../database/schema'
 import { assertRole, databaseErrorCode, inTransaction, type ServiceContext } from '../context'
 import { conflict, DomainError, notFound, stale } from '../errors'
-import { numberOfRef } from '../jobs/refs'
+import { jobNumberOf } from '../jobs/refs'
 import { planCentresOf, readPlan } from '../orders/shop-plan'
 import { lockJob, spanOf } from './lock-job'
 import { readOneJob } from './place'
@@ -16,7 +16,7 @@ import { settlePlan } from './settle-plan'
  */
 export async function placeWholeJob(context: ServiceContext, ref: string, version: number): Promise<JobView> {
   assertRole(context, 'supervisor', 'admin')
-  const [head] = await context.db.select({ id: jobs.id }).from(jobs).where(eq(jobs.number, numberOfRef(ref)))
+  const [head] = await context.db.select({ id: jobs.id }).from(jobs).where(eq(jobs.number, jobNumberOf(ref)))
   if (!head) throw notFound('job')
   try {
     await inTransaction(context.db, async (tx) => {

@@ -5,6 +5,7 @@ import { addWorkingMinutes, earliestSlot, nextWorkingInstant, PlanningError, tak
 import { jobs, operations } from '../../database/schema'
 import { assertRole, databaseErrorCode, inTransaction, type Queryable, type ServiceContext, type Transaction } from '../context'
 import { conflict, invalid, notFound, stale } from '../errors'
+import { jobRefOf } from '../jobs/refs'
 import type { OperationRow } from '../jobs/operation-columns'
 import { planCentresOf, readPlan } from '../orders/shop-plan'
 import { lockJob, spanOf, type LockedJob } from './lock-job'
@@ -106,7 +107,8 @@ async function clashWords(tx: Transaction, context: ServiceContext, { operation,
     .where(and(eq(operations.workCentreId, centre.id), ne(operations.id, operation.id), sql`${operations.plannedSpan} && ${spanOf(startMs, endMs)}::tstzrange`)).orderBy(sql`lower(${operations.plannedSpan})`).limit(1)
   const { busyByCentre } = await readPlan(tx)
   const free = earliestSlot({ calendar: centre.calendar, busy: busyByCentre[centre.id] ?? [], durationMinutes: minutesOf(operation), notBeforeMs: startMs })
-  return `J-${other?.number ?? '?'} has this work centre at that time. It is free for this operation from ${momentWords(free.startMs, context.timeZone)}.`
+  const who = other ? jobRefOf(other.number) : 'Another job'
+  return `${who} has this work centre at that time. It is free for this operation from ${momentWords(free.startMs, context.timeZone)}.`
 }
 
 /** Takes an operation out of the plan. @throws DomainError conflict, stale, not-found */

@@ -1,11 +1,12 @@
 import { and, asc, eq, inArray, sql, type SQL } from 'drizzle-orm'
 import type { JobView } from '#shared/schemas/shop'
 import { getMaterial } from '#shared/spring/materials'
+import { toLocalTime } from '../../engine/planning'
 import { jobs, operations, orders, quotePrices, quotes, workCentres } from '../../database/schema'
 import type { Queryable } from '../context'
 import { operationColumns, toOperationView } from '../jobs/operation-columns'
+import { jobRefOf } from '../jobs/refs'
 import { orderRefOf } from '../orders/reference'
-import { dayIn } from './day'
 
 /** Jobs with their operations, oldest first. At most `limit`. */
 export async function readJobs(db: Queryable, where: SQL | undefined, options: { limit: number, timeZone: string }): Promise<JobView[]> {
@@ -19,10 +20,10 @@ export async function readJobs(db: Queryable, where: SQL | undefined, options: {
     const own = steps.filter(step => step.jobId === job.id)
     const last = own.every(step => step.endsAt !== null) ? own.reduce<Date | null>((latest, step) => latest && latest > step.endsAt! ? latest : step.endsAt, null) : null
     return {
-      ref: `J-${job.number}`, orderRef: orderRefOf(order.number), customer: order.firmName, title: order.title, quantity: job.quantity, state: job.state, version: job.version,
+      ref: jobRefOf(job.number), orderRef: orderRefOf(order.number), customer: order.firmName, title: order.title, quantity: job.quantity, state: job.state, version: job.version,
       promisedOn: job.promisedOn, neededOn: order.neededOn, waitsForWire: job.waitsForWire, wireKg: Number(wireKg), createdAt: job.createdAt.toISOString(),
       wire: design ? `${getMaterial(design.material).name}, ${design.wireDiameterMm.toFixed(2)} mm` : '',
-      leavesOn: last ? dayIn(last, options.timeZone) : null, operations: own.map(toOperationView),
+      leavesOn: last ? toLocalTime(last.getTime(), options.timeZone).day : null, operations: own.map(toOperationView),
     }
   })
 }

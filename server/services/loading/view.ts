@@ -3,7 +3,7 @@ import type { LoadingView } from '#shared/schemas/shop'
 import { holidays, workCentres } from '../../database/schema'
 import { assertRole, type ServiceContext } from '../context'
 import { toCentreView } from '../bench/view'
-import { dayIn } from './day'
+import { toLocalTime } from '../../engine/planning'
 import { openOrPlannedBetween, readJobs } from './read-jobs'
 
 /** Jobs shown at once; a shop of this size has fewer open. */
@@ -13,7 +13,7 @@ const DAY_MS = 86_400_000
 /** What runs where from a day on, and what is paid but not planned. Unpaid orders have no job, so they never appear. */
 export async function getLoading(context: ServiceContext, input: { from?: string, days: number }): Promise<LoadingView> {
   assertRole(context, 'supervisor', 'operator', 'admin')
-  const from = input.from ?? dayIn(context.now, context.timeZone)
+  const from = input.from ?? toLocalTime(context.now.getTime(), context.timeZone).day
   // A day's margin on both sides, so that the zone of the shop never cuts an operation off.
   const start = new Date(Date.parse(`${from}T00:00:00Z`) - DAY_MS)
   const end = new Date(start.getTime() + (input.days + 2) * DAY_MS)

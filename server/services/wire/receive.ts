@@ -5,6 +5,7 @@ import { jobs, wireProducts, wireReceipts, wireReservations } from '../../databa
 import { recordAudit } from '../audit/record'
 import { assertRole, inTransaction, type ServiceContext, type Transaction } from '../context'
 import { notFound } from '../errors'
+import { jobRefOf } from '../jobs/refs'
 
 /**
  * Takes wire into the rack and tells the jobs that waited for it, oldest first, as far as it goes. The same receipt sent
@@ -36,7 +37,7 @@ async function coverJobs(tx: Transaction, wireProductId: string, stockKg: number
     leftKg -= Number(job.massKg)
     if (!job.waitsForWire || leftKg < 0) continue
     await tx.update(jobs).set({ waitsForWire: false }).where(eq(jobs.id, job.jobId))
-    covered.push(`J-${job.number}`)
+    covered.push(jobRefOf(job.number))
   }
   return covered
 }

@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { barPieces, laneLabels, positionOf, wallClock, workingDays, type PlanWindow } from '../../../app/utils/plan-layout'
+import { barPieces, laneLabels, positionOf, workingDays, type PlanWindow } from '../../../app/utils/plan-layout'
 
 const window: PlanWindow = { days: workingDays('2026-12-07', 10), startMinute: 6 * 60, endMinute: 22 * 60, timeZone: 'Europe/Dublin' }
 const early = { startMinute: 6 * 60, endMinute: 14 * 60 }
@@ -23,7 +23,9 @@ describe('a moment in the plan', () => {
     expect(positionOf(new Date('2026-12-12T12:00:00Z'), window)).toBeNull()
   })
   it('is read in the zone of the shop, an hour later in summer', () => {
-    expect(wallClock(new Date('2026-07-01T05:00:00Z'), 'Europe/Dublin')).toEqual({ day: '2026-07-01', minute: 6 * 60 })
+    const july: PlanWindow = { ...window, days: ['2026-07-01'] }
+    expect(positionOf(new Date('2026-07-01T05:00:00Z'), july)).toBe(0)
+    expect(positionOf(new Date('2026-07-01T13:00:00Z'), july)).toBeCloseTo(50, 9)
   })
 })
 

@@ -1,7 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import {
-  addWorkingDays, addWorkingMinutes, buildRouting, earliestSlot, isWorkingDay, mergeIntervals, nextWorkingInstant, placeJob, PlanningError, promiseDate,
+  addWorkingDays, addWorkingMinutes, buildRouting, earliestSlot, isWorkingDay, mergeIntervals, nextWorkingInstant, placeJob, PlanningError, promiseDate, TimeError,
   toEpochMs, toLocalTime, weekdayOf, wireWaitDays, WORKING_WEEK, workingMinutesBetween, type Interval, type PlanCentre, type WorkCalendar,
 } from '#server/engine/planning'
 import { priceQuantity } from '#server/engine/pricing'
@@ -18,7 +18,7 @@ const codeOf = (act: () => unknown) => {
   try {
     act()
   } catch (error) {
-    if (error instanceof PlanningError) return error.code
+    if (error instanceof PlanningError || error instanceof TimeError) return error.code
     throw error
   }
   return undefined

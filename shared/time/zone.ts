@@ -1,4 +1,10 @@
-import { PlanningError } from './errors'
+/** A time zone or a day that is none. `message` can be shown to staff; `subject` is what was given. */
+export class TimeError extends Error {
+  constructor(readonly code: 'calendar-unreadable' | 'date-unreadable', message: string, readonly subject: string) {
+    super(message)
+    this.name = 'TimeError'
+  }
+}
 
 export const MINUTE_MS = 60_000
 const DAY_MS = 86_400_000
@@ -21,7 +27,7 @@ function formatterOf(timeZone: string): Intl.DateTimeFormat {
     formatters.set(timeZone, made)
     return made
   } catch {
-    throw new PlanningError('calendar-unreadable', `“${timeZone}” is no time zone.`, timeZone)
+    throw new TimeError('calendar-unreadable', `“${timeZone}” is no time zone.`, timeZone)
   }
 }
 
@@ -41,7 +47,7 @@ export function toLocalTime(epochMs: number, timeZone: string): LocalTime {
 
 /**
  * Instant of a local day and minute (0 to 1440). A time that the clocks skip in spring becomes the instant they jump; of a time
- * that comes twice in autumn it is the first. Throws PlanningError for a day that is no date.
+ * that comes twice in autumn it is the first. Throws TimeError for a day that is no date.
  */
 export function toEpochMs({ day, minute }: LocalTime, timeZone: string): number {
   const wallMs = dayNumber(day) * DAY_MS + minute * MINUTE_MS
@@ -70,7 +76,7 @@ function firstInstantFrom(lowMs: number, highMs: number, wallMs: number, timeZon
 
 function dayNumber(day: string): number {
   const ms = /^\d{4}-\d{2}-\d{2}$/.test(day) ? Date.parse(`${day}T00:00:00Z`) : Number.NaN
-  if (Number.isNaN(ms) || new Date(ms).toISOString().slice(0, 10) !== day) throw new PlanningError('date-unreadable', `“${day}” is no date.`, day)
+  if (Number.isNaN(ms) || new Date(ms).toISOString().slice(0, 10) !== day) throw new TimeError('date-unreadable', `“${day}” is no date.`, day)
   return ms / DAY_MS
 }
 
