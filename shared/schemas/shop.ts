@@ -36,7 +36,9 @@ export type JobView = {
   ref: string, orderRef: string, customer: string, title: string, quantity: number, state: JobState, version: number,
   promisedOn: string | null, neededOn: string | null, waitsForWire: boolean, wire: string, wireKg: number, createdAt: string,
   /** Planned end of the last operation, when all are placed. */
-  leavesOn: string | null, operations: OperationView[],
+  leavesOn: string | null,
+  /** By the plan it leaves later than was promised. */
+  isLate: boolean, operations: OperationView[],
 }
 export type LoadingView = { from: string, to: string, timeZone: string, centres: CentreView[], jobs: JobView[], holidays: { day: string, name: string }[] }
 
@@ -65,6 +67,8 @@ export type BenchSheet = {
 }
 /** One job's own page. */
 export type JobSheetView = JobView & {
-  timeZone: string, wireProductId: string | null, design: StoredDesign | null, sheet: BenchSheet | null, centres: CentreView[], history: { at: string, who: string, words: string }[], cautions: string[],
+  timeZone: string, wireProductId: string | null, design: StoredDesign | null, sheet: BenchSheet | null,
+  /** The work centres that take this job's wire. */
+  centres: CentreView[], history: { at: string, who: string, words: string }[], cautions: string[],
 }
 export const loadingQuerySchema = z.strictObject({ from: daySchema.optional(), days: z.coerce.number().int().min(1).max(60).default(14) })

@@ -2,6 +2,7 @@ import { asc, eq } from 'drizzle-orm'
 import type { JobSheetView } from '#shared/schemas/shop'
 import { benchRecords, jobs, operations, orderEvents, people, quotePrices, quotes } from '../../database/schema'
 import { OPERATION_NAMES } from '#shared/schemas/shop'
+import { takesWire } from '../../engine/planning'
 import { assertRole, type ServiceContext } from '../context'
 import { notFound } from '../errors'
 import { toCentreView } from '../bench/view'
@@ -29,5 +30,5 @@ export async function getJob(context: ServiceContext, ref: string): Promise<JobS
     ...records.filter(record => record.act !== 'count').map(record => ({ at: record.at.toISOString(), who: record.who, words: `${OPERATION_NAMES[record.kind]}: ${record.act}${record.note ? `, ${record.note}` : ''}` })),
   ].sort((a, b) => a.at.localeCompare(b.at))
   const cautions = [...new Set(view.operations.flatMap(operation => cautionsFor(operation.kind)))]
-  return { ...view, timeZone: context.timeZone, wireProductId: row?.wireProductId ?? null, design: row?.design ?? null, sheet: row?.design ? toSheet(row.design, view.wireKg) : null, centres: centres.map(toCentreView), history, cautions }
+  return { ...view, timeZone: context.timeZone, wireProductId: row?.wireProductId ?? null, design: row?.design ?? null, sheet: row?.design ? toSheet(row.design, view.wireKg) : null, centres: centres.filter(centre => takesWire(centre, row?.design?.wireDiameterMm ?? 0)).map(toCentreView), history, cautions }
 }

@@ -19,11 +19,12 @@ export async function readJobs(db: Queryable, where: SQL | undefined, options: {
   return rows.map(({ job, order, design, wireKg }): JobView => {
     const own = steps.filter(step => step.jobId === job.id)
     const last = own.every(step => step.endsAt !== null) ? own.reduce<Date | null>((latest, step) => latest && latest > step.endsAt! ? latest : step.endsAt, null) : null
+    const leavesOn = last ? toLocalTime(last.getTime(), options.timeZone).day : null
     return {
       ref: jobRefOf(job.number), orderRef: orderRefOf(order.number), customer: order.firmName, title: order.title, quantity: job.quantity, state: job.state, version: job.version,
       promisedOn: job.promisedOn, neededOn: order.neededOn, waitsForWire: job.waitsForWire, wireKg: Number(wireKg), createdAt: job.createdAt.toISOString(),
       wire: design ? `${getMaterial(design.material).name}, ${design.wireDiameterMm.toFixed(2)} mm` : '',
-      leavesOn: last ? toLocalTime(last.getTime(), options.timeZone).day : null, operations: own.map(toOperationView),
+      leavesOn, isLate: job.promisedOn !== null && leavesOn !== null && leavesOn > job.promisedOn, operations: own.map(toOperationView),
     }
   })
 }
