@@ -1,5 +1,5 @@
 import type { CoilHand, CompressionEnds } from '../codes'
-import { solidLengthMm } from '../mechanics/end-geometry'
+import { solidLengthMm } from '../mechanics/compression/end-geometry'
 
 /** What has to be known of a compression spring to draw it to scale. */
 export interface DrawnSpring {

@@ -5,7 +5,7 @@ import { checkSizeRequirement } from './check-requirement'
 import { anchorPaths, listRequirements, readNumber, writeNumber, type Requirement } from './requirement-paths'
 import { isFeasible, searchWires, type SearchOptions } from './search-wires'
 import type { CompressionSizeRequest, SizingChange, SizingConflict, SizingWire } from './types'
-import { LEAST_INDEX, MOST_INDEX } from './wire-search'
+import { LEAST_INDEX, MOST_INDEX } from './compression/wire-search'
 
 /**
  * Why no wire gives a spring: a set of requirements that cannot hold together although any smaller part of it can, and for

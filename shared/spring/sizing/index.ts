@@ -1,4 +1,4 @@
-export { sizeCompression, type SizingOptions } from './size-compression'
+export { sizeCompression, type SizingOptions } from './compression/size'
 export { searchWires, type SearchOptions, type SearchOutcome, type SizingObjective } from './search-wires'
 export { describeConflict } from './describe-conflict'
 export { checkSizeRequirement, type RequirementProblem } from './check-requirement'

@@ -1,5 +1,5 @@
 import { checkSizeRequirement } from './check-requirement'
-import { resolveTravel } from './travel'
+import { resolveTravel } from './compression/travel'
 import type { CompressionSizeRequest, LoadPoint } from './types'
 
 type Entry = number | null | undefined

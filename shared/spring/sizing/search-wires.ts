@@ -1,14 +1,14 @@
-import { describeSpring } from '../mechanics/evaluate-compression'
-import { buildCompressionModel, type CompressionModel } from '../mechanics/model'
-import { greatestForceN, fillState, stateWireLengthMm, type CompressionState } from '../mechanics/state'
+import { describeSpring } from '../mechanics/compression/evaluate'
+import { buildCompressionModel, type CompressionModel } from '../mechanics/compression/model'
+import { greatestForceN, fillState, stateWireLengthMm, type CompressionState } from '../mechanics/compression/state'
 import { shearStressMpa } from '../mechanics/stress'
 import { wireMassG } from '../mechanics/wire-length'
-import { searchFixedTravel } from './fixed-travel-search'
-import { searchFreeRate } from './free-rate-search'
-import { searchStepped } from './stepped-search'
-import { STEP_TOLERANCE, resolveTravel, type Travel } from './travel'
+import { searchFixedTravel } from './compression/fixed-travel-search'
+import { searchFreeRate } from './compression/free-rate-search'
+import { searchStepped } from './compression/stepped-search'
+import { STEP_TOLERANCE, resolveTravel, type Travel } from './compression/travel'
 import type { CompressionSizeRequest, SizedDesign, SizingCandidate, SizingWire } from './types'
-import { createSearchState, type Steps, type WireGoal, type WireSpring } from './wire-search'
+import { createSearchState, type Steps, type WireGoal, type WireSpring } from './compression/wire-search'
 
 /** What is best: the lightest, the least stressed at work, or the least of a number the caller gives a candidate. */
 export type SizingObjective<W extends SizingWire> = 'mass' | 'stress' | ((candidate: SizingCandidate<W>) => number)

@@ -1,7 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { centreLine, drawnSolidLengthMm, drawnPitchMm, isDrawable } from '#shared/spring/drawing/drawn-spring'
-import { pitchMm } from '#shared/spring/mechanics/end-geometry'
+import { pitchMm } from '#shared/spring/mechanics/compression/end-geometry'
 import { anySpring, demoSpring } from './springs'
 
 describe('the centre line of the wire', () => {

@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { EvaluateRequestSchema, EvaluateResponseSchema } from '#shared/schemas/spring'
 import { COMPRESSION_ENDS, MATERIAL_CODES, evaluateCompression, type CompressionInput } from '#shared/spring'
-import { COMPRESSION_CHECKS } from '../../../shared/spring/mechanics/checks'
+import { COMPRESSION_CHECKS } from '../../../shared/spring/mechanics/compression/checks'
 import { makeSpring } from './springs'
 
 const stopsOf = (input: CompressionInput) =>

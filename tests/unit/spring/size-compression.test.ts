@@ -4,7 +4,7 @@ import {
   describeConflict, evaluateCompression, getMaterial, minimumTensileStrengthMpa, modulusMpa, sizeCompression,
   type CompressionInput, type CompressionSizeRequest, type SizedDesign, type SizingWire,
 } from '#shared/spring'
-import { uncoveredChecks } from '../../../shared/spring/sizing/fixed-travel-search'
+import { uncoveredChecks } from '../../../shared/spring/sizing/compression/fixed-travel-search'
 import { EN_CODES, makeRequest, makeWires } from './springs'
 
 const catalogue = makeWires(...EN_CODES)

@@ -1,4 +1,4 @@
-import type { CompressionSizeRequest, LoadPoint } from './types'
+import type { CompressionSizeRequest, LoadPoint } from '../types'
 
 /** Rate and free length follow from the request. `anchor` says what stays exact when coils or diameter go in steps. */
 export interface FixedTravel {

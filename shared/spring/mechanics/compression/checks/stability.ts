@@ -1,5 +1,5 @@
 import { bucklingDeflection } from '../buckling'
-import { figure } from '../figure'
+import { figure } from '../../figure'
 import type { CompressionModel } from '../model'
 import { naturalFrequencyHz, SURGE_RATIO } from '../natural-frequency'
 import type { CompressionState } from '../state'

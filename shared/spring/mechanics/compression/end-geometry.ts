@@ -1,4 +1,4 @@
-import type { CompressionEnds } from '../codes'
+import type { CompressionEnds } from '../../codes'
 
 /**
  * Which solid length is meant. `en`: EN 13906-1, with the thickest wire its tolerance allows and 1.5 d for unground ends

@@ -1,4 +1,4 @@
-import { figure } from '../figure'
+import { figure } from '../../figure'
 import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
 
 const always = () => true

@@ -1,4 +1,4 @@
-import { figure } from '../figure'
+import { figure } from '../../figure'
 import type { CompressionState } from '../state'
 import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
 

@@ -1,8 +1,8 @@
 import type { CompressionModel } from './model'
 import type { CompressionState } from './state'
-import { freeLengthToleranceMm, loadToleranceN, parallelismMm, squarenessMm } from './tolerances/load-and-length'
-import { meanDiameterToleranceMm } from './tolerances/mean-diameter'
-import type { PointResult, Tolerance } from './types'
+import { freeLengthToleranceMm, loadToleranceN, parallelismMm, squarenessMm } from '../tolerances/load-and-length'
+import { meanDiameterToleranceMm } from '../tolerances/mean-diameter'
+import type { PointResult, Tolerance } from '../types'
 
 const PUBLISHED = 'EN 15800 (DIN 2095)'
 const MEMORY = 'EN 15800, coefficients from memory'

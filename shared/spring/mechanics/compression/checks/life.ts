@@ -1,11 +1,11 @@
 import {
   FATIGUE_CYCLES, ZIMMERLI_THICKEST_WIRE_MM, goodmanZimmerliFactor, lifeFractionFactor,
-} from '../fatigue'
-import { figure } from '../figure'
+} from '../../fatigue'
+import { figure } from '../../figure'
 import type { CompressionModel } from '../model'
 import { greatestForceN, leastForceN, statePitchMm, type CompressionState } from '../state'
-import { shearStressMpa } from '../stress'
-import { stressCorrectionFactor } from '../stress-factors'
+import { shearStressMpa } from '../../stress'
+import { stressCorrectionFactor } from '../../stress-factors'
 import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
 
 /** Corrected stress at the greatest working load and at the least (zero where there is one point), MPa. */

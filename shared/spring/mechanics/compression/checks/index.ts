@@ -1,6 +1,6 @@
 import type { CompressionModel } from '../model'
 import type { CompressionState } from '../state'
-import type { Check } from '../types'
+import type { Check } from '../../types'
 import type { CompressionCheck } from './check'
 import { boreCheck, freeLengthCheck, rodCheck, solidLengthCheck } from './fit'
 import { fatigueCheck, peeningCheck, surroundingsCheck, temperatureCheck } from './life'

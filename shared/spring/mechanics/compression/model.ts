@@ -1,10 +1,10 @@
-import type { CompressionEnds, MaterialCode, StressMethod, Surroundings, ToleranceGrade } from '../codes'
-import { getMaterial, greatestWireDiameterMm, minimumTensileStrengthMpa, modulusMpa, type Material } from '../materials'
+import type { CompressionEnds, MaterialCode, StressMethod, Surroundings, ToleranceGrade } from '../../codes'
+import { getMaterial, greatestWireDiameterMm, minimumTensileStrengthMpa, modulusMpa, type Material } from '../../materials'
 import { DYNAMIC_CYCLES } from './clearance'
 import type { SolidLengthConvention } from './end-geometry'
-import { staticLimit, type StaticLimit } from './static-limits'
-import { stressCorrectionFactor } from './stress-factors'
-import type { CompressionConditions, MaterialValues } from './types'
+import { staticLimit, type StaticLimit } from '../static-limits'
+import { stressCorrectionFactor } from '../stress-factors'
+import type { CompressionConditions, MaterialValues } from '../types'
 
 /** What the caller knows beyond the spring itself. */
 export interface EvaluationContext {

@@ -4,18 +4,18 @@ import { buckles, stateBucklingDeflectionMm, stateNaturalFrequencyHz } from './c
 import {
   greatestCorrectedStressMpa, leastCorrectedStressMpa, stateFatigueFactor, stateLifeFractionFactor,
 } from './checks/life'
-import { listTolerances } from './compression-tolerances'
+import { listTolerances } from './tolerances'
 import { totalCoilsFor } from './end-geometry'
 import { buildCompressionModel, type CompressionModel, type EvaluationContext } from './model'
-import { rateNPerMm } from './rate'
+import { rateNPerMm } from '../rate'
 import {
   comparedStressMpa, createState, fillState, outerDiameterAtSolidMm, stateMassG, statePitchMm, stateWireLengthMm,
   type CompressionState,
 } from './state'
-import { shearStressMpa } from './stress'
-import { stressCorrectionFactor } from './stress-factors'
-import { modulusAtTemperatureMpa } from './temperature'
-import type { CompressionEvaluation, CompressionInput, FatigueResult, PointInput, PointResult } from './types'
+import { shearStressMpa } from '../stress'
+import { stressCorrectionFactor } from '../stress-factors'
+import { modulusAtTemperatureMpa } from '../temperature'
+import type { CompressionEvaluation, CompressionInput, FatigueResult, PointInput, PointResult } from '../types'
 
 const orNull = (value: number): number | null => (Number.isFinite(value) ? value : null)
 

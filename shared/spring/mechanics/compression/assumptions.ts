@@ -1,6 +1,6 @@
-import { ZIMMERLI_THICKEST_WIRE_MM } from './fatigue'
-import { isWithinToleranceScope } from './compression-tolerances'
-import { figure } from './figure'
+import { ZIMMERLI_THICKEST_WIRE_MM } from '../fatigue'
+import { isWithinToleranceScope } from './tolerances'
+import { figure } from '../figure'
 import type { CompressionModel } from './model'
 import { statePitchMm, type CompressionState } from './state'
 

@@ -1,4 +1,4 @@
-import { figure } from '../figure'
+import { figure } from '../../figure'
 import { comparedStressMpa, greatestForceN } from '../state'
 import { exceeds, finishCheck, type CompressionCheck } from './check'
 

@@ -1,6 +1,6 @@
-import { findConflict } from './find-conflict'
-import { searchWires, type SearchOptions } from './search-wires'
-import type { CompressionSizeRequest, SizingResult, SizingWire } from './types'
+import { findConflict } from '../find-conflict'
+import { searchWires, type SearchOptions } from '../search-wires'
+import type { CompressionSizeRequest, SizingResult, SizingWire } from '../types'
 
 export interface SizingOptions<W extends SizingWire> extends SearchOptions<W> {
   /** False leaves out why nothing fits: it takes tens of searches. */

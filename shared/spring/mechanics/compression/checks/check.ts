@@ -1,6 +1,6 @@
 import type { CompressionModel } from '../model'
 import type { CompressionState } from '../state'
-import type { Check, CheckSeverity } from '../types'
+import type { Check, CheckSeverity } from '../../types'
 
 /** One check of a compression spring. Sizing uses `stops`, evaluating uses `describe`; both read the same measure. */
 export interface CompressionCheck {

@@ -1,7 +1,7 @@
-import { totalCoilsFor } from '../mechanics/end-geometry'
-import type { CompressionCheck } from '../mechanics/checks/check'
-import type { CompressionModel } from '../mechanics/model'
-import { createState, type CompressionState } from '../mechanics/state'
+import { totalCoilsFor } from '../../mechanics/compression/end-geometry'
+import type { CompressionCheck } from '../../mechanics/compression/checks/check'
+import type { CompressionModel } from '../../mechanics/compression/model'
+import { createState, type CompressionState } from '../../mechanics/compression/state'
 import type { Travel } from './travel'
 
 /** A spring of one wire, before it is evaluated. */

@@ -2,9 +2,9 @@ import { minimumClearanceMm } from './clearance'
 import { growthAtSolidMm, growthPitchMm } from './diameter-growth'
 import { pitchMm, solidLengthMm } from './end-geometry'
 import type { CompressionModel } from './model'
-import { rateNPerMm } from './rate'
-import { shearStressMpa } from './stress'
-import { wireLengthMm, wireMassG } from './wire-length'
+import { rateNPerMm } from '../rate'
+import { shearStressMpa } from '../stress'
+import { wireLengthMm, wireMassG } from '../wire-length'
 
 /**
  * One spring of a model with the numbers all checks start from. The search fills the same object again and again, so that
