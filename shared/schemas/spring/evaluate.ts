@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { TOLERANCE_GRADES } from '../../spring/codes'
-import type { CompressionEvaluation, CompressionInput } from '../../spring/mechanics/types'
+import type { CompressionEvaluation, CompressionInput } from '../../spring/mechanics/compression/types'
 import {
   CoilHandSchema, CompressionKind, ForceN, FreeLengthMm, LengthMm, MaterialCodeSchema, MaterialValuesSchema, WireDiameterMm,
   compressionConditions, quantity,

@@ -18,6 +18,8 @@ export {
 export { meanDiameterToleranceMm } from './tolerances/mean-diameter'
 export { freeLengthToleranceMm, loadToleranceN, parallelismMm, squarenessMm } from './tolerances/load-and-length'
 export type {
-  Check, CheckSeverity, CompressionConditions, CompressionEvaluation, CompressionInput, Duty, FatigueResult, Fit, MaterialValues,
+  Check, CheckSeverity, Duty, FatigueResult, Fit, MaterialValues,
   PointInput, PointResult, Tolerance,
 } from './types'
+export type { CompressionConditions, CompressionEvaluation, CompressionInput } from './compression/types'
+export type { EvaluationOf, InputOf, SpringEvaluation, SpringInput } from './spring'

@@ -15,7 +15,8 @@ import {
 import { shearStressMpa } from '../stress'
 import { stressCorrectionFactor } from '../stress-factors'
 import { modulusAtTemperatureMpa } from '../temperature'
-import type { CompressionEvaluation, CompressionInput, FatigueResult, PointInput, PointResult } from '../types'
+import type { FatigueResult, PointInput, PointResult } from '../types'
+import type { CompressionEvaluation, CompressionInput } from './types'
 
 const orNull = (value: number): number | null => (Number.isFinite(value) ? value : null)
 
@@ -38,6 +39,7 @@ export function describeSpring(model: CompressionModel, state: CompressionState,
   const points = lengths.map(lengthMm => describePoint(model, state, factor, lengthMm))
   const solidStress = shearStressMpa(state.solidForceN, state.meanDiameterMm, model.wireDiameterMm)
   return {
+    kind: 'compression',
     springIndex: state.springIndex,
     stressCorrectionFactor: factor,
     rateNPerMm: state.rateNPerMm,

@@ -4,7 +4,8 @@ import { DYNAMIC_CYCLES } from './clearance'
 import type { SolidLengthConvention } from './end-geometry'
 import { staticLimit, type StaticLimit } from '../static-limits'
 import { stressCorrectionFactor } from '../stress-factors'
-import type { CompressionConditions, MaterialValues } from '../types'
+import type { MaterialValues } from '../types'
+import type { CompressionConditions } from './types'
 
 /** What the caller knows beyond the spring itself. */
 export interface EvaluationContext {
