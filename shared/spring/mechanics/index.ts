@@ -1,5 +1,5 @@
 export { evaluateCompression } from './compression/evaluate'
-export type { EvaluationContext } from './compression/model'
+export type { EvaluationContext } from './wire-model'
 export { activeCoilsForRate, rateNPerMm } from './rate'
 export { forceAtStressN, shearStressMpa } from './stress'
 export { bergstraesserFactor, directShearFactor, stressCorrectionFactor, wahlFactor } from './stress-factors'

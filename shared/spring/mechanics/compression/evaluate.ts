@@ -6,7 +6,8 @@ import {
 } from './checks/life'
 import { listTolerances } from './tolerances'
 import { totalCoilsFor } from './end-geometry'
-import { buildCompressionModel, type CompressionModel, type EvaluationContext } from './model'
+import type { EvaluationContext } from '../wire-model'
+import { buildCompressionModel, type CompressionModel } from './model'
 import { rateNPerMm } from '../rate'
 import {
   comparedStressMpa, createState, fillState, outerDiameterAtSolidMm, stateMassG, statePitchMm, stateWireLengthMm,

@@ -2,7 +2,8 @@ import { figure } from '../../figure'
 import type { CompressionModel } from '../model'
 import { outerDiameterAtSolidMm, type CompressionState } from '../state'
 import { meanDiameterToleranceMm } from '../../tolerances/mean-diameter'
-import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
+import { exceeds, fallsShort, finishCheck } from '../../checks/check'
+import type { CompressionCheck } from './check'
 
 const CLEARANCE_CAUTION = 0.02
 

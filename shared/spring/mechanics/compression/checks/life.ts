@@ -6,7 +6,8 @@ import type { CompressionModel } from '../model'
 import { greatestForceN, leastForceN, statePitchMm, type CompressionState } from '../state'
 import { shearStressMpa } from '../../stress'
 import { stressCorrectionFactor } from '../../stress-factors'
-import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
+import { exceeds, fallsShort, finishCheck } from '../../checks/check'
+import type { CompressionCheck } from './check'
 
 /** Corrected stress at the greatest working load and at the least (zero where there is one point), MPa. */
 export function greatestCorrectedStressMpa(model: CompressionModel, state: CompressionState): number {
@@ -64,33 +65,6 @@ export const fatigueCheck: CompressionCheck = {
   },
 }
 
-const TEMPERATURE_CAUTION = 0.8
-
-export const temperatureCheck: CompressionCheck = {
-  code: 'temperature',
-  applies: model => !Number.isNaN(model.temperatureC),
-  stops: model => exceeds(model.temperatureC, model.material.temperatureLimitC.value),
-  describe: (model, state) => {
-    const t = model.temperatureC
-    const limit = model.material.temperatureLimitC.value
-    // Music and hard-drawn wire are not for service below freezing (Shigley, Table 10-3).
-    const cold = t < 0 && model.material.family === 'cold-drawn-carbon'
-    return finishCheck(
-      'temperature',
-      { stop: temperatureCheck.stops(model, state), caution: cold || t > TEMPERATURE_CAUTION * limit },
-      t,
-      limit,
-      {
-        stop: `${figure(t)} °C is above the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}).`,
-        caution: cold
-          ? `Cold-drawn carbon wire is not for service below freezing (Shigley, Table 10-3); ${figure(t)} °C is asked for.`
-          : `${figure(t)} °C is over 80 % of the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}): some force will be lost by relaxation.`,
-        pass: `${figure(t)} °C is within the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}).`,
-      },
-    )
-  },
-}
-
 /** Peening: wanted for dynamic duty, workable only where shot reaches between the coils (EN 13906-1, 10.3). */
 export const peeningCheck: CompressionCheck = {
   code: 'peening',
@@ -115,29 +89,6 @@ export const peeningCheck: CompressionCheck = {
           : `Not shot peened; peening would not be workable here: it needs ${rule}.`,
       },
       'note',
-    )
-  },
-}
-
-/** Corrosion where the spring lives. */
-export const surroundingsCheck: CompressionCheck = {
-  code: 'surroundings',
-  applies: model => model.context.surroundings !== undefined && model.context.surroundings !== 'dry',
-  stops: () => false,
-  describe: (model) => {
-    const place = model.context.surroundings ?? 'dry'
-    const harsh = place === 'salt' || place === 'chemical'
-    return finishCheck(
-      'surroundings',
-      { stop: false, caution: !model.material.resistsCorrosion || harsh },
-      Number.NaN,
-      Number.NaN,
-      {
-        stop: '',
-        caution: `Surroundings: ${place}. ${model.material.corrosionNote}`,
-        pass: `Surroundings: ${place}. ${model.material.corrosionNote}`,
-      },
-      'caution',
     )
   },
 }
