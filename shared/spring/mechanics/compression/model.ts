@@ -1,7 +1,6 @@
 import type { CompressionEnds, MaterialCode } from '../../codes'
 import { greatestWireDiameterMm } from '../../materials'
 import { staticLimit, type StaticLimit } from '../static-limits'
-import { stressCorrectionFactor } from '../stress-factors'
 import type { MaterialValues } from '../types'
 import { buildWireModel, type EvaluationContext, type WireModel } from '../wire-model'
 import type { SolidLengthConvention } from './end-geometry'
@@ -28,7 +27,7 @@ export function buildCompressionModel(
 ): CompressionModel {
   const wire = buildWireModel(spring, conditions, context)
   const { method, wireDiameterMm: d, boreMm, rodMm } = wire
-  const limit = staticLimit(method, wire.material.family, wire.preset, w => stressCorrectionFactor(method, w))
+  const limit = staticLimit(method, wire.material.family, wire.preset)
   const convention = method === 'en13906' ? 'en' : 'textbook'
   return {
     ...wire,
