@@ -1,0 +1,16 @@
+import type { SpringKind } from '../codes'
+import { evaluateCompression } from './compression/evaluate'
+import { evaluateExtension } from './extension/evaluate'
+import type { EvaluationOf, InputOf, SpringEvaluation, SpringInput } from './spring'
+import { evaluateTorsion } from './torsion/evaluate'
+import type { EvaluationContext } from './wire-model'
+
+/** Every computed value and check of a spring fully described, whatever its kind. Never throws for finite input. */
+export function evaluateSpring<K extends SpringKind>(input: InputOf<K>, context?: EvaluationContext): EvaluationOf<K>
+export function evaluateSpring(input: SpringInput, context: EvaluationContext = {}): SpringEvaluation {
+  switch (input.kind) {
+    case 'compression': return evaluateCompression(input, context)
+    case 'extension': return evaluateExtension(input, context)
+    case 'torsion': return evaluateTorsion(input, context)
+  }
+}
