@@ -1,3 +1,6 @@
+export { evaluateSpring } from './evaluate-spring'
+export { evaluateExtension } from './extension/evaluate'
+export { evaluateTorsion } from './torsion/evaluate'
 export { evaluateCompression } from './compression/evaluate'
 export type { EvaluationContext } from './wire-model'
 export { activeCoilsForRate, rateNPerMm } from './rate'
@@ -23,3 +26,5 @@ export type {
 } from './types'
 export type { CompressionConditions, CompressionEvaluation, CompressionInput } from './compression/types'
 export type { EvaluationOf, InputOf, SpringEvaluation, SpringInput } from './spring'
+export type { ExtensionConditions, ExtensionEvaluation, ExtensionInput, Hook } from './extension/types'
+export type { Leg, TorsionConditions, TorsionEvaluation, TorsionInput, TorsionPointInput, TorsionPointResult } from './torsion/types'

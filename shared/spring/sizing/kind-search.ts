@@ -1,6 +1,5 @@
 import type { SpringKind } from '../codes'
 import type { EvaluationOf, InputOf } from '../mechanics/spring'
-import type { RequirementProblem } from './check-requirement'
 import type { SizeRequestOf, SizingCandidate, SizingWire } from './types'
 
 /** Which springs of a wire are wanted: the lightest, the least stressed, or every one that another objective may prefer. */
@@ -38,8 +37,6 @@ export interface DroppableRequirement<K extends SpringKind> {
 /** Everything sizing must know of a kind of spring. */
 export interface KindSearch<K extends SpringKind> {
   readonly kind: K
-  /** What is missing, given twice or impossible before any wire is tried. */
-  readonly checkRequirement: (request: SizeRequestOf<K>) => readonly RequirementProblem[]
   /** Throws for a request that was not checked. */
   readonly prepare: (request: SizeRequestOf<K>) => PreparedSearch<K>
   readonly listRequirements: (request: SizeRequestOf<K>) => readonly DroppableRequirement<K>[]

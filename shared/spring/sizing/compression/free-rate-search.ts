@@ -1,31 +1,42 @@
+import { wireRangeCheck, indexCheck } from '../../mechanics/checks/wire'
+import { temperatureCheck } from '../../mechanics/checks/place'
+import { bucklingDeflection } from '../../mechanics/compression/buckling'
 import { passesStopChecks } from '../../mechanics/compression/checks'
 import type { CompressionCheck } from '../../mechanics/compression/checks/check'
-import { boreCheck, freeLengthCheck, rodCheck, solidLengthCheck } from '../../mechanics/compression/checks/fit'
-import { temperatureCheck } from '../../mechanics/checks/place'
-import { wireRangeCheck } from '../../mechanics/checks/wire'
+import { boreCheck, freeLengthCheck, leastInnerDiameterMm, rodCheck, solidLengthCheck } from '../../mechanics/compression/checks/fit'
 import { fatigueCheck } from '../../mechanics/compression/checks/life'
 import { coilsCheck } from '../../mechanics/compression/checks/proportion'
 import { bucklingCheck } from '../../mechanics/compression/checks/stability'
 import { stressSolidCheck, stressWorkingCheck } from '../../mechanics/compression/checks/stress'
 import { clearanceCheck, orderCheck } from '../../mechanics/compression/checks/travel'
+import { totalCoilsFor } from '../../mechanics/compression/end-geometry'
 import type { CompressionModel } from '../../mechanics/compression/model'
-import { rateNPerMm } from '../../mechanics/rate'
 import { fillState, stateMassG, type CompressionState } from '../../mechanics/compression/state'
-import { greatestThatHolds, leastThatHolds, placeOfLeast } from '../numeric-search'
+import { rateNPerMm } from '../../mechanics/rate'
+import { shearStressMpa } from '../../mechanics/stress'
+import { minimiseBounded } from '../bounded-minimum'
+import type { WireGoal, WireSpring } from '../kind-search'
+import { greatestThatHolds, leastThatHolds } from '../numeric-search'
+import { LEAST_INDEX, MOST_INDEX, forEachStep, isContinuous, stepped, type Steps } from '../steps'
+import { LEAST_ACTIVE_COILS, allHold } from './search-state'
 import type { FreeRateTravel } from './travel'
-import { LEAST_ACTIVE_COILS, LEAST_INDEX, MOST_INDEX, allHold, stepped, totalCoils, type Steps, type WireGoal, type WireSpring } from './wire-search'
 
 /*
- * One load at one length leaves rate and free length open: L0 = L + F/R. At a given mean diameter the coils have a least
- * number (the stress when solid, the bore) and a greatest (room, length, buckling); mass grows with the coils, so the
- * least number is taken and the diameter is searched.
+ * One load F at one length L leaves rate and free length open: L0 = L + F/R, R = G d^4/(8 D^3 n).
+ *
+ * At a given D every check is constant in the coils n, or fails only below some n, or only above it: with n the rate falls,
+ * so the load when solid, F + R (L - Lc), and the growth of the diameter fall, while solid length, free length and
+ * slenderness rise. Mass rises with n, so of each D the fewest coils are taken and only D is searched, with bounds.
+ *
+ * Between diameters a and b no spring is lighter than one of diameter a with the fewest coils that could pass anywhere
+ * between: mass rises with D too (n and L0 the same or more). Each check that can be judged for the whole range is judged
+ * at its best place: see `couldPass`.
  */
-const CONSTANT_CHECKS: readonly CompressionCheck[] = [wireRangeCheck, temperatureCheck, stressWorkingCheck, fatigueCheck, rodCheck]
+const CONSTANT_CHECKS: readonly CompressionCheck[] = [wireRangeCheck, temperatureCheck, indexCheck, stressWorkingCheck, fatigueCheck, rodCheck]
 const LEAST_COIL_CHECKS: readonly CompressionCheck[] = [coilsCheck, stressSolidCheck, boreCheck]
 const MOST_COIL_CHECKS: readonly CompressionCheck[] = [orderCheck, clearanceCheck, solidLengthCheck, freeLengthCheck, bucklingCheck]
-
-const GRID = 24
-const STEPPED_NEIGHBOURS = 20
+// At the least diameter these are easiest.
+const EASIEST_SMALL: readonly CompressionCheck[] = [wireRangeCheck, temperatureCheck, stressWorkingCheck, fatigueCheck, orderCheck, clearanceCheck, solidLengthCheck, freeLengthCheck]
 
 interface CoilRange {
   readonly least: number
@@ -33,81 +44,147 @@ interface CoilRange {
 }
 
 function fillAt(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number, n: number): CompressionState {
-  const rate = rateNPerMm({
-    shearModulusMpa: model.shearModulusMpa, wireDiameterMm: model.wireDiameterMm, meanDiameterMm: D, activeCoils: n,
-  })
-  return fillState(state, model, D, n, totalCoils(model, n), travel.point.lengthMm + travel.point.forceN / rate)
+  const rate = rateNPerMm({ shearModulusMpa: model.shearModulusMpa, wireDiameterMm: model.wireDiameterMm, meanDiameterMm: D, activeCoils: n })
+  return fillState(state, model, D, n, totalCoilsFor(model.ends, n), travel.point.lengthMm + travel.point.forceN / rate)
 }
+
+const mostCoils = (model: CompressionModel, travel: FreeRateTravel) => travel.point.lengthMm / model.wireDiameterMm
 
 /** Coils that pass every stop check at a mean diameter; null where none do. */
 function coilRange(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number): CoilRange | null {
   let least = LEAST_ACTIVE_COILS
-  let most = travel.point.lengthMm / model.wireDiameterMm
+  let most = mostCoils(model, travel)
   if (!(least <= most)) return null
-  fillAt(model, state, travel, D, least)
-  if (!allHold(CONSTANT_CHECKS, model, state)) return null
+  if (!allHold(CONSTANT_CHECKS, model, fillAt(model, state, travel, D, least))) return null
   most = greatestThatHolds(n => allHold(MOST_COIL_CHECKS, model, fillAt(model, state, travel, D, n)), least, most)
   if (Number.isNaN(most)) return null
   least = leastThatHolds(n => allHold(LEAST_COIL_CHECKS, model, fillAt(model, state, travel, D, n)), least, most)
   return Number.isNaN(least) ? null : { least, most }
 }
 
-/** Springs of the wire that serve the goal when only one load is asked for; every one passes every stop check. */
+/** Fewest coils with which the checks that ask for coils could pass somewhere between two diameters; NaN where none do. */
+function fewestCoilsBetween(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, a: number, b: number): number {
+  return leastThatHolds((n) => {
+    fillAt(model, state, travel, a, n)
+    // The grown outside diameter rises with D: its growth falls at most as fast as it is large against D.
+    if (boreCheck.applies(model, state) && boreCheck.stops(model, state)) return false
+    return !stressSolidCheck.applies(model, state) || !model.solidSafe || leastSolidStressMpa(model, state, travel, n, a, b) <= model.allowableStressMpa * (1 + 1e-9)
+  }, LEAST_ACTIVE_COILS, mostCoils(model, travel))
+}
+
+/** A stress when solid that no diameter between a and b falls under: factor at b, and the least of F D + K/D^2, which has one valley. */
+function leastSolidStressMpa(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, n: number, a: number, b: number): number {
+  const { lengthMm, forceN } = travel.point
+  const d = model.wireDiameterMm
+  const K = ((model.shearModulusMpa * d ** 4) / (8 * n)) * Math.max(0, lengthMm - state.solidLengthMm)
+  const valley = Math.min(b, Math.max(a, Math.cbrt((2 * K) / forceN)))
+  return model.staticLimit.stressFactor(b / d) * shearStressMpa(forceN + K / valley ** 3, valley, d)
+}
+
+/** False where no spring of diameters between a and b and at least n coils passes. */
+function couldPass(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, n: number, a: number, b: number): boolean {
+  fillAt(model, state, travel, a, n)
+  if (!allHold(EASIEST_SMALL, model, state)) return false
+  // Slender springs bow: thickest at b, shortest and least pressed at a.
+  if (!model.guided) {
+    const critical = bucklingDeflection(state.freeLengthMm, b, model.seating, model.moduli)
+    if (state.freeLengthMm - travel.point.lengthMm > critical * (1 + 1e-9)) return false
+  }
+  if (Number.isNaN(model.rodMm)) return true
+  const shrink = a - leastInnerDiameterMm(model, state)
+  return b - shrink >= model.rodMm * (1 - 1e-9)
+}
+
+function diameterBound(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, a: number, b: number): number {
+  const n = fewestCoilsBetween(model, state, travel, a, b)
+  if (Number.isNaN(n) || !couldPass(model, state, travel, n, a, b)) return Infinity
+  return stateMassG(model, fillAt(model, state, travel, a, n))
+}
+
+/** The best diameter for the goal and its least value, proven; null where the wire gives no spring. */
+function bestDiameter(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: 'mass' | 'stress'): number | null {
+  const d = model.wireDiameterMm
+  const { point } = minimiseBounded({
+    low: [LEAST_INDEX * d], high: [MOST_INDEX * d],
+    bound: ([a = 0], [b = 0]) => {
+      const bound = diameterBound(model, state, travel, a, b)
+      // The working stress of the one load rises with D alone.
+      return goal === 'mass' || bound === Infinity ? bound : a
+    },
+    value: ([D = 0]) => {
+      const range = coilRange(model, state, travel, D)
+      if (!range) return Infinity
+      return goal === 'mass' ? stateMassG(model, fillAt(model, state, travel, D, range.least)) : D
+    },
+  }, { leastWidth: 1e-7 })
+  return point?.[0] ?? null
+}
+
+/** A mass below which no spring of the wire lies, g. */
+export function leastMassFreeRateG(model: CompressionModel, state: CompressionState, travel: FreeRateTravel): number {
+  return diameterBound(model, state, travel, LEAST_INDEX * model.wireDiameterMm, MOST_INDEX * model.wireDiameterMm)
+}
+
+/**
+ * Springs of the wire that serve the goal when only one load is asked for; every one passes every stop check. In steps of
+ * diameter each diameter gives its spring of fewest coils, which is its lightest; `every` gives all of those.
+ */
 export function searchFreeRate(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: WireGoal, steps: Steps): WireSpring[] {
   const d = model.wireDiameterMm
-  const low = LEAST_INDEX * d
-  const high = MOST_INDEX * d
-  const massAt = (D: number) => {
+  const found: WireSpring[] = []
+  const take = (D: number) => {
     const range = coilRange(model, state, travel, D)
-    return range ? stateMassG(model, fillAt(model, state, travel, D, range.least)) : Infinity
+    if (!range) return
+    const n = Number.isNaN(steps.coilStep) ? range.least : stepped(Math.ceil(range.least / steps.coilStep - 1e-9), steps.coilStep)
+    if (n > range.most) return
+    fillAt(model, state, travel, D, n)
+    if (passesStopChecks(model, state)) found.push({ meanDiameterMm: D, activeCoils: n, totalCoils: state.totalCoils, freeLengthMm: state.freeLengthMm })
   }
-  const grid = Array.from({ length: GRID + 1 }, (_, i) => low * (high / low) ** (i / GRID))
-  const masses = grid.map(massAt)
-  const isStepped = !Number.isNaN(steps.coilStep) || !Number.isNaN(steps.diameterStepMm)
-  const places: number[] = []
-  grid.forEach((D, i) => {
-    const mass = masses[i] ?? Infinity
-    if (!Number.isFinite(mass)) return
-    const left = grid[i - 1] ?? D
-    const right = grid[i + 1] ?? D
-    const feasible = (x: number) => Number.isFinite(massAt(x))
-    const from = Number.isFinite(masses[i - 1] ?? mass) ? left : leastThatHolds(feasible, left, D)
-    const to = Number.isFinite(masses[i + 1] ?? mass) ? right : greatestThatHolds(feasible, D, right)
-    const isFirst = !Number.isFinite(masses[i - 1] ?? Infinity)
-    if (goal === 'stress') {
-      if (isFirst) places.push(from)
-    } else if (mass <= (masses[i - 1] ?? Infinity) && mass <= (masses[i + 1] ?? Infinity)) {
-      places.push(placeOfLeast(massAt, from, to))
+  if (isContinuous(steps)) {
+    const D = bestDiameter(model, state, travel, goal === 'stress' ? 'stress' : 'mass')
+    if (D !== null) take(D)
+    return found
+  }
+  if (Number.isNaN(steps.diameterStepMm)) return searchCoilSteps(model, state, travel, goal, steps.coilStep)
+  forEachStep(LEAST_INDEX * d, MOST_INDEX * d, steps.diameterStepMm, take)
+  return goal === 'every' ? found : bestOf(model, state, travel, goal, found)
+}
+
+// With the coils given, mass and stress rise with D: the least diameter that passes is both the lightest and the least stressed.
+function searchCoilSteps(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: WireGoal, coilStep: number): WireSpring[] {
+  const d = model.wireDiameterMm
+  const found: WireSpring[] = []
+  forEachStep(LEAST_ACTIVE_COILS, mostCoils(model, travel), coilStep, (n) => {
+    const { point } = minimiseBounded({
+      low: [LEAST_INDEX * d], high: [MOST_INDEX * d],
+      bound: ([a = 0], [b = 0]) => {
+        const fewest = fewestCoilsBetween(model, state, travel, a, b)
+        return fewest <= n && couldPass(model, state, travel, n, a, b) ? a : Infinity
+      },
+      value: ([D = 0]) => (passesStopChecks(model, fillAt(model, state, travel, D, n)) ? D : Infinity),
+    }, { leastWidth: 1e-7 })
+    const D = point?.[0]
+    if (D === undefined) return
+    fillAt(model, state, travel, D, n)
+    found.push({ meanDiameterMm: D, activeCoils: n, totalCoils: state.totalCoils, freeLengthMm: state.freeLengthMm })
+  })
+  return goal === 'every' ? found : bestOf(model, state, travel, goal, found)
+}
+
+function bestOf(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: 'mass' | 'stress', springs: readonly WireSpring[]): WireSpring[] {
+  let best: WireSpring | null = null
+  let least = Infinity
+  for (const spring of springs) {
+    const value = goal === 'stress' ? spring.meanDiameterMm : stateMassG(model, fillAt(model, state, travel, spring.meanDiameterMm, spring.activeCoils))
+    if (value < least) {
+      least = value
+      best = spring
     }
-    if (goal === 'spread' && !isStepped) places.push(D)
-  })
-  const springs = places.flatMap(D => (isStepped ? steppedNear(model, state, travel, D, steps) : springsAt(model, state, travel, D, goal)))
-  return springs.sort((a, b) => a.meanDiameterMm - b.meanDiameterMm)
+  }
+  return best ? [best] : []
 }
 
-function springsAt(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number, goal: WireGoal): WireSpring[] {
-  const range = coilRange(model, state, travel, D)
-  if (!range) return []
-  const coils = goal === 'spread' ? [range.least, (range.least + range.most) / 2, range.most] : [range.least]
-  return coils.flatMap(n => passing(model, state, travel, D, n))
-}
-
-function steppedNear(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, place: number, steps: Steps): WireSpring[] {
-  const { coilStep, diameterStepMm } = steps
-  const diameters = Number.isNaN(diameterStepMm)
-    ? [place]
-    : Array.from({ length: 2 * STEPPED_NEIGHBOURS + 1 }, (_, i) => stepped(Math.round(place / diameterStepMm) + i - STEPPED_NEIGHBOURS, diameterStepMm))
-  return diameters.flatMap((D) => {
-    if (D < LEAST_INDEX * model.wireDiameterMm || D > MOST_INDEX * model.wireDiameterMm) return []
-    const range = coilRange(model, state, travel, D)
-    if (!range) return []
-    const n = Number.isNaN(coilStep) ? range.least : stepped(Math.ceil(range.least / coilStep - 1e-9), coilStep)
-    return n <= range.most ? passing(model, state, travel, D, n) : []
-  })
-}
-
-function passing(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number, n: number): WireSpring[] {
-  fillAt(model, state, travel, D, n)
-  if (!passesStopChecks(model, state)) return []
-  return [{ meanDiameterMm: D, activeCoils: n, totalCoils: state.totalCoils, freeLengthMm: state.freeLengthMm }]
+/** True where the wire gives some spring. */
+export function isFreeRateFeasible(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, steps: Steps): boolean {
+  return searchFreeRate(model, state, travel, 'mass', steps).length > 0
 }

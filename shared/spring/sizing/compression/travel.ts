@@ -1,3 +1,4 @@
+import { STEP_TOLERANCE } from '../steps'
 import type { CompressionSizeRequest, LoadPoint } from '../types'
 
 /** Rate and free length follow from the request. `anchor` says what stays exact when coils or diameter go in steps. */
@@ -39,9 +40,6 @@ export function resolveTravel(request: CompressionSizeRequest): Travel {
   throw new Error('A size request needs points, or a rate and a free length')
 }
 
-/** Greatest relative error of an asked force (or rate, where no force is asked) that steps of coil and diameter may cause. */
-export const STEP_TOLERANCE = 0.01
-
 /**
  * Free length for a rate that steps have moved off the asked one, and the relative error of the asked forces that comes
  * with it. Between two points the error is shared out evenly; one point is held exactly.
@@ -57,4 +55,16 @@ export function freeLengthForRate(travel: FixedTravel, rateNPerMm: number): { re
     return { freeLengthMm: first.lengthMm + first.forceN / rateNPerMm, error: Math.abs(ratio) }
   }
   return { freeLengthMm: travel.freeLengthMm, error: Math.abs(ratio) }
+}
+
+/**
+ * The stiffest rate and the shortest free length that steps may leave within their tolerance, as if they came together: no
+ * stepped spring is lighter than one of these. Between two loads the rate may be off by (F1 + F2)/(F2 - F1) of it.
+ */
+export function lightestSteppedTravel(travel: FixedTravel): FixedTravel {
+  const [first, second] = travel.points
+  const spread = travel.anchor === 'two-points' && first && second ? (first.forceN + second.forceN) / (second.forceN - first.forceN) : 1
+  const rateNPerMm = travel.rateNPerMm * (1 + STEP_TOLERANCE * spread)
+  if (travel.anchor === 'free-length' || !first) return { ...travel, rateNPerMm }
+  return { ...travel, rateNPerMm, freeLengthMm: first.lengthMm + ((1 - STEP_TOLERANCE) * first.forceN) / rateNPerMm }
 }

@@ -1,0 +1,102 @@
+import { describeSpring } from '../../mechanics/compression/evaluate'
+import { buildCompressionModel, type CompressionModel } from '../../mechanics/compression/model'
+import { fillState, greatestForceN, stateMassG, stateWireLengthMm, type CompressionState } from '../../mechanics/compression/state'
+import { shearStressMpa } from '../../mechanics/stress'
+import type { DroppableRequirement, KindSearch, PreparedSearch, WireGoal, WireSpring } from '../kind-search'
+import { FIT_PATHS, listCommonRequirements, withoutFit } from '../requirement-paths'
+import { isContinuous, stepsNote, stepsOf } from '../steps'
+import type { CompressionSizeRequest, SizingWire } from '../types'
+import { feasibleDiameters, leastMassFixedG, searchFixedTravel } from './fixed-travel-search'
+import { isFreeRateFeasible, leastMassFreeRateG, searchFreeRate } from './free-rate-search'
+import { createSearchState } from './search-state'
+import { searchStepped } from './stepped-search'
+import { lightestSteppedTravel, resolveTravel } from './travel'
+
+function prepare(request: CompressionSizeRequest): PreparedSearch<'compression'> {
+  const travel = resolveTravel(request)
+  const steps = stepsOf(request)
+  const state = createSearchState(travel)
+  const modelOf = (wire: SizingWire): CompressionModel => buildCompressionModel(wire, request, { stocked: wire.stocked, surroundings: request.surroundings })
+  const fill = (model: CompressionModel, spring: WireSpring): CompressionState =>
+    fillState(state, model, spring.meanDiameterMm, spring.activeCoils, spring.totalCoils, spring.freeLengthMm)
+
+  const search = (wire: SizingWire, goal: WireGoal): WireSpring[] => {
+    const model = modelOf(wire)
+    if (travel.kind === 'free-rate') return searchFreeRate(model, state, travel, goal, steps)
+    return isContinuous(steps) ? searchFixedTravel(model, state, travel, goal) : searchStepped(model, state, travel, goal, steps)
+  }
+  return {
+    search,
+    isFeasible: (wire) => {
+      if (travel.kind === 'free-rate') return isFreeRateFeasible(modelOf(wire), state, travel, steps)
+      return isContinuous(steps) ? feasibleDiameters(modelOf(wire), state, travel).length > 0 : search(wire, 'mass').length > 0
+    },
+    leastMassG: (wire) => {
+      if (travel.kind === 'free-rate') return leastMassFreeRateG(modelOf(wire), state, travel)
+      return leastMassFixedG(modelOf(wire), state, isContinuous(steps) ? travel : lightestSteppedTravel(travel))
+    },
+    measure: (wire, spring) => {
+      const model = modelOf(wire)
+      fill(model, spring)
+      // Uncorrected, at the greatest asked load, or when solid where none is asked.
+      const force = travel.points.length > 0 ? greatestForceN(state) : state.solidForceN
+      return {
+        ...spring,
+        wireLengthMm: stateWireLengthMm(model, state),
+        massG: stateMassG(model, state),
+        outerDiameterMm: spring.meanDiameterMm + model.wireDiameterMm,
+        stressMpa: shearStressMpa(force, spring.meanDiameterMm, model.wireDiameterMm),
+      }
+    },
+    describe: (wire, spring) => {
+      const model = modelOf(wire)
+      const evaluation = describeSpring(model, fill(model, spring), travel.points.map(point => point.lengthMm))
+      const note = travel.kind === 'fixed' ? stepsNote(request, travel.points.length > 0 ? 'Forces' : 'The rate') : null
+      const { ends, seatingCoefficient, guided, solidSafe, method, temperatureC, duty, shotPeened, preset, toleranceGrade, fit } = request
+      return {
+        spring: {
+          kind: 'compression', material: wire.material, wireDiameterMm: wire.wireDiameterMm, meanDiameterMm: spring.meanDiameterMm,
+          activeCoils: spring.activeCoils, totalCoils: spring.totalCoils, freeLengthMm: spring.freeLengthMm,
+          ends: ends ?? 'closed-ground', seatingCoefficient, guided, solidSafe, method, temperatureC, duty, shotPeened, preset, toleranceGrade, fit,
+          points: travel.points.map(({ lengthMm }) => ({ lengthMm })),
+        },
+        evaluation: note ? { ...evaluation, assumptions: [...evaluation.assumptions, note] } : evaluation,
+      }
+    },
+  }
+}
+
+// A bore or a rod also guides: leaving it out must not leave the spring free to buckle.
+const withoutFitButGuided: typeof withoutFit<CompressionSizeRequest> = (request, key) => {
+  const guides = (key === 'boreMm' || key === 'rodMm') && request.fit?.[key] !== undefined
+  return withoutFit({ ...request, guided: request.guided || guides }, key)
+}
+
+function listRequirements(request: CompressionSizeRequest): DroppableRequirement<'compression'>[] {
+  const list = listCommonRequirements<'compression'>(request, withoutFitButGuided)
+  if (!request.guided && request.fit?.boreMm === undefined && request.fit?.rodMm === undefined) {
+    list.push({ path: 'guided', without: r => ({ ...r, guided: true }) })
+  }
+  if (request.solidSafe !== false) list.push({ path: 'solidSafe', without: r => ({ ...r, solidSafe: false }) })
+  const [first, second] = request.points
+  if (first && second) {
+    list.push({ path: 'points.0', without: r => ({ ...r, points: r.points.slice(-1) }) })
+    list.push({ path: 'points.1', without: r => ({ ...r, points: r.points.slice(0, 1) }) })
+  } else if (first && request.rateNPerMm !== undefined) {
+    list.push({ path: 'rateNPerMm', without: r => ({ ...r, rateNPerMm: undefined }) })
+  } else if (first && request.freeLengthMm !== undefined) {
+    list.push({ path: 'freeLengthMm', without: r => ({ ...r, freeLengthMm: undefined }) })
+  }
+  return list
+}
+
+/** Compression springs, as sizing takes them. */
+export const COMPRESSION_SEARCH: KindSearch<'compression'> = {
+  kind: 'compression',
+  prepare,
+  listRequirements,
+  anchorPaths: ({ points }) => points.length > 1 ? [] : points.length === 1 ? ['points.0'] : ['rateNPerMm', 'freeLengthMm'],
+  changeablePaths: ({ points }) => [
+    ...FIT_PATHS, ...points.flatMap((_, i) => [`points.${i}.forceN`, `points.${i}.lengthMm`]), 'rateNPerMm', 'freeLengthMm', 'temperatureC', 'duty.cycles',
+  ],
+}
