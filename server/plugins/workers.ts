@@ -1,3 +1,5 @@
+import { sizingThreads } from '../services/springs/sizing-threads'
+
 /** How long requests may take to finish after a stop was asked for. */
 const FINISH_WITHIN_MS = 10_000
 
@@ -18,7 +20,7 @@ export default defineNitroPlugin((nitro) => {
     })
   }
   nitro.hooks.hook('close', async () => {
-    await Promise.all(workers.map(worker => worker.stop()))
+    await Promise.all([...workers.map(worker => worker.stop()), sizingThreads.close()])
     await closeDatabase()
     log.info('stopped')
   })

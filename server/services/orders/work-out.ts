@@ -33,7 +33,7 @@ export type WorkedOut = {
 export async function workOut(context: ServiceContext, requirement: Requirement, customer: PricedCustomer): Promise<WorkedOut> {
   const [book, wires, plan] = await Promise.all([getCurrentPriceBook(context), listCatalogueWires(context.db), readShopPlan(context.db)])
   const points = workingPointsOf(requirement)
-  const { best, result, materialRule } = findDesign(requirement, { wires, book })
+  const { best, result, materialRule } = await findDesign(requirement, { wires, book })
   const priced = { requirement, customer, book, plan, clock: context }
 
   const design = best ? storedDesignOf(best, result.searched, requirement) : null

@@ -1,7 +1,7 @@
 import type { StoredDesign } from '#shared/schemas/quote'
 import type { Requirement } from '#shared/schemas/enquiry'
 import { getMaterial } from '#shared/spring/materials'
-import type { SizedDesign, SizingResult } from '#shared/spring/sizing/types'
+import type { SizedDesign, SizingCandidate, SizingResult, SpringSizeRequest } from '#shared/spring/sizing/types'
 import type { PricedDesign } from '../../engine/pricing'
 import { handOf } from './requirement'
 
@@ -28,6 +28,11 @@ export function pricedDesignOf(material: StoredDesign['material'], measures: Mea
     freeLengthMm: measures.freeLengthMm, ends: measures.ends, wireLengthMm: measures.wireLengthMm, massG: measures.massG,
     stressReliefMinutes: stressRelief.minutes, stressReliefTempC: stressRelief.temperatureC,
   }
+}
+
+/** What pricing must know of a spring the search asks about; what is formed at its ends follows from the request. */
+export function pricedCandidateOf({ wire, ...measures }: SizingCandidate, request: SpringSizeRequest): PricedDesign {
+  return pricedDesignOf(wire.material, { ...measures, wireDiameterMm: wire.wireDiameterMm, ends: request.kind === 'compression' ? request.ends ?? 'closed-ground' : 'closed' })
 }
 
 /** A spring in a line, for e-mails: `SH wire 2.5 mm, 20 mm across the middle, 60 mm long`. */
