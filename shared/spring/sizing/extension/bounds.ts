@@ -1,12 +1,15 @@
 import { hookLengthMm, hookWireMm } from '../../mechanics/extension/hooks'
 import { greatestInitialStressMpa } from '../../mechanics/extension/initial-tension'
 import type { ExtensionModel } from '../../mechanics/extension/model'
+import { temperatureCheck } from '../../mechanics/checks/place'
+import { wireRangeCheck } from '../../mechanics/checks/wire'
 import { boreCheck } from '../../mechanics/extension/checks/fit'
 import { fatigueCheck } from '../../mechanics/extension/checks/life'
-import { hookBendingCheck, hookTorsionCheck, stressWorkingCheck } from '../../mechanics/extension/checks/stress'
+import { hookBendCheck, hookBendingCheck, hookTorsionCheck, stressWorkingCheck } from '../../mechanics/extension/checks/stress'
 import type { ExtensionCheck } from '../../mechanics/extension/checks/check'
 import { fillExtensionState, type ExtensionState } from '../../mechanics/extension/state'
 import { shearStressMpa } from '../../mechanics/stress'
+import { meanDiameterToleranceMm } from '../../mechanics/tolerances/mean-diameter'
 import { wireMassG } from '../../mechanics/wire-length'
 import { LEAST_BODY_COILS, stiffness, usualFreeLengthMm, type ExtensionTravel } from './geometry'
 
@@ -14,9 +17,10 @@ const SLACK = 1e-9
 
 /*
  * Checks of the greatest load alone rise with the mean diameter: body and hooks at a given load (K(C) C rises for an index
- * above 3.3, for all the factors used), the life with them, and the outside diameter with its stepped tolerance.
+ * above 3.3, for all the factors used), the life with them, and the outside diameter with its stepped tolerance. Wire, heat
+ * and bend radii that are given do not change with it.
  */
-const RISING_CHECKS: readonly ExtensionCheck[] = [stressWorkingCheck, hookBendingCheck, hookTorsionCheck, fatigueCheck, boreCheck]
+const RISING_CHECKS: readonly ExtensionCheck[] = [wireRangeCheck, temperatureCheck, hookBendCheck, stressWorkingCheck, hookBendingCheck, hookTorsionCheck, fatigueCheck, boreCheck]
 
 /** False where diameter D is too large for the greatest load or the bore, whatever the coils. The greatest load is put on the state as its tension. */
 export function carriesAt(model: ExtensionModel, state: ExtensionState, travel: ExtensionTravel, greatestN: number, meanDiameterMm: number): boolean {
@@ -55,7 +59,11 @@ export function couldPass(model: ExtensionModel, travel: ExtensionTravel, { a, b
   if (shortest > L * (1 + SLACK)) return false
   if (shortest > model.maxFreeLengthMm * (1 + SLACK)) return false
   if ((Math.max(fewest, LEAST_BODY_COILS) + 1) * d > model.maxSolidLengthMm * (1 + SLACK)) return false
-  if (!Number.isNaN(model.rodMm) && b - d < model.rodMm * (1 - SLACK)) return false
+  if (!Number.isNaN(model.rodMm)) {
+    // The tolerance rises in steps with D, so it is least at a.
+    const shrink = meanDiameterToleranceMm(a, a / d, model.grade)
+    if (b - d - (Number.isNaN(shrink) ? 0 : shrink) < model.rodMm * (1 - SLACK)) return false
+  }
   const stiff = stiffness(model)
   const low = travel.kind === 'rate' ? travel.rateNPerMm : stiff / (b * b * b * (most + model.hookCoils))
   const high = travel.kind === 'rate' ? travel.rateNPerMm : stiff / (a * a * a * (Math.max(fewest, LEAST_BODY_COILS) + model.hookCoils))
