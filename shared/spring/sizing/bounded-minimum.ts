@@ -25,6 +25,8 @@ export interface BoundedOptions {
   readonly incumbent?: number | undefined
   /** A box whose sides are all shorter than this share of their place counts as a point. */
   readonly leastWidth?: number | undefined
+  /** True where any feasible point will do: the search ends at the first. */
+  readonly anyPoint?: boolean | undefined
 }
 
 const RELATIVE_GAP = 2e-4
@@ -36,7 +38,7 @@ const FIRST_ROOM = 64
  * or is narrower than `leastWidth` (branch and bound, best half first). Deterministic.
  */
 export function minimiseBounded(problem: BoundedProblem, options: BoundedOptions = {}): BoundedMinimum {
-  const { relativeGap = RELATIVE_GAP, incumbent = Infinity, leastWidth = LEAST_WIDTH } = options
+  const { relativeGap = RELATIVE_GAP, incumbent = Infinity, leastWidth = LEAST_WIDTH, anyPoint = false } = options
   const n = problem.low.length
   const stride = 2 * n
   let stack = new Float64Array(FIRST_ROOM * stride)
@@ -83,7 +85,7 @@ export function minimiseBounded(problem: BoundedProblem, options: BoundedOptions
   take()
   push(problem.bound(low, high))
 
-  while (depth > 0) {
+  while (depth > 0 && !(anyPoint && bestPoint !== null)) {
     depth--
     if (!((bounds[depth] as number) < best - relativeGap * Math.abs(best)) && best < Infinity) continue
     boxes++

@@ -29,8 +29,8 @@ export function buildCompressionModel(
   const { method, wireDiameterMm: d, boreMm, rodMm } = wire
   const limit = staticLimit(method, wire.material.family, wire.preset)
   const convention = method === 'en13906' ? 'en' : 'textbook'
-  return {
-    ...wire,
+  // Onto the wire's own object: a copy of so many fields costs more than all the rest, and sizing makes one for each wire.
+  const own: Omit<CompressionModel, keyof WireModel> = {
     allowableStressMpa: limit.fractionOfStrength * wire.tensileStrengthMpa,
     staticLimit: limit,
     ends: conditions.ends ?? 'closed-ground',
@@ -40,4 +40,5 @@ export function buildCompressionModel(
     solidSafe: conditions.solidSafe ?? true,
     guided: (conditions.guided ?? false) || !Number.isNaN(boreMm) || !Number.isNaN(rodMm),
   }
+  return Object.assign(wire, own)
 }

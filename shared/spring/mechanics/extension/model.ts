@@ -31,8 +31,8 @@ export function buildExtensionModel(
   const { family } = wire.material
   const limit = extensionBodyLimit(wire.method, family)
   const hooks = hookLimits(family)
-  return {
-    ...wire,
+  // Onto the wire's own object: a copy of so many fields costs more than all the rest, and sizing makes one for each wire.
+  const own: Omit<ExtensionModel, keyof WireModel> = {
     staticLimit: limit,
     allowableStressMpa: limit.fractionOfStrength * wire.tensileStrengthMpa,
     hookForm: conditions.hook?.form ?? 'full-loop',
@@ -43,4 +43,5 @@ export function buildExtensionModel(
     hookBasis: hooks.basis,
     hookCoils: hookCoils(wire.moduli),
   }
+  return Object.assign(wire, own)
 }

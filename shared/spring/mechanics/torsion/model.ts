@@ -28,8 +28,8 @@ export function buildTorsionModel(
   const limit = torsionLimit(wire.method, wire.material.family, innerFibreFactor)
   const legs = conditions.legs ?? []
   const loadOpens = conditions.loadOpens ?? false
-  return {
-    ...wire,
+  // Onto the wire's own object: a copy of so many fields costs more than all the rest, and sizing makes one for each wire.
+  const own: Omit<TorsionModel, Exclude<keyof WireModel, 'rodMm'>> = {
     rodMm: Number.isNaN(wire.rodMm) ? spring.mandrelMm ?? Number.NaN : wire.rodMm,
     staticLimit: limit,
     allowableStressMpa: limit.fractionOfStrength * wire.tensileStrengthMpa * (loadOpens ? OPENING_SHARE : 1),
@@ -37,4 +37,5 @@ export function buildTorsionModel(
     legsLengthMm: legs.reduce((sum, leg) => sum + leg.lengthMm, 0),
     loadOpens,
   }
+  return Object.assign(wire, own)
 }

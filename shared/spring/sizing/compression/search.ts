@@ -6,17 +6,27 @@ import type { DroppableRequirement, KindSearch, PreparedSearch, WireGoal, WireSp
 import { FIT_PATHS, listCommonRequirements, withoutFit } from '../requirement-paths'
 import { isContinuous, stepsNote, stepsOf } from '../steps'
 import type { CompressionSizeRequest, SizingWire } from '../types'
-import { feasibleDiameters, leastMassFixedG, searchFixedTravel } from './fixed-travel-search'
-import { isFreeRateFeasible, leastMassFreeRateG, searchFreeRate } from './free-rate-search'
+import { leastMassFixedG } from './fixed-mass'
+import { hasFeasibleDiameter } from './fixed-travel'
+import { searchFixedTravel } from './fixed-travel-search'
+import { leastMassFreeRateG } from './free-rate'
+import { isFreeRateFeasible, searchFreeRate } from './free-rate-search'
 import { createSearchState } from './search-state'
-import { searchStepped } from './stepped-search'
-import { lightestSteppedTravel, resolveTravel } from './travel'
+import { hasSteppedSpring, searchStepped } from './stepped-search'
+import { rateTolerance, resolveTravel, withRate } from './travel'
 
 function prepare(request: CompressionSizeRequest): PreparedSearch<'compression'> {
   const travel = resolveTravel(request)
   const steps = stepsOf(request)
   const state = createSearchState(travel)
-  const modelOf = (wire: SizingWire): CompressionModel => buildCompressionModel(wire, request, { stocked: wire.stocked, surroundings: request.surroundings })
+  const models = new Map<SizingWire, CompressionModel>()
+  const modelOf = (wire: SizingWire): CompressionModel => {
+    const known = models.get(wire)
+    if (known) return known
+    const model = buildCompressionModel(wire, request, { stocked: wire.stocked, surroundings: request.surroundings })
+    models.set(wire, model)
+    return model
+  }
   const fill = (model: CompressionModel, spring: WireSpring): CompressionState =>
     fillState(state, model, spring.meanDiameterMm, spring.activeCoils, spring.totalCoils, spring.freeLengthMm)
 
@@ -28,12 +38,15 @@ function prepare(request: CompressionSizeRequest): PreparedSearch<'compression'>
   return {
     search,
     isFeasible: (wire) => {
-      if (travel.kind === 'free-rate') return isFreeRateFeasible(modelOf(wire), state, travel, steps)
-      return isContinuous(steps) ? feasibleDiameters(modelOf(wire), state, travel).length > 0 : search(wire, 'mass').length > 0
+      const model = modelOf(wire)
+      if (travel.kind === 'free-rate') return isFreeRateFeasible(model, state, travel, steps)
+      return isContinuous(steps) ? hasFeasibleDiameter(model, state, travel) : hasSteppedSpring(model, state, travel, steps)
     },
     leastMassG: (wire) => {
-      if (travel.kind === 'free-rate') return leastMassFreeRateG(modelOf(wire), state, travel)
-      return leastMassFixedG(modelOf(wire), state, isContinuous(steps) ? travel : lightestSteppedTravel(travel))
+      const model = modelOf(wire)
+      if (travel.kind === 'free-rate') return leastMassFreeRateG(model, state, travel)
+      // In steps no spring is lighter than with the stiffest rate they leave, which has the fewest coils and the shortest free length.
+      return leastMassFixedG(model, state, isContinuous(steps) ? travel : withRate(travel, travel.rateNPerMm * (1 + rateTolerance(travel))))
     },
     measure: (wire, spring) => {
       const model = modelOf(wire)
