@@ -23,4 +23,6 @@ export const MATERIAL_WORDS: Readonly<Record<MaterialCode, string>> = {
   'ASTM-A232': 'Chrome vanadium: ASTM A232',
   'ASTM-A401': 'Chrome silicon: ASTM A401',
   'ASTM-A313-302': 'Stainless steel: ASTM A313, type 302',
+  'ASTM-B159': 'Phosphor bronze: ASTM B159',
+  'ASTM-B197': 'Beryllium copper: ASTM B197',
 }

@@ -46,5 +46,7 @@ export const MATERIAL_CODES = [
   'ASTM-A232',
   'ASTM-A401',
   'ASTM-A313-302',
+  'ASTM-B159',
+  'ASTM-B197',
 ] as const
 export type MaterialCode = (typeof MATERIAL_CODES)[number]

@@ -80,13 +80,16 @@ function buildPackingLine(job: JobQuantities, { book }: PriceRequest): PriceLine
   }
 }
 
+const FORMED: Readonly<Record<PriceRequest['design']['kind'], string>> = { compression: '', extension: ' with hooks', torsion: ' with legs' }
+
 /** The cost lines of a job in their fixed order; a line that does not apply is left out. Each amount is rounded once. */
 export function buildCostLines(job: JobQuantities, request: PriceRequest): PriceLine[] {
   const { design, options, quantity } = request
   const pieces = countText(job.piecesCoiled, 'piece', 'pieces')
+  const forming = FORMED[design.kind]
   const hourLines: HourLine[] = [
-    { code: 'coiling-set-up', label: 'Coiling, set-up', hours: job.coilingSetUpHours, rateCode: 'hourly.coiling', describe: (hours) => `${hours}, tolerance grade ${options.toleranceGrade}` },
-    { code: 'coiling-run', label: 'Coiling, run', hours: job.coilingRunHours, rateCode: 'hourly.coiling', describe: (hours) => `${pieces}, ${hours}` },
+    { code: 'coiling-set-up', label: `Coiling${forming}, set-up`, hours: job.coilingSetUpHours, rateCode: 'hourly.coiling', describe: (hours) => `${hours}, tolerance grade ${options.toleranceGrade}` },
+    { code: 'coiling-run', label: `Coiling${forming}, run`, hours: job.coilingRunHours, rateCode: 'hourly.coiling', describe: (hours) => `${pieces}, ${hours}` },
   ]
   if (job.stressReliefBatches > 0) {
     hourLines.push({

@@ -1,5 +1,6 @@
 import { wireBandOf, type WireBand } from './wire-band'
 import { isAqlPercent, samplingPlanFor, type AqlPercent } from './sampling'
+import type { SpringKind } from '#shared/spring/codes'
 import { PriceError } from './errors'
 import type { NumberRates } from './rates'
 import type { PricedDesign, PricedWireProduct, PriceOptions } from './types'
@@ -62,6 +63,14 @@ export interface JobRates {
   packingMinutesPerOrder: number
   packingMinutesPerKg: number
   byBand: Readonly<Record<WireBand, BandRates>>
+  /** How a kind differs from plain compression springs. */
+  byKind: Readonly<Record<SpringKind, KindRates>>
+}
+
+interface KindRates {
+  setUpFactor: number
+  /** Share of the pace of plain springs: hooks and legs are formed one after the other. */
+  paceFactor: number
 }
 
 interface BandRates {
@@ -86,6 +95,7 @@ export function readJobRates(quantity: number, options: PriceOptions, rates: Num
     efficiency: rates['coiling.efficiency-percent'] / 100,
     groundPerHour: rates[`grinding.pieces-per-hour.${band}`],
   })
+  const kindRates = (kind: 'extension' | 'torsion'): KindRates => ({ setUpFactor: rates[`coiling.setup-factor.${kind}`], paceFactor: rates[`coiling.pace-factor.${kind}`] })
   return {
     quantity,
     sampleSize,
@@ -102,18 +112,20 @@ export function readJobRates(quantity: number, options: PriceOptions, rates: Num
     packingMinutesPerOrder: rates['packing.minutes-per-order'],
     packingMinutesPerKg: rates['packing.minutes-per-kg'],
     byBand: { fine: bandRates('fine'), light: bandRates('light'), medium: bandRates('medium'), heavy: bandRates('heavy') },
+    byKind: { compression: { setUpFactor: 1, paceFactor: 1 }, extension: kindRates('extension'), torsion: kindRates('torsion') },
   }
 }
 
 /** The part of a design that decides how much a job takes. */
-export type QuantifiedDesign = Pick<PricedDesign, 'wireDiameterMm' | 'wireLengthMm' | 'massG' | 'ends' | 'stressReliefMinutes'>
+export type QuantifiedDesign = Pick<PricedDesign, 'kind' | 'wireDiameterMm' | 'wireLengthMm' | 'massG' | 'ends' | 'stressReliefMinutes'>
 
 /**
- * Everything the order takes for one design and wire. Give a design and wire that were checked. For one wire diameter every
+ * Everything the order takes for one design and wire. Give a design and wire that were checked. For one kind and wire every
  * quantity stays or grows with the length of wire in the spring.
  */
 export function calculateJobQuantities(design: QuantifiedDesign, wire: PricedWireProduct, job: JobRates): JobQuantities {
   const band = job.byBand[wireBandOf(design.wireDiameterMm)]
+  const kind = job.byKind[design.kind]
   const kgPerSpring = design.massG / 1000
   const kgPerMetre = design.massG / design.wireLengthMm
 
@@ -127,7 +139,7 @@ export function calculateJobQuantities(design: QuantifiedDesign, wire: PricedWir
   const isSmallestPurchase = !isStocked && coilKg > wireUsedKg
 
   const feedMinutes = design.wireLengthMm / 1000 / band.feedMPerMinute
-  const piecesPerMinute = Math.min(band.capPerMinute, 1 / (feedMinutes + band.formingMinutes))
+  const piecesPerMinute = Math.min(band.capPerMinute, 1 / (feedMinutes + band.formingMinutes)) * kind.paceFactor
   const batches = design.stressReliefMinutes > 0 ? Math.max(1, wholeUp(job.piecesCoiled * kgPerSpring / job.furnaceBatchKg)) : 0
   const grinds = isGround(design)
   const packedKg = kgPerSpring * job.quantity
@@ -138,7 +150,7 @@ export function calculateJobQuantities(design: QuantifiedDesign, wire: PricedWir
     isSmallestPurchase,
     wireChargedKg: isSmallestPurchase ? coilKg : wireUsedKg,
     piecesCoiled: job.piecesCoiled,
-    coilingSetUpHours: band.setUpHours,
+    coilingSetUpHours: band.setUpHours * kind.setUpFactor,
     coilingRunHours: job.piecesCoiled / piecesPerMinute / 60 / band.efficiency,
     stressReliefBatches: batches,
     stressReliefHours: batches * (design.stressReliefMinutes + job.furnaceHandlingMinutes) / 60,

@@ -1,4 +1,5 @@
 import type { Currency } from '#shared/money'
+import type { SpringKind } from '#shared/spring/codes'
 import type { RateCode } from './rate-codes'
 
 /** One version of the shop's rates. Values are decimal text: money in major units of `currency`, the rest in the rate's own unit. */
@@ -14,15 +15,18 @@ export type EndForm = 'closed-ground' | 'closed' | 'open' | 'open-ground'
 export type ToleranceGrade = 1 | 2 | 3
 export type CertificateKind = 'none' | '2.1' | '2.2' | '3.1'
 
-/** What pricing must know of a compression spring. Lengths mm, mass g of one spring, time min, temperature °C. */
+/** What pricing must know of a spring. Lengths mm, mass g of one spring, time min, temperature °C. */
 export interface PricedDesign {
+  kind: SpringKind
   material: string
   wireDiameterMm: number
   meanDiameterMm: number
   activeCoils: number
+  /** Coils wound: total coils of compression springs, body coils of the others. */
   totalCoils: number
   freeLengthMm: number
-  ends: EndForm
+  /** Of compression springs; hooks and legs are never ground. */
+  ends: EndForm | null
   /** Wire in one spring. */
   wireLengthMm: number
   massG: number

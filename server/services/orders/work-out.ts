@@ -1,6 +1,5 @@
 import type { Requirement } from '#shared/schemas/enquiry'
-import type { ConflictView, GateReason, StoredDesign } from '#shared/schemas/quote'
-import type { LoadPoint } from '#shared/spring/sizing/types'
+import type { ConflictView, GateReason, StoredDesign, WorkingPoint } from '#shared/schemas/quote'
 import { listCatalogueWires, type CatalogueWire } from '../catalogue/list-wires'
 import type { ServiceContext } from '../context'
 import { judgeGate, readGatePolicy } from '../../engine/gate'
@@ -16,7 +15,7 @@ import { readShopPlan, type ShopPlan } from './shop-plan'
 
 /** Everything that follows from a requirement before anything is stored: the spring, its prices and dates, and who must look at it. */
 export type WorkedOut = {
-  book: StoredPriceBook, plan: ShopPlan, points: LoadPoint[],
+  book: StoredPriceBook, plan: ShopPlan, points: WorkingPoint[],
   design: StoredDesign | null, wire: CatalogueWire | null, rungs: WorkedRung[],
   /** Null where a spring was found. */
   conflict: ConflictView | null,
@@ -38,7 +37,7 @@ export async function workOut(context: ServiceContext, requirement: Requirement,
 
   const design = best ? storedDesignOf(best, result.searched, requirement) : null
   const rungs = best && design
-    ? priceDesign({ ...priced, wire: best.wire, design: pricedDesignOf(design.material, { ...design, wireLengthMm: design.evaluation.wireLengthMm, massG: design.evaluation.massG }) })
+    ? priceDesign({ ...priced, wire: best.wire, design: pricedDesignOf(design) })
     : []
   return {
     book, plan, points, design, wire: best?.wire ?? null, rungs, materialRule,
@@ -55,7 +54,8 @@ function judge(requirement: Requirement, design: StoredDesign | null, rungs: rea
     },
     design && {
       material: design.material, wireDiameterMm: design.wireDiameterMm, springIndex: design.evaluation.springIndex,
-      slenderness: design.freeLengthMm / design.meanDiameterMm, checks: design.evaluation.checks,
+      // Only what is pressed can bow.
+      slenderness: design.kind === 'compression' ? design.freeLengthMm / design.meanDiameterMm : 0, checks: design.evaluation.checks,
     },
     rungs,
     readGatePolicy(book),

@@ -5,11 +5,33 @@ import { getMaterial } from '#shared/spring/materials'
 /** What the first note says already, or what is ours to mind and not the customer's. */
 const NOT_FOR_CUSTOMERS: ReadonlySet<string> = new Set(['surroundings', 'stress-solid', 'clearance', 'wire-range', 'index'])
 
+/** How far it may go and how it hurts, by kind. */
+function handlingNotes(design: StoredDesign): string[] {
+  const up = (value: number) => (Math.ceil(value * 10) / 10).toFixed(1)
+  const down = (value: number) => (Math.floor(value * 10) / 10).toFixed(1)
+  switch (design.kind) {
+    case 'compression': return [`Pressed shorter than ${up(design.evaluation.shortestLengthMm)} mm, coils may touch and wear. Do not use it solid.`]
+    case 'extension': {
+      const { greatestLengthMm } = design.evaluation
+      return [
+        greatestLengthMm === null ? 'Nothing in the spring stops it from being pulled too far: give it a stop.' : `Never pull it beyond ${down(greatestLengthMm)} mm inside the hooks: nothing in the spring stops it, so give it a stop.`,
+        'A hook that breaks or slips lets the spring fly: keep people out of its line, or guard it.',
+      ]
+    }
+    case 'torsion': {
+      const { greatestAngleDeg } = design.evaluation
+      return [
+        greatestAngleDeg === null ? 'Give it a stop, so that it is never turned too far.' : `Never turn it more than ${down(greatestAngleDeg)} degrees from free, and only the way that winds it up${design.spring.loadOpens ? ' unless as agreed' : ''}.`,
+        'A wound-up spring whips back when a leg slips: hold it with a tool, and wear eye protection.',
+      ]
+    }
+  }
+}
+
 /** What the customer must mind when using the spring, in sentences. Common practice, no source; limits come from the checks. */
 export function usageNotesOf(design: StoredDesign, request: Pick<Requirement, 'hottestC' | 'couldHurt' | 'surroundings'>): string[] {
-  const mm = (value: number) => (Math.ceil(value * 10) / 10).toFixed(1)
   return [
-    `Pressed shorter than ${mm(design.evaluation.shortestLengthMm)} mm, coils may touch and wear. Do not use it solid.`,
+    ...handlingNotes(design),
     `Calculated for up to ${request.hottestC} °C. ${getMaterial(design.material).corrosionNote}`,
     ...design.evaluation.checks.filter(check => !check.ok && !NOT_FOR_CUSTOMERS.has(check.code) && check.severity !== 'note').map(check => check.message),
     request.couldHurt === 'no'

@@ -15,7 +15,7 @@ export const SizeObjectiveSchema = z.enum(['price', 'mass', 'stress'], { error: 
 export type SizeObjective = z.infer<typeof SizeObjectiveSchema>
 
 /** Wires that one request may name: each costs some search, and the request is answered at once. */
-const MOST_NAMED_WIRES = 1000
+const MOST_NAMED_WIRES = 200
 const MOST_POINTS = { error: 'At most two points.' }
 const LIMIT_ERROR = { error: 'The limit must be from 1 to 20.' }
 

@@ -93,6 +93,16 @@ describe('what changes a price', () => {
     expect(Object.keys(priced.plannedMinutes)).toEqual(['coiling', 'inspection', 'packing'])
   })
 
+  it.each(['extension', 'torsion'] as const)('sets up twice as long and coils at a third of the pace where a %s spring\'s ends are formed, and grinds nothing', (kind) => {
+    const priced = priceQuantity({ ...paperRequest, design: { ...paperDesign, kind, ends: null } })
+    expect(amountOf(priced, 'coiling-set-up')).toBe(2 * 9000)
+    // 0.442708 h of running at 0.33 of the pace are 1.341540 h, at 60.00 an hour.
+    expect(amountOf(priced, 'coiling-run')).toBe(8049)
+    expect(lineOf(priced, 'coiling-run').label).toBe(kind === 'extension' ? 'Coiling with hooks, run' : 'Coiling with legs, run')
+    expect(priced.lines.map(line => line.code)).not.toContain('end-grinding')
+    expect(priced.plannedMinutes.coiling).toEqual({ setUpMinutes: 180, runMinutes: 81 })
+  })
+
   it('charges the smallest purchase of wire that is not stocked, and only then', () => {
     const unstocked = priceQuantity({ ...paperRequest, wireProduct: aWireProduct({ pricePerKg: '3.00', stockKg: '0', smallestPurchaseKg: '25' }) })
     expect(amountOf(unstocked, 'wire')).toBe(7500)

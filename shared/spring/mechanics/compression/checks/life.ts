@@ -1,6 +1,5 @@
-import {
-  FATIGUE_CYCLES, ZIMMERLI_THICKEST_WIRE_MM, goodmanZimmerliFactor, lifeFractionFactor,
-} from '../../fatigue'
+import { FATIGUE_CYCLES, goodmanZimmerliFactor, lifeFractionFactor } from '../../fatigue'
+import { fatigueDataProblem, hasFatigueData } from '../../fatigue-data'
 import { figure } from '../../figure'
 import type { CompressionModel } from '../model'
 import { greatestForceN, leastForceN, statePitchMm, type CompressionState } from '../state'
@@ -41,12 +40,11 @@ export const fatigueCheck: CompressionCheck = {
   applies: (model, state) =>
     model.cycles >= FATIGUE_CYCLES && !Number.isNaN(state.shortestLengthMm) && !Number.isNaN(model.tensileStrengthMpa),
   stops: (model, state) =>
-    model.wireDiameterMm > ZIMMERLI_THICKEST_WIRE_MM || fallsShort(stateFatigueFactor(model, state), 1),
+    !hasFatigueData(model) || fallsShort(stateFatigueFactor(model, state), 1),
   describe: (model, state) => {
     const factor = stateFatigueFactor(model, state)
     const second = stateLifeFractionFactor(model, state)
     const differs = second !== null && (second >= 1) !== (factor >= 1)
-    const tooThick = model.wireDiameterMm > ZIMMERLI_THICKEST_WIRE_MM
     const says = `Fatigue safety factor ${figure(factor)} (Goodman through Zimmerli's data, ${model.shotPeened ? 'shot peened' : 'not peened'}, unlimited life)`
     const other = second === null ? '' : ` By published fractions of tensile strength at ${figure(model.cycles)} strokes it is ${figure(second)}.`
     return finishCheck(
@@ -55,9 +53,7 @@ export const fatigueCheck: CompressionCheck = {
       factor,
       1,
       {
-        stop: tooThick
-          ? `Zimmerli's fatigue data end at ${ZIMMERLI_THICKEST_WIRE_MM} mm wire; a life of ${figure(model.cycles)} strokes cannot be shown for ${model.wireDiameterMm} mm.`
-          : `${says}: under 1, it may break within the life asked for.${other}`,
+        stop: fatigueDataProblem(model) ?? `${says}: under 1, it may break within the life asked for.${other}`,
         caution: `${says}.${other}`,
         pass: `${says}.${other}`,
       },
