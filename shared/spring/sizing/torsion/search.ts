@@ -1,42 +1,40 @@
+import { figure } from '../../mechanics/figure'
 import { bendingStressMpa } from '../../mechanics/torsion/bending'
 import { describeTorsion } from '../../mechanics/torsion/evaluate'
 import { buildTorsionModel, type TorsionModel } from '../../mechanics/torsion/model'
 import {
-  activeCoilsOf, bodyLengthAtMm, createTorsionState, fillTorsionState, greatestMomentNmm, torsionMassG, torsionWireLengthMm, type TorsionState,
+  bodyLengthAtMm, createTorsionState, greatestMomentNmm, torsionMassG, torsionWireLengthMm, type TorsionState,
 } from '../../mechanics/torsion/state'
 import { wireMassG } from '../../mechanics/wire-length'
 import type { DroppableRequirement, KindSearch, PreparedSearch, WireSpring } from '../kind-search'
 import { FIT_PATHS, listCommonRequirements } from '../requirement-paths'
-import { STEP_TOLERANCE, isContinuous, stepsNote, stepsOf } from '../steps'
+import { isContinuous, stepsNote, stepsOf } from '../steps'
 import type { SizingWire, TorsionSizeRequest } from '../types'
-import { resolveTorsionTravel } from './travel'
-import { bodyConstantMm, feasibleTorsionDiameters, searchTorsionWire } from './wire-search'
+import { bodyConstantMm, fillTorsion } from './diameters'
+import { placedAngles, resolveTorsionTravel } from './travel'
+import { searchTorsionWire } from './wire-search'
 
 function prepare(request: TorsionSizeRequest): PreparedSearch<'torsion'> {
   const travel = resolveTorsionTravel(request)
   const steps = stepsOf(request)
-  const { angles: asked } = travel.anglesAt(travel.rateNmmPerDeg)
-  const state = createTorsionState(asked.length > 1 ? asked[0] ?? Number.NaN : Number.NaN, asked[asked.length - 1] ?? Number.NaN)
-  const modelOf = (wire: SizingWire): TorsionModel => buildTorsionModel(wire, request, { stocked: wire.stocked, surroundings: request.surroundings })
-  const fill = (model: TorsionModel, { meanDiameterMm, totalCoils }: WireSpring): { readonly state: TorsionState, readonly angles: readonly number[] } => {
-    fillTorsionState(state, model, meanDiameterMm, totalCoils, activeCoilsOf(model, meanDiameterMm, totalCoils))
-    const { angles } = travel.anglesAt(state.rateNmmPerDeg)
-    state.greatestAngleDeg = angles[angles.length - 1] ?? Number.NaN
-    state.leastAngleDeg = angles.length > 1 ? angles[0] ?? Number.NaN : Number.NaN
-    return { state, angles }
+  const state = createTorsionState(Number.NaN, Number.NaN)
+  const models = new Map<SizingWire, TorsionModel>()
+  const modelOf = (wire: SizingWire): TorsionModel => {
+    const known = models.get(wire)
+    if (known) return known
+    const model = buildTorsionModel(wire, request, { stocked: wire.stocked, surroundings: request.surroundings })
+    models.set(wire, model)
+    return model
   }
+  const fill = (model: TorsionModel, { meanDiameterMm, totalCoils }: WireSpring): TorsionState => fillTorsion(model, state, travel, meanDiameterMm, totalCoils)
+  // Steps may leave the rate stiffer, and the wire so much shorter.
+  const stiffest = travel.rateNmmPerDeg * (isContinuous(steps) ? 1 : 1 + travel.rateTolerance)
   return {
     search: (wire, goal) => searchTorsionWire(modelOf(wire), state, travel, goal, steps),
-    isFeasible: wire => (isContinuous(steps)
-      ? feasibleTorsionDiameters(modelOf(wire), state, travel).length > 0
-      : searchTorsionWire(modelOf(wire), state, travel, 'mass', steps).length > 0),
+    isFeasible: wire => searchTorsionWire(modelOf(wire), state, travel, 'any', steps).length > 0,
     leastMassG: (wire) => {
       const model = modelOf(wire)
-      // The rate may be stiffer by what steps leave, and the wire so much shorter.
-      const [first, second] = travel.points
-      const spread = first && second ? (first.momentNmm + second.momentNmm) / (second.momentNmm - first.momentNmm) : 1
-      const stiffer = isContinuous(steps) ? 1 : 1 + STEP_TOLERANCE * spread
-      const body = Math.max(0, bodyConstantMm(model, { ...travel, rateNmmPerDeg: travel.rateNmmPerDeg * stiffer }))
+      const body = Math.max(0, bodyConstantMm(model, stiffest))
       return wireMassG(model.wireDiameterMm, Math.PI * body + model.legsLengthMm, model.densityKgPerM3) * (1 - 1e-9)
     },
     measure: (wire, spring) => {
@@ -53,9 +51,9 @@ function prepare(request: TorsionSizeRequest): PreparedSearch<'torsion'> {
     },
     describe: (wire, spring) => {
       const model = modelOf(wire)
-      const { angles } = fill(model, spring)
+      const angles = placedAngles(fill(model, spring))
       const evaluation = describeTorsion(model, state, angles)
-      const notes = [freePlaceNote(request, angles), stepsNote(request, 'Moments')].filter(note => note !== null)
+      const notes = [freePlaceNote(request, angles), legAngleNote(model, spring.totalCoils), stepsNote(request, 'Moments')].filter(note => note !== null)
       const { legs, loadOpens, method, temperatureC, duty, shotPeened, preset, toleranceGrade, fit } = request
       return {
         spring: {
@@ -75,6 +73,13 @@ function freePlaceNote({ points }: TorsionSizeRequest, angles: readonly number[]
   if (!first || from === undefined) return null
   const freeAt = first.angleDeg - from
   return Math.abs(freeAt) < 0.05 ? null : `Angles are from free, which lies at ${freeAt.toFixed(1)} degrees of those that were asked.`
+}
+
+// The angle between the legs is no part of a request, so the coils are chosen freely and it follows from them.
+function legAngleNote(model: TorsionModel, bodyCoils: number): string | null {
+  if (model.legs.length < 2) return null
+  const part = Math.round((bodyCoils - Math.floor(bodyCoils)) * 3600) / 10
+  return `No angle between the legs was asked for: ${figure(bodyCoils)} coils put the second leg ${figure(part)} degrees of a turn past the first, unloaded.`
 }
 
 function listRequirements(request: TorsionSizeRequest): DroppableRequirement<'torsion'>[] {

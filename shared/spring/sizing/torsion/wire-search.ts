@@ -1,166 +1,147 @@
 import { passesTorsionStopChecks } from '../../mechanics/torsion/checks'
-import type { TorsionCheck } from '../../mechanics/torsion/checks/check'
-import { boreCheck, freeLengthCheck, leastInnerDiameterMm, rodCheck, solidLengthCheck } from '../../mechanics/torsion/checks/fit'
 import { fatigueCheck, stressWorkingCheck } from '../../mechanics/torsion/checks/stress'
-import { coilsCheck, orderCheck } from '../../mechanics/torsion/checks/travel'
-import { legCoils, momentRateNmmPerDeg } from '../../mechanics/torsion/bending'
+import { LEAST_BODY_COILS } from '../../mechanics/torsion/checks/travel'
+import { legCoils } from '../../mechanics/torsion/bending'
 import type { TorsionModel } from '../../mechanics/torsion/model'
-import { activeCoilsOf, fillTorsionState, torsionMassG, type TorsionState } from '../../mechanics/torsion/state'
-import { INDEX_STEPS, MEAN_DIAMETER_STEPS_MM } from '../../mechanics/tolerances/mean-diameter'
+import { fillTorsionState, greatestMomentNmm, torsionMassG, type TorsionState } from '../../mechanics/torsion/state'
 import type { WireGoal, WireSpring } from '../kind-search'
-import { greatestThatHolds, leastThatHolds } from '../numeric-search'
-import { LEAST_INDEX, MOST_INDEX, STEP_TOLERANCE, forEachStep, isContinuous, stepped, type Steps } from '../steps'
+import { leastThatHolds } from '../numeric-search'
+import { LEAST_INDEX, MOST_INDEX, STEP_TOLERANCE, isContinuous, stepped, type Steps } from '../steps'
+import { activeConstantMm, allHold, bodyConstantMm, feasibleTorsionDiameters, fillTorsion } from './diameters'
 import type { TorsionTravel } from './travel'
 
-/*
- * The rate fixes D times the active coils, and the legs count as (l1 + l2)/(3 pi D): so D times the body coils is a constant K
- * of the wire, and with it the length of wire pi K + l1 + l2. Mass does not depend on D, and the bending stress before its
- * factor does not either. The body is wound up by the same share of the angle whatever D.
- *
- * So a wire's best spring is any that passes, and the tie is broken by ease: the index nearest to EASIEST_INDEX, the smaller of
- * two as near. Checks: the factor of the inner fibre falls with D, the body gets shorter with D (few D fail: order, stress,
- * life, lengths); coils fall and the outside grows with D (many fail: coils, bore, opened or not). D K/(K + turns D), the
- * mean diameter wound up, rises with D; the rod alone has gaps, where the diameter tolerance steps up.
+/**
+ * Index that coils easiest (6 to 12 are usual; common practice, no source). All springs of a wire that have the asked rate are
+ * equal in mass and in bending stress (see diameters.ts), so the tie is broken by the index nearest to this one, and of two
+ * as near by the smaller diameter.
  */
-
-/** Index that coils easiest (6 to 12 are usual; common practice, no source). */
 export const EASIEST_INDEX = 8
 
-const LEAST_DIAMETER_CHECKS: readonly TorsionCheck[] = [orderCheck, stressWorkingCheck, fatigueCheck, freeLengthCheck, solidLengthCheck]
-const MOST_DIAMETER_CHECKS: readonly TorsionCheck[] = [coilsCheck, boreCheck]
-
-/** D times the body coils for the asked rate, mm. */
-export function bodyConstantMm(model: TorsionModel, travel: TorsionTravel): number {
-  const active = momentRateNmmPerDeg(model.method, model.youngsModulusMpa, model.wireDiameterMm, 1, 1) / travel.rateNmmPerDeg
-  return active - legCoils(model.legsLengthMm, 1)
-}
-
-function fillAtDiameter(model: TorsionModel, state: TorsionState, bodyConstant: number, D: number): TorsionState {
-  const body = bodyConstant / D
-  return fillTorsionState(state, model, D, body, activeCoilsOf(model, D, body))
-}
-
-function allHold(checks: readonly TorsionCheck[], model: TorsionModel, state: TorsionState): boolean {
-  for (const check of checks) {
-    if (check.applies(model, state) && check.stops(model, state)) return false
-  }
-  return true
-}
-
-interface Interval {
-  readonly lowMm: number
-  readonly highMm: number
-}
-
-/** Mean diameters at which the wire gives a spring that passes every stop check; empty where there is none. */
-export function feasibleTorsionDiameters(model: TorsionModel, state: TorsionState, travel: TorsionTravel): Interval[] {
-  const d = model.wireDiameterMm
-  const K = bodyConstantMm(model, travel)
-  if (!(K > 0)) return []
-  const at = (D: number) => fillAtDiameter(model, state, K, D)
-  let low = LEAST_INDEX * d
-  let high = MOST_INDEX * d
-  low = leastThatHolds(D => allHold(LEAST_DIAMETER_CHECKS, model, at(D)), low, high)
-  if (Number.isNaN(low)) return []
-  high = greatestThatHolds(D => allHold(MOST_DIAMETER_CHECKS, model, at(D)), low, high)
-  if (Number.isNaN(high)) return []
-  const pieces = Number.isNaN(model.rodMm) ? [{ lowMm: low, highMm: high }] : piecesOverRod(model, state, K, low, high)
-  // What is left, wire and heat, does not depend on D.
-  return pieces.filter(({ highMm }) => passesTorsionStopChecks(model, at(highMm)))
-}
-
-// Between two steps of the tolerance table the inside diameter rises with D, so the rod asks for one least diameter there.
-function piecesOverRod(model: TorsionModel, state: TorsionState, K: number, low: number, high: number): Interval[] {
-  const steps = [...MEAN_DIAMETER_STEPS_MM, ...INDEX_STEPS.map(w => w * model.wireDiameterMm)].filter(D => D > low && D < high).sort((a, b) => a - b)
-  const pieces: Interval[] = []
-  let from = low
-  for (const to of [...steps, high]) {
-    // The tolerance at a step is still that of the row below it; just above a step it is the next row's.
-    const start = from === low ? from : from * (1 + 1e-12)
-    const least = leastThatHolds(D => !rodCheck.stops(model, fillAtDiameter(model, state, K, D)), start, to)
-    if (!Number.isNaN(least)) pieces.push({ lowMm: least, highMm: to })
-    from = to
-  }
-  return pieces
-}
+/** `any`: the first that passes, whichever it is. */
+export type TorsionGoal = WireGoal | 'any'
 
 const ease = (d: number, D: number) => Math.abs(D / d - EASIEST_INDEX)
-
-/** The place of the intervals with the easiest index. */
-function easiest(d: number, intervals: readonly Interval[]): number | null {
-  let best: number | null = null
-  for (const { lowMm, highMm } of intervals) {
-    const D = Math.min(highMm, Math.max(lowMm, EASIEST_INDEX * d))
-    if (best === null || ease(d, D) < ease(d, best)) best = D
-  }
-  return best
-}
-
-/** Springs of the wire for the goal; every one passes every stop check. Mass and stress have the same best spring. */
-export function searchTorsionWire(model: TorsionModel, state: TorsionState, travel: TorsionTravel, goal: WireGoal, steps: Steps): WireSpring[] {
-  const d = model.wireDiameterMm
-  const K = bodyConstantMm(model, travel)
-  if (isContinuous(steps)) {
-    const D = easiest(d, feasibleTorsionDiameters(model, state, travel))
-    return D === null ? [] : [springOf(fillAtDiameter(model, state, K, D))]
-  }
-  if (!(K > 0)) return []
-  const every: WireSpring[] = []
-  let best: WireSpring | null = null
-  let leastValue = Infinity
-  let leastEase = Infinity
-  const take = (D: number, body: number) => {
-    if (!fillStepped(model, state, travel, D, body)) return
-    const spring = springOf(state)
-    if (goal === 'every') {
-      every.push(spring)
-      return
-    }
-    // In steps the wire differs a little from spring to spring; equal to nine figures counts as a tie.
-    const value = goal === 'mass' ? torsionMassG(model, state) : state.rateNmmPerDeg * state.greatestAngleDeg
-    const isLess = value < leastValue * (1 - 1e-9)
-    if (isLess || (value <= leastValue * (1 + 1e-9) && ease(d, D) < leastEase)) {
-      leastValue = Math.min(value, leastValue)
-      leastEase = ease(d, D)
-      best = spring
-    }
-  }
-  forEachStepped(d, K, steps, take)
-  return best ? [best] : every
-}
-
-function forEachStepped(d: number, K: number, { coilStep, diameterStepMm }: Steps, take: (D: number, body: number) => void): void {
-  const low = LEAST_INDEX * d
-  const high = MOST_INDEX * d
-  if (Number.isNaN(diameterStepMm)) {
-    forEachStep(K / high, K / low, coilStep, body => take(K / body, body))
-    return
-  }
-  forEachStep(low, high, diameterStepMm, (D) => {
-    if (Number.isNaN(coilStep)) {
-      take(D, K / D)
-      return
-    }
-    const below = Math.floor(K / D / coilStep + 1e-9)
-    take(D, stepped(below, coilStep))
-    take(D, stepped(below + 1, coilStep))
-  })
-}
-
-/** Fills the state with a stepped spring, the moments' error shared; true where it is within the tolerance and passes. */
-function fillStepped(model: TorsionModel, state: TorsionState, travel: TorsionTravel, D: number, body: number): boolean {
-  if (!(body > 0)) return false
-  fillTorsionState(state, model, D, body, activeCoilsOf(model, D, body))
-  const { angles, error } = travel.anglesAt(state.rateNmmPerDeg)
-  if (error > STEP_TOLERANCE) return false
-  state.greatestAngleDeg = angles[angles.length - 1] ?? Number.NaN
-  state.leastAngleDeg = angles.length > 1 ? angles[0] ?? Number.NaN : Number.NaN
-  return passesTorsionStopChecks(model, state)
-}
 
 const springOf = (state: TorsionState): WireSpring => ({
   meanDiameterMm: state.meanDiameterMm, activeCoils: state.activeCoils, totalCoils: state.bodyCoils, freeLengthMm: 0,
 })
 
-/** Inside diameter at its least, for tests of the rod's gaps. */
-export { leastInnerDiameterMm }
+/** Springs of the wire for the goal; every one passes every stop check. In steps with the goal `every`, all there are. */
+export function searchTorsionWire(model: TorsionModel, state: TorsionState, travel: TorsionTravel, goal: TorsionGoal, steps: Steps): WireSpring[] {
+  const K = bodyConstantMm(model, travel.rateNmmPerDeg)
+  if (isContinuous(steps)) {
+    const D = easiestDiameter(model, state, travel, K)
+    return Number.isNaN(D) ? [] : [springOf(fillTorsion(model, state, travel, D, K / D))]
+  }
+  const found = new Collector(model, state, travel, goal)
+  if (Number.isNaN(steps.coilStep) || Number.isNaN(steps.diameterStepMm)) searchOneStepped(found, steps, K)
+  else searchBothStepped(found, steps)
+  return found.springs
+}
+
+// Most wires pass, if at all, at the easiest index; only else are the ends of the range looked for.
+function easiestDiameter(model: TorsionModel, state: TorsionState, travel: TorsionTravel, K: number): number {
+  const d = model.wireDiameterMm
+  const easy = EASIEST_INDEX * d
+  if (!(K > 0)) return Number.NaN
+  if (passesTorsionStopChecks(model, fillTorsion(model, state, travel, easy, K / easy))) return easy
+  let best = Number.NaN
+  for (const { lowMm, highMm } of feasibleTorsionDiameters(model, state, travel)) {
+    const D = Math.min(highMm, Math.max(lowMm, easy))
+    if (Number.isNaN(best) || ease(d, D) < ease(d, best)) best = D
+  }
+  return best
+}
+
+/** Keeps the best of the springs it is shown, or all of them. */
+class Collector {
+  readonly springs: WireSpring[] = []
+  private leastValue = Infinity
+  private leastEase = Infinity
+
+  constructor(readonly model: TorsionModel, readonly state: TorsionState, readonly travel: TorsionTravel, private readonly goal: TorsionGoal) {}
+
+  /** True where the search may end. */
+  take(D: number, bodyCoils: number): boolean {
+    if (!(bodyCoils > 0)) return false
+    const { model, state, goal } = this
+    fillTorsion(model, state, this.travel, D, bodyCoils)
+    if (goal === 'every' || goal === 'any') {
+      if (!passesTorsionStopChecks(model, state)) return false
+      this.springs.push(springOf(state))
+      return goal === 'any'
+    }
+    const value = goal === 'mass' ? torsionMassG(model, state) : greatestMomentNmm(state)
+    const easy = ease(model.wireDiameterMm, D)
+    // Values equal to nine figures are a tie: rounding must not decide.
+    const isLess = value < this.leastValue * (1 - 1e-9)
+    if (!isLess && !(value <= this.leastValue * (1 + 1e-9) && easy < this.leastEase)) return false
+    if (!passesTorsionStopChecks(model, state)) return false
+    this.leastValue = isLess ? value : Math.min(value, this.leastValue)
+    this.leastEase = easy
+    this.springs[0] = springOf(state)
+    return false
+  }
+}
+
+const EDGE = 1e-9
+const STRESS_FAILS = [stressWorkingCheck, fatigueCheck] as const
+
+// With one of the two in steps the other makes the rate exact, so only steps within the feasible diameters can pass.
+function searchOneStepped(found: Collector, { coilStep, diameterStepMm }: Steps, K: number): void {
+  for (const { lowMm, highMm } of feasibleTorsionDiameters(found.model, found.state, found.travel)) {
+    const isCoils = Number.isNaN(diameterStepMm)
+    const step = isCoils ? coilStep : diameterStepMm
+    const from = isCoils ? K / highMm : lowMm
+    const to = isCoils ? K / lowMm : highMm
+    const last = (to / step) * (1 + EDGE)
+    for (let i = Math.ceil((from / step) * (1 - EDGE)); i <= last; i++) {
+      const value = stepped(i, step)
+      if (isCoils ? found.take(K / value, value) : found.take(value, K / value)) return
+    }
+  }
+}
+
+/** With both in steps every pair is looked at whose rate is within the tolerance: active coils A/(D (1 + t)) to A/(D (1 - t)). */
+function searchBothStepped(found: Collector, { coilStep, diameterStepMm }: Steps): void {
+  const { model, travel } = found
+  const A = activeConstantMm(model, travel.rateNmmPerDeg)
+  const legs = legCoils(model.legsLengthMm, 1)
+  const most = A / (1 - travel.rateTolerance) - legs
+  const fewest = A / (1 + travel.rateTolerance) - legs
+  const { low, high } = steppedRange(found, { A, most, fewest })
+  for (let i = Math.ceil((low / diameterStepMm) * (1 - EDGE)); i <= (high / diameterStepMm) * (1 + EDGE); i++) {
+    const D = stepped(i, diameterStepMm)
+    const last = (most / D / coilStep) * (1 + EDGE)
+    for (let j = Math.max(1, Math.ceil((fewest / D / coilStep) * (1 - EDGE))); j <= last; j++) {
+      if (found.take(D, stepped(j, coilStep))) return
+    }
+  }
+}
+
+/**
+ * Mean diameters outside which no stepped spring passes (`low` NaN where none does anywhere): those at which the bare wire does
+ * not go over the rod or into the bore; the most coils are fewer than asked; the fewest are longer than the body may be; or
+ * the stress or the life fails even with the least greatest and the greatest least moment that steps allow, since their
+ * factors fall with the index and the life with a wider swing.
+ */
+function steppedRange({ model, state, travel }: Collector, { A, most, fewest }: { readonly A: number, readonly most: number, readonly fewest: number }): { low: number, high: number } {
+  const d = model.wireDiameterMm
+  const rod = Number.isNaN(model.rodMm) ? 0 : model.rodMm + d
+  const bore = Number.isNaN(model.boreMm) ? Infinity : model.boreMm - d
+  const longest = Math.min(Number.isNaN(model.maxFreeLengthMm) ? Infinity : model.maxFreeLengthMm, Number.isNaN(model.maxSolidLengthMm) ? Infinity : model.maxSolidLengthMm)
+  const mostRoom = longest / d - 1
+  const from = Math.max(LEAST_INDEX * d, rod, mostRoom > 0 ? fewest / mostRoom : Infinity)
+  const high = Math.min(MOST_INDEX * d, bore, most / LEAST_BODY_COILS)
+  if (!(from <= high)) return { low: Number.NaN, high }
+  const first = travel.points[0]?.momentNmm ?? 0
+  const last = travel.points[travel.points.length - 1]?.momentNmm ?? 0
+  const leastGreatest = (last * (1 - STEP_TOLERANCE)) / travel.rateNmmPerDeg
+  const low = leastThatHolds((D) => {
+    fillTorsionState(state, model, D, A / D, A / D)
+    state.greatestAngleDeg = leastGreatest
+    state.leastAngleDeg = travel.points.length > 1 ? Math.min((first * (1 + STEP_TOLERANCE)) / travel.rateNmmPerDeg, leastGreatest) : Number.NaN
+    return allHold(STRESS_FAILS, model, state)
+  }, from, high)
+  return { low, high }
+}

@@ -25,7 +25,7 @@ export const orderCheck: TorsionCheck = {
 }
 
 // Common practice, no source: fewer body coils do not guide themselves.
-const LEAST_BODY_COILS = 3
+export const LEAST_BODY_COILS = 3
 const EASY_BODY_COILS = 4
 
 export const coilsCheck: TorsionCheck = {
