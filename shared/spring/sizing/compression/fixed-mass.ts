@@ -20,22 +20,25 @@ import type { FixedTravel } from './travel'
 const NEWTON_STEPS = 8
 const ENOUGH = 1e-12
 
-function valleyMm(c: number, K: number, endCoils: number): number {
-  if (endCoils <= 0) return Infinity
+/** The place of the valley between two diameters, mm. */
+function valleyMm(c: number, K: number, endCoils: number, low: number, high: number): number {
   const turn = Math.PI * c
-  const target = Math.log((2 * turn * c) / endCoils)
-  let x = Math.log((2 * c) / endCoils) / 3
+  const target = (2 * turn * c) / endCoils
+  const side = (D: number) => D * D * D * Math.sqrt(turn * turn + K * K * D * D * D * D)
+  // Without end coils, or with few, the wire only gets shorter.
+  if (endCoils <= 0 || side(high) <= target) return high
+  if (side(low) >= target) return low
+  const aim = Math.log(target)
+  let x = Math.log(high)
   for (let i = 0; i < NEWTON_STEPS; i++) {
     const rise = K * K * Math.exp(4 * x)
     const square = turn * turn + rise
-    const step = (3 * x + 0.5 * Math.log(square) - target) / (3 + (2 * rise) / square)
+    const step = (3 * x + 0.5 * Math.log(square) - aim) / (3 + (2 * rise) / square)
     x -= step
     if (Math.abs(step) < ENOUGH) break
   }
-  return Math.exp(x)
+  return Math.min(high, Math.max(low, Math.exp(x)))
 }
-
-const clamp = (x: number, low: number, high: number) => Math.min(high, Math.max(low, x))
 
 // K = n p at a diameter.
 function activeLengthMm(model: CompressionModel, state: CompressionState, travel: FixedTravel, D: number): number {
@@ -46,7 +49,7 @@ function activeLengthMm(model: CompressionModel, state: CompressionState, travel
 // The valley of the mass with K as it is at `high`.
 function valleyBetween(model: CompressionModel, state: CompressionState, travel: FixedTravel, low: number, high: number): number {
   const K = activeLengthMm(model, state, travel, high)
-  return clamp(valleyMm(state.activeCoils * high * high * high, K, state.totalCoils - state.activeCoils), low, high)
+  return valleyMm(state.activeCoils * high * high * high, K, state.totalCoils - state.activeCoils, low, high)
 }
 
 const massAt = (model: CompressionModel, state: CompressionState, travel: FixedTravel, D: number): number =>

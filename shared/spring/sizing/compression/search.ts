@@ -54,7 +54,7 @@ function prepare(request: CompressionSizeRequest): PreparedSearch<'compression'>
       // Uncorrected, at the greatest asked load, or when solid where none is asked.
       const force = travel.points.length > 0 ? greatestForceN(state) : state.solidForceN
       return {
-        ...spring,
+        meanDiameterMm: spring.meanDiameterMm, activeCoils: spring.activeCoils, totalCoils: spring.totalCoils, freeLengthMm: spring.freeLengthMm,
         wireLengthMm: stateWireLengthMm(model, state),
         massG: stateMassG(model, state),
         outerDiameterMm: spring.meanDiameterMm + model.wireDiameterMm,
