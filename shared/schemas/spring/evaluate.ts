@@ -204,6 +204,7 @@ export const EvaluateResponseSchema = z.discriminatedUnion('kind', [
     kind: z.literal('torsion'),
     ...woundEvaluation,
     rateNmmPerDeg: number,
+    rateNmmPerTurn: number,
     points: z.array(z.object({
       angleDeg: number,
       momentNmm: number,

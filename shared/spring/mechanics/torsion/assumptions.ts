@@ -1,7 +1,9 @@
+import { figure } from '../figure'
 import { ZIMMERLI_THICKEST_WIRE_MM } from '../fatigue'
 import { meanDiameterToleranceMm } from '../tolerances/mean-diameter'
+import { storedEnergyJ } from './bending'
 import type { TorsionModel } from './model'
-import type { TorsionState } from './state'
+import { greatestMomentNmm, type TorsionState } from './state'
 
 /** What the result takes for granted, in sentences. */
 export function describeTorsionAssumptions(model: TorsionModel, state: TorsionState): string[] {
@@ -16,7 +18,15 @@ export function describeTorsionAssumptions(model: TorsionModel, state: TorsionSt
     'Wound up, the body shrinks to D Nb/(Nb + turns) and grows longer by a wire for each turn.',
     `Tensile strength is the least of ${model.material.standard} (${model.material.strength.source}), or the value given.`,
     'A torsion spring wants a rod to guide it and a stop that ends its travel.',
+    model.loadOpens
+      ? 'Stress left by coiling is not counted; the load opens the coil, so it adds to the stress of the load at the inner fibre.'
+      : 'Stress left by coiling is not counted: it helps where the load winds the coil up, and heat only sets the angle of the legs (Machinery\'s Handbook).',
   ]
+  if (model.legs.some(({ form }) => form === 'straight')) said.push('Straight legs are counted as tangential ones of the same length: nothing is published for them here.')
+  if (state.greatestAngleDeg > 0) {
+    const energy = storedEnergyJ(greatestMomentNmm(state), state.greatestAngleDeg)
+    said.push(`At the greatest angle it holds ${figure(energy)} J and lets go of it at once: hold both legs and guard the eyes when loading or testing (common practice, no source).`)
+  }
   if (model.preset) said.push('Presetting is not counted.')
   if (Number.isNaN(model.temperatureC)) said.push('Room temperature.')
   if (Number.isNaN(meanDiameterToleranceMm(state.meanDiameterMm, state.springIndex, model.grade))) said.push('No diameter tolerances are published for this size: none are given.')

@@ -41,7 +41,15 @@ export function legCoils(legsLengthMm: number, meanDiameterMm: number): number {
   return legsLengthMm / (3 * Math.PI * meanDiameterMm)
 }
 
-/** Mean diameter of the body after `turns` more (wound up) or less (opened), mm: D Nb/(Nb + turns) (Jindal ch. 8; Shigley). */
+/**
+ * Mean diameter of the body after `turns` more (wound up) or less (opened), mm: D Nb/(Nb + turns) (Jindal ch. 8; Shigley).
+ * Unturned where no coil would be left: the check of order stops such a spring.
+ */
 export function turnedMeanDiameterMm(meanDiameterMm: number, bodyCoils: number, turns: number): number {
-  return (meanDiameterMm * bodyCoils) / (bodyCoils + turns)
+  return bodyCoils + turns > 0 ? (meanDiameterMm * bodyCoils) / (bodyCoils + turns) : meanDiameterMm
+}
+
+/** Work stored at a moment, J: half of moment times angle. */
+export function storedEnergyJ(momentNmm: number, angleDeg: number): number {
+  return (momentNmm * angleDeg * Math.PI) / 360_000
 }

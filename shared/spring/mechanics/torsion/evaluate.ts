@@ -56,6 +56,7 @@ export function describeTorsion(model: TorsionModel, state: TorsionState, angles
     springIndex: state.springIndex,
     stressCorrectionFactor: factor,
     rateNmmPerDeg: state.rateNmmPerDeg,
+    rateNmmPerTurn: 360 * state.rateNmmPerDeg,
     outerDiameterMm: D + d,
     innerDiameterMm: D - d,
     wireLengthMm: torsionWireLengthMm(model, state),

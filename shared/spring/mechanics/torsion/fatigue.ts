@@ -14,16 +14,16 @@ export function torsionFatigueFactor(model: TorsionModel, state: TorsionState): 
   return bendingGoodmanFactor((high - low) / 2, (high + low) / 2, model.tensileStrengthMpa)
 }
 
-// Greatest bending stress from zero over tensile strength, A228 (handbook values, from memory).
+// Greatest bending stress from zero over tensile strength, music wire A228 (handbook values, from memory).
 const AT_1E5 = { unpeened: 0.53, peened: 0.62 } as const
 const AT_1E6 = { unpeened: 0.5, peened: 0.6 } as const
 
 /**
- * Factor of the published fractions, stress from zero to the greatest moment; null outside 1e5 to 1e6 strokes, where none are
- * published. A least moment above nought is not counted, which is safe.
+ * Factor of the published fractions, stress from zero to the greatest moment; null outside 1e5 to 1e6 strokes, and for
+ * other than cold-drawn carbon wire, where none are published. A least moment above nought is not counted, which is safe.
  */
 export function torsionLifeFractionFactor(model: TorsionModel, state: TorsionState): number | null {
-  if (model.cycles < 1e5 || model.cycles > 1e6) return null
+  if (model.cycles < 1e5 || model.cycles > 1e6 || model.material.family !== 'cold-drawn-carbon') return null
   const way = model.shotPeened ? 'peened' : 'unpeened'
   const fraction = AT_1E5[way] + (AT_1E6[way] - AT_1E5[way]) * (Math.log10(model.cycles) - 5)
   return (fraction * model.tensileStrengthMpa) / correctedBendingMpa(model, state, greatestMomentNmm(state))

@@ -1,4 +1,4 @@
-import type { MaterialCode } from '../../codes'
+import type { CoilHand, MaterialCode } from '../../codes'
 import { torsionLimit, type StaticLimit } from '../static-limits'
 import type { MaterialValues } from '../types'
 import { buildWireModel, type EvaluationContext, type WireModel } from '../wire-model'
@@ -13,6 +13,8 @@ export interface TorsionModel extends WireModel {
   readonly legs: readonly Leg[]
   readonly legsLengthMm: number
   readonly loadOpens: boolean
+  /** Null where either will do. */
+  readonly hand: CoilHand | null
 }
 
 /** Bending stress allowed where the load opens the coil, as a share of that where it winds up (public page of a spring stockist). */
@@ -20,7 +22,13 @@ export const OPENING_SHARE = 0.8
 
 /** Resolves defaults and material values once for a wire. `mandrelMm` is the rod where `fit` names none. */
 export function buildTorsionModel(
-  spring: { readonly material: MaterialCode, readonly wireDiameterMm: number, readonly materialValues?: MaterialValues | undefined, readonly mandrelMm?: number | undefined },
+  spring: {
+    readonly material: MaterialCode
+    readonly wireDiameterMm: number
+    readonly materialValues?: MaterialValues | undefined
+    readonly mandrelMm?: number | undefined
+    readonly hand?: CoilHand | undefined
+  },
   conditions: TorsionConditions,
   context: EvaluationContext = {},
 ): TorsionModel {
@@ -36,6 +44,7 @@ export function buildTorsionModel(
     legs,
     legsLengthMm: legs.reduce((sum, leg) => sum + leg.lengthMm, 0),
     loadOpens,
+    hand: spring.hand ?? null,
   }
   return Object.assign(wire, own)
 }

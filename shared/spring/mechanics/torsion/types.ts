@@ -47,6 +47,7 @@ export interface TorsionPointResult {
 export interface TorsionEvaluation extends WoundEvaluation {
   readonly kind: 'torsion'
   readonly rateNmmPerDeg: number
+  readonly rateNmmPerTurn: number
   readonly points: readonly TorsionPointResult[]
   readonly activeCoils: number
   readonly bodyCoils: number

@@ -33,7 +33,7 @@ export const fatigueCheck: TorsionCheck = {
     const second = torsionLifeFractionFactor(model, state)
     const differs = second !== null && (second >= 1) !== (factor >= 1)
     const says = `Fatigue safety factor ${figure(factor)} in bending (Goodman through Zimmerli's data over 0.577, not peened, unlimited life)`
-    const other = second === null ? '' : ` By published fractions of tensile strength at ${figure(model.cycles)} strokes it is ${figure(second)}.`
+    const other = second === null ? '' : ` By the fractions of tensile strength published for music wire at ${figure(model.cycles)} strokes it is ${figure(second)}.`
     return finishCheck('fatigue', { stop: fatigueCheck.stops(model, state), caution: factor < FATIGUE_CAUTION || differs }, factor, 1, {
       stop: fatigueDataProblem(model) ?? `${says}: under 1, it may break within the life asked for.${other}`, caution: `${says}.${other}`, pass: `${says}.${other}`,
     })

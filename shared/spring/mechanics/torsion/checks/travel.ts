@@ -1,5 +1,6 @@
 import { fallsShort, finishCheck } from '../../checks/check'
 import { figure } from '../../figure'
+import type { TorsionModel } from '../model'
 import type { TorsionState } from '../state'
 import { hasPoint, type TorsionCheck } from './check'
 
@@ -42,6 +43,13 @@ export const coilsCheck: TorsionCheck = {
   },
 }
 
+/** How the load must turn it, seen along the axis; from the geometry of a helix: a right-hand coil goes away clockwise. */
+function turnWords({ hand, loadOpens }: TorsionModel): string {
+  if (hand === null) return ''
+  const clockwise = (hand === 'right') !== loadOpens
+  return ` The coil is ${hand}-hand: seen from its fixed end, the other leg is turned ${clockwise ? 'clockwise' : 'anticlockwise'}.`
+}
+
 /** Which way the load turns it. */
 export const windingCheck: TorsionCheck = {
   code: 'winding',
@@ -49,7 +57,7 @@ export const windingCheck: TorsionCheck = {
   stops: () => false,
   describe: model => finishCheck('winding', { stop: false, caution: model.loadOpens }, Number.NaN, Number.NaN, {
     stop: '',
-    caution: 'The load opens the coil: a fifth less stress is allowed (a stockist\'s published practice); wind it the other way so that the load winds it up.',
-    pass: 'The load winds the coil up, as it should.',
+    caution: `The load opens the coil: a fifth less stress is allowed (a stockist's published practice); wind it the other way so that the load winds it up.${turnWords(model)}`,
+    pass: `The load winds the coil up, as it should.${turnWords(model)}`,
   }, 'caution'),
 }
