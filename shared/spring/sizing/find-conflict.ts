@@ -1,6 +1,6 @@
 import type { SpringKind, ToleranceGrade } from '../codes'
 import { getMaterial } from '../materials'
-import { meanDiameterToleranceMm } from '../mechanics/tolerances/mean-diameter'
+import { INDEX_STEPS, MEAN_DIAMETER_STEPS_MM, meanDiameterToleranceMm } from '../mechanics/tolerances/mean-diameter'
 import { checkSizeRequirement } from './check-requirement'
 import type { DroppableRequirement } from './kind-search'
 import { searchOf } from './kinds'
@@ -11,8 +11,7 @@ import type { SizeRequestOf, SizingChange, SizingConflict, SizingWire, SpringSiz
 
 /**
  * Why no wire gives a spring: a smallest set of requirements that cannot hold together, and for each single number the
- * least change found that admits a spring, proven by sizing again. The search is in continuous coils and diameters: steps
- * are the shop's, not the customer's, and only move a limit by a little; the changed request is sized in steps.
+ * least change found that admits a spring, proven by sizing again.
  */
 export function findConflict<W extends SizingWire>(request: SpringSizeRequest, wires: readonly W[], options: SearchOptions<W> = {}): SizingConflict<W> {
   if (wires.length === 0) return { requirements: ['materials'], changes: [] }
@@ -27,10 +26,13 @@ function smallestClash(request: SpringSizeRequest, wires: readonly SizingWire[])
   }
 }
 
-/** Sets are tried by size, so the first that clashes is a smallest; beyond this size a set is thinned out one by one instead. */
-const MOST_TRIED = 3
-
+/**
+ * First what clashes whatever the spring must do. Then one requirement after another is left out while the rest still clash,
+ * which leaves a set of which every part is needed; and every smaller set is tried, by size, so what is named is a smallest.
+ */
 function smallestClashOf<K extends SpringKind>(kind: K, request: SizeRequestOf<K>, wires: readonly SizingWire[]): string[] {
+  const { temperatureC } = request
+  if (temperatureC !== undefined && wires.every(wire => getMaterial(wire.material).temperatureLimitC.value < temperatureC)) return ['temperatureC']
   const { boreMm, rodMm } = request.fit ?? {}
   if (boreMm !== undefined && rodMm !== undefined && !wires.some(wire => fitsBetween(boreMm, rodMm, wire, request.toleranceGrade ?? 2))) {
     return ['fit.boreMm', 'fit.rodMm']
@@ -38,19 +40,20 @@ function smallestClashOf<K extends SpringKind>(kind: K, request: SizeRequestOf<K
   const search = searchOf(kind)
   const all = search.listRequirements(request)
   const anchors = search.anchorPaths(request)
-  const clashes = (kept: readonly DroppableRequirement<K>[]) => !isFeasible(dropAllBut(request, all, kept), wires)
+  // Without a load there is nothing to search for.
   const isWhole = (kept: readonly DroppableRequirement<K>[]) => anchors.length > 0 || kept.some(({ path }) => path.startsWith('points.'))
+  const clashes = (kept: readonly DroppableRequirement<K>[]) => isWhole(kept) && !isFeasible(dropAllBut(request, all, kept), wires)
 
-  for (let size = 0; size <= MOST_TRIED; size++) {
-    const found = firstSubset(all, size, kept => isWhole(kept) && clashes(kept))
-    if (found) return [...anchors, ...found.map(({ path }) => path)]
-  }
-  let kept = all
+  let least = all
   for (const requirement of all) {
-    const fewer = kept.filter(other => other !== requirement)
-    if (isWhole(fewer) && clashes(fewer)) kept = fewer
+    const fewer = least.filter(other => other !== requirement)
+    if (clashes(fewer)) least = fewer
   }
-  return [...anchors, ...kept.map(({ path }) => path)]
+  for (let size = 0; size < least.length; size++) {
+    const found = firstSubset(all, size, clashes)
+    if (found) least = found
+  }
+  return [...anchors, ...least.map(({ path }) => path)]
 }
 
 // The first subset of a size, in the order of the list, that satisfies.
@@ -66,13 +69,20 @@ function firstSubset<T>(list: readonly T[], size: number, satisfies: (subset: re
   return choose(0, [])
 }
 
-// Room between bore and rod for one thickness of wire and the diameter tolerance, whatever the load; midway is best.
-function fitsBetween(boreMm: number, rodMm: number, wire: SizingWire, grade: ToleranceGrade): boolean {
-  const d = wire.wireDiameterMm
-  const D = Math.min(Math.max((boreMm + rodMm) / 2, LEAST_INDEX * d), MOST_INDEX * d)
-  const tolerance = meanDiameterToleranceMm(D, D / d, grade)
-  const slack = Number.isNaN(tolerance) ? 0 : tolerance
-  return D + d + slack <= boreMm && D - d - slack >= rodMm
+// Room between bore and rod for one thickness of wire and the diameter tolerance, whatever the load. Between two steps the tolerance is constant.
+function fitsBetween(boreMm: number, rodMm: number, { wireDiameterMm: d }: SizingWire, grade: ToleranceGrade): boolean {
+  const low = LEAST_INDEX * d
+  const high = MOST_INDEX * d
+  const steps = [...MEAN_DIAMETER_STEPS_MM, ...INDEX_STEPS.map(w => w * d)].filter(D => D > low && D < high).sort((a, b) => a - b)
+  let from = low
+  for (const to of [...steps, high]) {
+    const middle = (from + to) / 2
+    const tolerance = meanDiameterToleranceMm(middle, middle / d, grade)
+    const slack = d + (Number.isNaN(tolerance) ? 0 : tolerance)
+    if (Math.max(from, rodMm + slack) <= Math.min(to, boreMm - slack)) return true
+    from = to
+  }
+  return false
 }
 
 function dropAllBut<K extends SpringKind>(request: SizeRequestOf<K>, all: readonly DroppableRequirement<K>[], kept: readonly DroppableRequirement<K>[]): SizeRequestOf<K> {
@@ -81,7 +91,8 @@ function dropAllBut<K extends SpringKind>(request: SizeRequestOf<K>, all: readon
 
 // Steps outward from the asked value, as fractions of it, until a spring is found.
 const PROBES = [0.005, 0.02, 0.05, 0.1, 0.2, 0.35, 0.5, 0.75, 1, 2, 4] as const
-const REFINEMENTS = 9
+const REFINEMENTS = 12
+const FIGURES = 4
 
 // A limit of the fit gives way in one direction: the rod gets thinner, the others wider. Anything else may go either way.
 function directions(path: string): readonly (1 | -1)[] {
@@ -132,7 +143,8 @@ function leastChange(request: SpringSizeRequest, wires: readonly SizingWire[], p
   return null
 }
 
-// The value is rounded away from the asked one to three figures or so, and must still work.
+// Between a value that fails and one that works lies a limit. Where steps or tolerances make several, one of them is found; what
+// is given works in any case. It is rounded away from the asked value to four figures, and must still work.
 function refine(works: (value: number) => boolean, failing: number, working: number): number {
   let bad = failing
   let good = working
@@ -141,7 +153,7 @@ function refine(works: (value: number) => boolean, failing: number, working: num
     if (works(middle)) good = middle
     else bad = middle
   }
-  const step = 10 ** (Math.floor(Math.log10(Math.abs(good))) - 2)
+  const step = 10 ** (Math.floor(Math.log10(Math.abs(good))) - FIGURES + 1)
   const outward = (good > bad ? Math.ceil(good / step) : Math.floor(good / step)) * step
   const rounded = Number(outward.toPrecision(6))
   return works(rounded) ? rounded : good
