@@ -54,7 +54,7 @@ export function createThreadPool<Job, Answer>({ source, threads: mostThreads, mo
       giveWork()
     })
     worker.on('error', error => drop(thread, new ThreadError('crashed', `A thread ended: ${error.message}`)))
-    worker.on('exit', code => drop(thread, new ThreadError('crashed', `A thread ended with code ${code}`)))
+    worker.on('exit', code => drop(thread, isClosed ? new ThreadError('closed', 'The threads are closed') : new ThreadError('crashed', `A thread ended with code ${code}`)))
     return thread
   }
 
