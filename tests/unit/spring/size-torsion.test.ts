@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { evaluateTorsion, sizeSpring, type SizedDesignOf, type TorsionInput, type TorsionSizeRequest } from '#shared/spring'
+import { evaluateTorsion, sizeSpring, type SizedDesignOf, type SizingCandidate, type SizingWire, type TorsionInput, type TorsionSizeRequest } from '#shared/spring'
 import { EASIEST_INDEX } from '../../../shared/spring/sizing/torsion/wire-search'
 import { EN_CODES, makeWires } from './springs'
 
@@ -116,6 +116,94 @@ describe('the best torsion spring', () => {
     }), { numRuns: 40, seed: 33 })
     expect(compared).toBeGreaterThan(10)
   }, 120_000)
+})
+
+/** The lightest and the least stressed of all stepped springs of a wire, found by trying every pair; the moments from the rate alone. */
+function bestStepped(request: TorsionSizeRequest, wire: SizingWire, coilStep: number, diameterStepMm: number) {
+  const d = wire.wireDiameterMm
+  const [p1, p2] = request.points
+  const best = { count: 0, mass: Infinity, stress: Infinity, ease: Infinity }
+  if (!p1) return best
+  const oneCoil = evaluateTorsion({ kind: 'torsion', material: wire.material, wireDiameterMm: d, meanDiameterMm: 10 * d, bodyCoils: 1, method: request.method }).rateNmmPerDeg
+  for (let i = Math.ceil((4 * d) / diameterStepMm); i * diameterStepMm <= 20 * d + 1e-9; i++) {
+    for (let j = 1; j * coilStep <= 80; j++) {
+      const shape: TorsionInput = {
+        kind: 'torsion', material: wire.material, wireDiameterMm: d, meanDiameterMm: i * diameterStepMm, bodyCoils: j * coilStep, legs: request.legs, method: request.method,
+        loadOpens: request.loadOpens, duty: request.duty, toleranceGrade: request.toleranceGrade, fit: request.fit,
+      }
+      const asked = rateOf(request)
+      if (Math.abs(rateFrom(oneCoil, shape) / asked - 1) > 0.11) continue
+      const rate = evaluateTorsion(shape).rateNmmPerDeg
+      // Two moments share the error; one is exact where a rate is asked; one from free goes with the rate.
+      const error = p2 ? (rate * (p2.angleDeg - p1.angleDeg) - (p2.momentNmm - p1.momentNmm)) / (p1.momentNmm + p2.momentNmm) : rate / asked - 1
+      if (Math.abs(error) > 0.01 || Math.abs(rate / asked - 1) > 0.1) continue
+      const moments = p2 ? [p1.momentNmm * (1 - error), p2.momentNmm * (1 + error)] : [request.rateNmmPerDeg === undefined ? p1.angleDeg * rate : p1.momentNmm]
+      const result = evaluateTorsion({ ...shape, points: moments.map(momentNmm => ({ momentNmm })) })
+      if (result.checks.some(c => !c.ok && c.severity === 'stop')) continue
+      best.count++
+      best.mass = Math.min(best.mass, result.massG)
+      best.stress = Math.min(best.stress, result.points[result.points.length - 1]?.bendingStressMpa ?? Infinity)
+    }
+  }
+  return best
+}
+
+// The rate of a pair from that of one coil, so that most pairs need no evaluation.
+const rateFrom = (one: number, { wireDiameterMm: d, meanDiameterMm: D, bodyCoils = 1, legs = [] }: TorsionInput) =>
+  (one * 10 * d) / (D * (bodyCoils + legs.reduce((sum, l) => sum + l.lengthMm, 0) / (3 * Math.PI * D)))
+
+describe('the best torsion spring in steps', () => {
+  it('is the lightest, or the least stressed, of every pair of coils and diameter; and all of them are found', () => {
+    let compared = 0
+    fc.assert(fc.property(anyForm, fc.constantFrom(...catalogue), (request, wire) => {
+      const stepped = { ...request, coilStep: 0.5, diameterStepMm: 0.5, fit: { ...request.fit, maxSolidLengthMm: Math.min(request.fit?.maxSolidLengthMm ?? Infinity, 80 * wire.wireDiameterMm) } }
+      const tried = bestStepped(stepped, wire, 0.5, 0.5)
+      let every = 0
+      const price = (candidate: SizingCandidate) => {
+        every++
+        return candidate.massG
+      }
+      const [byMass] = designsOf(stepped, [wire])
+      const [byStress] = sizeSpring(stepped, [wire], { objective: 'stress', explainConflict: false }).designs
+      sizeSpring(stepped, [wire], { objective: price, explainConflict: false })
+      expect(every).toBe(tried.count)
+      expect(byMass === undefined).toBe(tried.count === 0)
+      if (tried.count === 0) return
+      compared++
+      expect((byMass?.objectiveValue ?? Infinity) / tried.mass).toBeCloseTo(1, 8)
+      expect((byStress?.objectiveValue ?? Infinity) / tried.stress).toBeCloseTo(1, 8)
+    }), { numRuns: 300, seed: 34 })
+    expect(compared).toBeGreaterThan(30)
+  }, 120_000)
+
+  it('with one of the two in steps keeps the rate exact, and takes the step nearest to the easiest index', () => {
+    const request: TorsionSizeRequest = { kind: 'torsion', points: [{ angleDeg: 90, momentNmm: 900 }], legs: [{ lengthMm: 20, form: 'tangential' }, { lengthMm: 25, form: 'tangential' }] }
+    const wire = { id: 'w', material: 'EN10270-1-SH' as const, wireDiameterMm: 2 }
+    const [byDiameter] = designsOf({ ...request, diameterStepMm: 0.3 }, [wire])
+    expect(byDiameter?.meanDiameterMm).toBeCloseTo(15.9, 9)
+    expect(byDiameter?.evaluation.rateNmmPerDeg).toBeCloseTo(10, 9)
+    const [byCoils] = designsOf({ ...request, coilStep: 1 }, [wire])
+    expect(byCoils?.totalCoils).toBe(Math.round(byCoils?.totalCoils ?? 0))
+    expect(byCoils?.evaluation.rateNmmPerDeg).toBeCloseTo(10, 9)
+    // The counts beside it lie further from the index of 8.
+    const K = (byCoils?.meanDiameterMm ?? 0) * (byCoils?.totalCoils ?? 0)
+    for (const other of [-1, 1]) expect(Math.abs(K / ((byCoils?.totalCoils ?? 0) + other) - 16)).toBeGreaterThan(Math.abs((byCoils?.meanDiameterMm ?? 0) - 16))
+    expect(byCoils?.evaluation.assumptions.join(' ')).toContain('No angle between the legs was asked for')
+  })
+})
+
+describe('a bore wider than the table of tolerances', () => {
+  it('admits a spring over 200 mm where none is counted, though one just under is refused', () => {
+    // Outside 200 + 20 mm and 2.9 mm of grade 2 to 200 mm (EN 15800); beyond it no tolerance is published.
+    const wire = { id: 'w', material: 'EN10270-1-SH' as const, wireDiameterMm: 20 }
+    const request: TorsionSizeRequest = { kind: 'torsion', points: [{ angleDeg: 45, momentNmm: 500_000 }], fit: { boreMm: 221.5, rodMm: 173 } }
+    const [design] = designsOf(request, [wire])
+    expect(design?.meanDiameterMm).toBeGreaterThan(200)
+    expect(design?.meanDiameterMm).toBeLessThanOrEqual(201.5 * (1 + 1e-9))
+    const smaller = (D: number) => ({ ...(design as SizedDesignOf<'torsion'>).spring, meanDiameterMm: D })
+    expect(stops(smaller(199.5))).toEqual(['bore', 'rod'])
+    expect(stops(smaller(198.5))).toEqual(['rod'])
+  })
 })
 
 describe('why no torsion spring fits', () => {
