@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { evaluateTorsion, sizeSpring, type SizedDesignOf, type SizingCandidate, type SizingWire, type TorsionInput, type TorsionSizeRequest } from '#shared/spring'
+import { TORSION_SEARCH } from '../../../shared/spring/sizing/torsion/search'
 import { EASIEST_INDEX } from '../../../shared/spring/sizing/torsion/wire-search'
 import { EN_CODES, makeWires } from './springs'
 
@@ -167,6 +168,7 @@ describe('the best torsion spring in steps', () => {
       const [byStress] = sizeSpring(stepped, [wire], { objective: 'stress', explainConflict: false }).designs
       sizeSpring(stepped, [wire], { objective: price, explainConflict: false })
       expect(every).toBe(tried.count)
+      expect(TORSION_SEARCH.prepare(stepped).leastMassG(wire)).toBeLessThanOrEqual(tried.mass)
       expect(byMass === undefined).toBe(tried.count === 0)
       if (tried.count === 0) return
       compared++

@@ -3,7 +3,7 @@ import { fatigueCheck, stressWorkingCheck } from '../../mechanics/torsion/checks
 import { LEAST_BODY_COILS } from '../../mechanics/torsion/checks/travel'
 import { legCoils } from '../../mechanics/torsion/bending'
 import type { TorsionModel } from '../../mechanics/torsion/model'
-import { fillTorsionState, greatestMomentNmm, torsionMassG, type TorsionState } from '../../mechanics/torsion/state'
+import { fillTorsionState, greatestMomentNmm, torsionMassG, torsionWireLengthMm, type TorsionState } from '../../mechanics/torsion/state'
 import type { WireGoal, WireSpring } from '../kind-search'
 import { leastThatHolds } from '../numeric-search'
 import { LEAST_INDEX, MOST_INDEX, STEP_TOLERANCE, isContinuous, stepped, type Steps } from '../steps'
@@ -53,13 +53,22 @@ function easiestDiameter(model: TorsionModel, state: TorsionState, travel: Torsi
   return best
 }
 
+// Values equal to nine figures are a tie: rounding must not decide.
+const TIE = 1e-9
+
 /** Keeps the best of the springs it is shown, or all of them. */
 class Collector {
   readonly springs: WireSpring[] = []
   private leastValue = Infinity
   private leastEase = Infinity
+  private leastLengthMm = Infinity
 
   constructor(readonly model: TorsionModel, readonly state: TorsionState, readonly travel: TorsionTravel, private readonly goal: TorsionGoal) {}
+
+  /** True where a spring, and so any of the same diameter with more coils, is heavier than the best when mass counts. */
+  isTooHeavy(D: number, bodyCoils: number): boolean {
+    return this.goal === 'mass' && Math.PI * D * bodyCoils + this.model.legsLengthMm > this.leastLengthMm * (1 + TIE)
+  }
 
   /** True where the search may end. */
   take(D: number, bodyCoils: number): boolean {
@@ -73,12 +82,12 @@ class Collector {
     }
     const value = goal === 'mass' ? torsionMassG(model, state) : greatestMomentNmm(state)
     const easy = ease(model.wireDiameterMm, D)
-    // Values equal to nine figures are a tie: rounding must not decide.
-    const isLess = value < this.leastValue * (1 - 1e-9)
-    if (!isLess && !(value <= this.leastValue * (1 + 1e-9) && easy < this.leastEase)) return false
+    const isLess = value < this.leastValue * (1 - TIE)
+    if (!isLess && !(value <= this.leastValue * (1 + TIE) && easy < this.leastEase)) return false
     if (!passesTorsionStopChecks(model, state)) return false
     this.leastValue = isLess ? value : Math.min(value, this.leastValue)
     this.leastEase = easy
+    this.leastLengthMm = Math.min(this.leastLengthMm, torsionWireLengthMm(model, state))
     this.springs[0] = springOf(state)
     return false
   }
@@ -114,7 +123,9 @@ function searchBothStepped(found: Collector, { coilStep, diameterStepMm }: Steps
     const D = stepped(i, diameterStepMm)
     const last = (most / D / coilStep) * (1 + EDGE)
     for (let j = Math.max(1, Math.ceil((fewest / D / coilStep) * (1 - EDGE))); j <= last; j++) {
-      if (found.take(D, stepped(j, coilStep))) return
+      const bodyCoils = stepped(j, coilStep)
+      if (found.isTooHeavy(D, bodyCoils)) break
+      if (found.take(D, bodyCoils)) return
     }
   }
 }
