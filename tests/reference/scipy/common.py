@@ -54,12 +54,27 @@ def goodman_factor(high, low, strength, peened):
     return line * endurance * ultimate / (line * ultimate + endurance) / amplitude
 
 
+def bending_goodman_factor(high, low, strength):
+    """The same in bending, not peened: the reversed strength over 0.577, against the tensile strength."""
+    ultimate = 0.67 * strength
+    if ultimate <= 379:
+        return 0.0
+    endurance = 241 / (1 - 379 / ultimate) / BENDING_OVER_TORSION
+    amplitude = (high - low) / 2
+    mean = (high + low) / 2
+    line = amplitude / mean
+    return line * endurance * strength / (line * strength + endurance) / amplitude
+
+
 def initial_stress_range(w):
     """Preferred initial-tension stress, least and greatest (Shigley)."""
     middle = 231 / exp(0.105 * w)
     spread = 6.9 * (4 - (w - 3) / 6.5)
     return middle - spread, middle + spread
 
+
+# Distortion energy (Shigley, extension springs).
+BENDING_OVER_TORSION = 0.577
 
 # Static limits as fractions of tensile strength: Shigley, torsional yield without presetting.
 NOT_PRESET = {"cold-drawn-carbon": 0.45, "tempered-steel": 0.50, "stainless": 0.35, "copper-alloy": 0.35}

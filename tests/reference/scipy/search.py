@@ -9,8 +9,10 @@ import time
 from scipy.optimize import differential_evolution
 
 import compression
+import extension
+import torsion
 
-KINDS = {"compression": compression}
+KINDS = {"compression": compression, "extension": extension, "torsion": torsion}
 SLACK = 1e-6
 # Above every mass: a spring that misses something is worse than any that does not, the more so the more it misses.
 MISSED = 1e9

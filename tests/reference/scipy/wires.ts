@@ -12,6 +12,8 @@ export function modelWireOf({ id, material, wireDiameterMm: d }: SizingWire): Mo
   }
 }
 
+export type Dice = ReturnType<typeof createDice>
+
 /** Evenly spread numbers from 0 to 1, the same for a seed every time (a linear congruential generator, Numerical Recipes). */
 export function createDice(seed: number) {
   let state = seed >>> 0

@@ -165,7 +165,7 @@ describe('any request the schema lets in', () => {
     let parsed = 0
     fc.assert(fc.property(request, (body) => {
       const input = EvaluateRequestSchema.safeParse(body)
-      if (!input.success) return
+      if (!input.success || input.data.kind !== 'compression') return
       parsed++
       const result = evaluateCompression(input.data)
       expect(EvaluateResponseSchema.safeParse(result).error).toBeUndefined()

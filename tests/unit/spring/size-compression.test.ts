@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import {
   describeConflict, evaluateCompression, getMaterial, minimumTensileStrengthMpa, modulusMpa, sizeSpring,
-  type CompressionInput, type CompressionSizeRequest, type SizedDesign, type SizingWire,
+  type CompressionInput, type CompressionSizeRequest, type SizedDesign, type SizedDesignOf, type SizingWire,
 } from '#shared/spring'
 import { uncoveredChecks } from '../../../shared/spring/sizing/compression/fixed-travel'
 import { EN_CODES, makeRequest, makeWires } from './springs'
@@ -93,7 +93,7 @@ describe('what a design is', () => {
         expect(design.meanDiameterMm * 10).toBeCloseTo(Math.round(design.meanDiameterMm * 10), 9)
         expect(stops(asInput(request, design))).toEqual([])
         request.points.forEach((point, i) =>
-          expect(Math.abs((design.evaluation.points[i]?.forceN ?? 0) / point.forceN - 1)).toBeLessThan(0.010001))
+          expect(Math.abs(((design as SizedDesignOf<'compression'>).evaluation.points[i]?.forceN ?? 0) / point.forceN - 1)).toBeLessThan(0.010001))
       }
     }), { numRuns: 80 })
     expect(found).toBeGreaterThan(40)
@@ -102,7 +102,7 @@ describe('what a design is', () => {
   it('makes the rate exact where only coils or only the diameter go in steps', () => {
     for (const step of [{ coilStep: 0.25 }, { diameterStepMm: 0.1 }]) {
       const [design] = sizeSpring(makeRequest(step), catalogue).designs
-      expect(design?.evaluation.rateNPerMm).toBeCloseTo(5, 9)
+      expect((design as SizedDesignOf<'compression'>).evaluation.rateNPerMm).toBeCloseTo(5, 9)
     }
   })
 })
@@ -179,7 +179,7 @@ describe('what is best', () => {
       const values = designs.map(d => d.objectiveValue)
       expect([...values].sort((a, b) => a - b)).toEqual(values)
     }
-    const stress = sizeSpring(makeRequest(), catalogue, { objective: 'stress' }).designs[0]
+    const stress = sizeSpring(makeRequest(), catalogue, { objective: 'stress' }).designs[0] as SizedDesignOf<'compression'> | undefined
     expect(stress?.evaluation.points[1]?.stressMpa).toBeCloseTo(stress?.objectiveValue ?? Number.NaN, 9)
   })
 
