@@ -16,9 +16,9 @@ const usual = catalogue.filter(wire => wire.wireDiameterMm >= 0.4 && wire.wireDi
 /** A thickness of the catalogue. */
 export const pickThickness = (dice: Dice): number => dice.pick(usual).wireDiameterMm
 
-/** All wires somewhat thinner and thicker. */
-export function wiresAround(d: number): Pick<Trial, 'wires' | 'model'> {
-  const near = catalogue.filter(wire => wire.wireDiameterMm > d * 0.6 && wire.wireDiameterMm < d * 1.6)
+/** All wires up to `times` thinner and thicker. */
+export function wiresAround(d: number, times = 1.4): Pick<Trial, 'wires' | 'model'> {
+  const near = catalogue.filter(wire => wire.wireDiameterMm > d / times && wire.wireDiameterMm < d * times)
   // Thinnest first, so that neighbours in the list are neighbours in what they do.
   const model = near.flatMap(wire => modelWireOf(wire) ?? []).sort((a, b) => a.diameter - b.diameter)
   return { wires: near.filter(wire => model.some(({ id }) => id === wire.id)), model }
