@@ -178,6 +178,18 @@ describe('the best torsion spring in steps', () => {
     expect(compared).toBeGreaterThan(30)
   }, 120_000)
 
+  const wireOf = (wireDiameterMm: number) => ({ id: 'w', material: 'EN10270-1-SH' as const, wireDiameterMm })
+  it.each([
+    // 0.7 of 1980 MPa is 1088.5 N mm in 2 mm wire; steps may lessen a moment of 1093 below it.
+    ['a moment just over the limit of stress', wireOf(2), { kind: 'torsion', points: [{ angleDeg: 0, momentNmm: 500 }, { angleDeg: 55, momentNmm: 1093 }], fit: { maxSolidLengthMm: 60 } }],
+    ['a rod that the coils only just clear', wireOf(5), { kind: 'torsion', points: [{ angleDeg: 30, momentNmm: 6000 }], fit: { rodMm: 30.1, boreMm: 55, maxSolidLengthMm: 90 } }],
+  ] as const satisfies readonly (readonly [string, SizingWire, TorsionSizeRequest])[])('misses no pair with %s', (_, wire, request) => {
+    const tried = bestStepped(request, wire, 0.25, 0.1)
+    const found = TORSION_SEARCH.prepare({ ...request, coilStep: 0.25, diameterStepMm: 0.1 }).search(wire, 'every')
+    expect(tried.count).toBeGreaterThan(10)
+    expect(found.length).toBe(tried.count)
+  })
+
   it('with one of the two in steps keeps the rate exact, and takes the step nearest to the easiest index', () => {
     const request: TorsionSizeRequest = { kind: 'torsion', points: [{ angleDeg: 90, momentNmm: 900 }], legs: [{ lengthMm: 20, form: 'tangential' }, { lengthMm: 25, form: 'tangential' }] }
     const wire = { id: 'w', material: 'EN10270-1-SH' as const, wireDiameterMm: 2 }

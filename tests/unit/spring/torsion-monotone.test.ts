@@ -4,7 +4,7 @@ import type { TorsionSizeRequest } from '#shared/spring'
 import { TORSION_CHECKS } from '../../../shared/spring/mechanics/torsion/checks'
 import { INDEX_STEPS, MEAN_DIAMETER_STEPS_MM } from '../../../shared/spring/mechanics/tolerances/mean-diameter'
 import { buildTorsionModel } from '../../../shared/spring/mechanics/torsion/model'
-import { bodyLengthAtMm, createTorsionState, torsionMassG } from '../../../shared/spring/mechanics/torsion/state'
+import { activeCoilsOf, bodyLengthAtMm, createTorsionState, fillTorsionState, torsionMassG } from '../../../shared/spring/mechanics/torsion/state'
 import {
   LARGE_FAILS, SMALL_FAILS, STEPPED_LARGE_FAILS, STEPPED_SMALL_FAILS, bodyConstantMm, feasibleTorsionDiameters, fillTorsion,
 } from '../../../shared/spring/sizing/torsion/diameters'
@@ -121,4 +121,41 @@ describe('what a torsion search takes for granted', () => {
     expect(inside).toBeGreaterThan(2000)
     expect(outside).toBeGreaterThan(2000)
   }, 60_000)
+
+  it('leaves the gap out where the tolerance steps up over a rod', () => {
+    // At 16 mm and index 8 the tolerance of grade 2 steps from 0.30 to 0.45 mm (EN 15800): just above, less room is left than just below.
+    const wire = { id: 'w', material: 'EN10270-1-SH' as const, wireDiameterMm: 2 }
+    const request: TorsionSizeRequest = { kind: 'torsion', points: [{ angleDeg: 30, momentNmm: 300 }] }
+    const bare = buildTorsionModel(wire, request)
+    const state = createTorsionState(Number.NaN, Number.NaN)
+    const travel = resolveTorsionTravel(request)
+    const K = bodyConstantMm(bare, travel.rateNmmPerDeg)
+    const rodMm = (K * 16) / (K + 16 * (30 / 360)) - 2 - 0.3 - 0.05
+    const intervals = feasibleTorsionDiameters(buildTorsionModel(wire, { ...request, fit: { rodMm } }), state, travel)
+    // Beyond, further steps only cut the range in pieces that touch.
+    expect(intervals.length).toBeGreaterThanOrEqual(2)
+    expect(intervals[0]?.lowMm).toBeCloseTo(15.95, 1)
+    expect(intervals[0]?.highMm).toBeCloseTo(16, 9)
+    expect(intervals[1]?.lowMm).toBeCloseTo(16.1, 1)
+  })
+
+  it('says of each check in words what the search is told in numbers', () => {
+    const stopped: Record<string, number> = {}
+    const wild = fc.record({ values: cases, index: bounded(3, 22), coils: bounded(0.5, 30), from: bounded(-20, 60), to: bounded(-20, 3000), ordered: fc.boolean(), temperatureC: bounded(-50, 300) })
+    fc.assert(fc.property(wild, ({ values, index, coils, from, to, ordered, temperatureC }) => {
+      const { d, request } = makeCase(values)
+      const model = buildTorsionModel({ ...values.wire, wireDiameterMm: d * (ordered ? 1 : 3) }, { ...request, temperatureC })
+      const state = fillTorsionState(createTorsionState(from, to), model, index * model.wireDiameterMm, coils, activeCoilsOf(model, index * model.wireDiameterMm, coils))
+      state.ordered = ordered
+      for (const check of TORSION_CHECKS) {
+        if (!check.applies(model, state)) continue
+        const said = check.describe(model, state)
+        const stops = check.stops(model, state)
+        expect(!said.ok && said.severity === 'stop', check.code).toBe(stops)
+        expect(said.message.length).toBeGreaterThan(10)
+        if (stops) stopped[check.code] = (stopped[check.code] ?? 0) + 1
+      }
+    }), { numRuns: 2000, seed: 44 })
+    expect(Object.keys(stopped).sort()).toEqual(TORSION_CHECKS.map(c => c.code).filter(c => c !== 'winding' && c !== 'surroundings').sort())
+  })
 })
