@@ -20,6 +20,9 @@ export type FoundDesign = {
 /** What a usual shape may cost over the cheapest of all before a person rather looks at the cheap one (common practice, no source). */
 const WORTH_A_USUAL_SHAPE = 1.5
 
+/** Coils under which the checks ask for care: active ones of compression springs, those of the body else (common practice, no source). */
+const EASY_COILS = { compression: 3, extension: 4, torsion: 4 } as const
+
 /**
  * The spring of the catalogue that does what is asked for at the lowest price, or what stands in the way. Plain computing.
  *
@@ -34,7 +37,7 @@ export function searchDesign({ requirement, wires, book }: DesignQuestion): Foun
   const price = priceSearchOf({ book, quantity: mainQuantityOf(requirement.quantities), options: priceOptionsOf(requirement), request })
   const policy = readGatePolicy(book)
   // Slenderness is a matter of springs that are pressed.
-  const isUsual = ({ wire, meanDiameterMm, freeLengthMm }: SizingCandidate<CatalogueWire>) => isUsualShape({
+  const isUsual = ({ wire, meanDiameterMm, freeLengthMm, activeCoils, totalCoils }: SizingCandidate<CatalogueWire>) => (request.kind === 'compression' ? activeCoils : totalCoils) >= EASY_COILS[request.kind] && isUsualShape({
     springIndex: meanDiameterMm / wire.wireDiameterMm, wireDiameterMm: wire.wireDiameterMm, slenderness: request.kind === 'compression' ? freeLengthMm / meanDiameterMm : 0,
   }, policy)
   const allowed = wiresFor(wires, materials, book)

@@ -33,7 +33,7 @@ function hook(spring: DrawnExtension, place: Placement, startPx: number, side: 1
     const angle = 2 * Math.PI * LOOP_SHARE
     const endX = middle - side * r * Math.cos(angle)
     const endY = axisYPx + side * r * Math.sin(angle)
-    return `M${at(fromPx, axisYPx)}A${px(r)} ${px(r)} 0 1 1 ${at(endX, endY)}`
+    return `M${at(fromPx, axisYPx)}A${px(r)} ${px(r)} 0 1 0 ${at(endX, endY)}`
   }
   switch (hookForm) {
     case 'full-loop': return { farPx, path: loop(startPx, farPx) }

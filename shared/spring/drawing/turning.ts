@@ -12,6 +12,8 @@ const WIDE_PX = 430
 const LEAST_WIDTH_PX = 280
 const TALLEST_PX = 230
 const THUMB_PX = 28
+// The sizes stand in a line above the spring.
+const LETTERING_PX = 40
 
 const coils = (count: number): string => formatNumber(count, 2).replace(/\.?0+$/, '')
 
@@ -29,11 +31,29 @@ function drawnReachDeg({ greatestAngleDeg, points }: MovedTorsion['evaluation'])
   return Math.max(1, last, Math.min(limit, last > 0 ? 2.5 * last : limit))
 }
 
-/** Farthest that ring and legs reach from the axis at any angle, mm: the scale is the same however it is turned. */
-function reachMm(drawn: DrawnTorsion): number {
-  const radius = (drawn.meanDiameterMm + drawn.wireDiameterMm) / 2
-  const legs = drawn.legs.map(leg => (leg.form === 'straight' ? radius : Math.hypot(radius, leg.lengthMm)))
-  return Math.max(radius * (drawn.loadOpens ? 1.3 : 1.08), ...legs.map(leg => leg + drawn.wireDiameterMm / 2))
+interface Extent { readonly left: number, readonly right: number, readonly top: number, readonly bottom: number }
+
+/** Room that ring and legs take about the axis at any angle from free to `reachDeg`, mm: the scale is the same however it is turned. */
+function extentMm(drawn: DrawnTorsion, reachDeg: number): Extent {
+  const radius = (Math.max(drawn.meanDiameterMm, meanDiameterAtMm(drawn, reachDeg)) + drawn.wireDiameterMm) / 2
+  const half = drawn.wireDiameterMm / 2
+  let [left, right, top, bottom] = [-radius, radius, -radius, radius]
+  const include = (x: number, y: number) => {
+    left = Math.min(left, x - half)
+    right = Math.max(right, x + half)
+    top = Math.min(top, y - half)
+    bottom = Math.max(bottom, y + half)
+  }
+  const [first, second] = drawn.legs
+  if (first?.form === 'tangential') include((drawn.hand === 'left' ? 1 : -1) * first.lengthMm, radius)
+  if (second?.form === 'tangential') {
+    const steps = Math.min(180, Math.max(2, Math.ceil(reachDeg / 4)))
+    for (let i = 0; i <= steps; i++) {
+      const { toX, toY } = loadedLegMm(drawn, (reachDeg * i) / steps, second.lengthMm)
+      include(toX, toY)
+    }
+  }
+  return { left, right, top, bottom }
 }
 
 /** The way from free to where it is held, as an arc about the axis with an arrow. */
@@ -78,12 +98,13 @@ export function layoutTurning(design: MovedTorsion, options: MotionOptions): Mot
   const ticks = uprightTicks(charted)
   const leftPx = Math.max(isWide ? 74 : 54, textWidthPx(formatNumber(ticks.yTicks.at(-1) ?? 0, ticks.yDecimals)) + 14)
   const rightPx = isWide ? 40 : 20
-  const reach = reachMm(drawn)
-  const endHeightPx = Math.min(TALLEST_PX, widthPx - 90)
-  const place: EndPlacement = { pxPerMm: endHeightPx / 2 / reach, xPx: widthPx / 2, yPx: 14 + endHeightPx / 2 }
+  const extent = extentMm(drawn, reachDeg)
+  const pxPerMm = Math.min(TALLEST_PX / (extent.bottom - extent.top), (widthPx - 40) / (extent.right - extent.left))
+  const endHeightPx = pxPerMm * (extent.bottom - extent.top)
+  const place: EndPlacement = { pxPerMm, xPx: widthPx / 2 - (pxPerMm * (extent.left + extent.right)) / 2, yPx: LETTERING_PX - pxPerMm * extent.top }
   const mostX = reachDeg * 1.06
   const frame: LineFrame = {
-    x0Px: leftPx, pxPerX: (widthPx - leftPx - rightPx) / mostX, topPx: 14 + endHeightPx + 66, heightPx: options.chartHeightPx ?? (isWide ? 190 : 160), mostX, ...ticks, titleXPx: 2,
+    x0Px: leftPx, pxPerX: (widthPx - leftPx - rightPx) / mostX, topPx: LETTERING_PX + endHeightPx + 66, heightPx: options.chartHeightPx ?? (isWide ? 190 : 160), mostX, ...ticks, titleXPx: 2,
   }
   const [, second] = drawn.legs
   // Where the loaded leg points when free, to be compared with.
