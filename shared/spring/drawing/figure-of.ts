@@ -13,7 +13,7 @@ import { torsionSentence } from './turning'
 import { figureSentence } from './words'
 
 /** A still figure with its dimensions, and the sentence that names it. */
-export type NamedFigure = Pick<Figure, 'widthPx' | 'heightPx' | 'shapes'> & { readonly sentence: string }
+export type NamedFigure = Pick<Figure, 'widthPx' | 'heightPx' | 'shapes' | 'pxPerMm'> & { readonly sentence: string }
 
 const LEAST_WIDTH_PX = 280
 const LEFT_PX = 52
@@ -62,7 +62,7 @@ function extensionFigure(spring: DrawnExtension, { units, tallestPx = 260, ...op
     ...dimensionAcross({ x1Px: bodyFromPx, x2Px: bodyToPx, yPx: bottomPx + 24, partPx: [bottomPx, bottomPx], label: lengthLabel('K', bodyToPx / pxPerMm - bodyFromPx / pxPerMm, units) }),
     ...leader({ fromPx: [crownPx, bottomPx - (d / 4) * pxPerMm], elbowPx: [crownPx + 18, bottomPx + 52], label: wireLabel(d, units) }),
   ]
-  return { widthPx: Number(px(widthPx)), heightPx: Number(px(bottomPx + 70)), shapes }
+  return { widthPx: Number(px(widthPx)), heightPx: Number(px(bottomPx + 70)), shapes, pxPerMm }
 }
 
 function torsionFigure(spring: DrawnTorsion, { units, tallestPx = 260, ...options }: FigureOptions): Omit<NamedFigure, 'sentence'> {
@@ -89,5 +89,5 @@ function torsionFigure(spring: DrawnTorsion, { units, tallestPx = 260, ...option
     ...dimensionAcross({ x1Px: x0Px, x2Px: bodyToPx, yPx: topPx - 20, partPx: [topPx, topPx], label: lengthLabel('K', bodyMm, units) }),
     ...leader({ fromPx: [x0Px + pxPerMm * d * 1.0, bottomPx - (d / 4) * pxPerMm], elbowPx: [x0Px + pxPerMm * d + 18, bottomPx + 28], label: wireLabel(d, units) }),
   ]
-  return { widthPx: Number(px(widthPx)), heightPx: Number(px(Math.max(axisYPx + reachMm * pxPerMm + 12, bottomPx + 44))), shapes }
+  return { widthPx: Number(px(widthPx)), heightPx: Number(px(Math.max(axisYPx + reachMm * pxPerMm + 12, bottomPx + 44))), shapes, pxPerMm }
 }
