@@ -26,8 +26,8 @@ export const EvaluateTorsionPointSchema = z.union(
 )
 
 const MeanDiameterMm = quantity('The mean diameter', 'mm', { min: 0.02, max: 5000 })
-const ActiveCoils = quantity('The number of active coils', '', { min: 0.1, max: 1000 })
-const BodyCoils = quantity('The number of coils in the body', '', { min: 0.1, max: 1000 })
+const ActiveCoils = quantity('The number of active coils', '', { min: 0.1, max: 100_000 })
+const BodyCoils = quantity('The number of coils in the body', '', { min: 0.1, max: 100_000 })
 const MOST_POINTS = { error: 'At most 6 points.' }
 
 /** What describes any spring outright. */
@@ -58,7 +58,7 @@ export const EvaluateCompressionSchema = z.strictObject({
   kind: z.literal('compression'),
   ...wound,
   activeCoils: ActiveCoils,
-  totalCoils: quantity('The total number of coils', '', { min: 0.1, max: 1100 }).optional(),
+  totalCoils: quantity('The total number of coils', '', { min: 0.1, max: 100_010 }).optional(),
   freeLengthMm: FreeLengthMm,
   points: z.array(EvaluatePointSchema).max(6, MOST_POINTS).optional(),
   ...compressionConditions,
