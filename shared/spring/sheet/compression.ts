@@ -81,13 +81,13 @@ export function compressionGroups(spring: CompressionInput, evaluation: Compress
       title: 'Stability, vibration and life',
       rows: [
         computed('buckling.slenderness', 'λ', 'Slenderness', buckling.slenderness, 'ratio', 'λ = L_0/D', EN),
-        chosen('seatingCoefficient', 'Seating coefficient ν', spring.seatingCoefficient?.toString(), '0.5, both ends on flat seats'),
+        { ...chosen('seatingCoefficient', 'Seating coefficient', spring.seatingCoefficient?.toString(), '0.5', 'How the ends stand: 0.5 where both lie on flat seats.'), symbol: 'ν' },
         chosen('guided', 'Guided by other than bore or rod', yesNo(spring.guided), 'no'),
         computed(
           'buckling.criticalDeflectionMm', 's_K', 'Deflection at which it buckles', buckling.criticalDeflectionMm ?? null, 'length',
           's_K = L_0/2 · 1/(1 − G/E) · (1 − sqrt(1 − (1 − G/E)/(0.5 + G/E) · (π D/(ν L_0))^2))', `${MEMORY}; none: it cannot buckle`,
         ),
-        { field: 'buckling.ok', symbol: '', name: 'Safe from buckling as it works', value: buckling.ok ? 'yes' : 'no', quantity: 'coils', formula: '', basis: 'its greatest travel against s_K' },
+        { field: 'buckling.ok', symbol: '', name: 'Safe from buckling as it works', value: buckling.ok ? 'yes' : 'no', quantity: 'coils', formula: '', basis: 'its greatest travel against that deflection' },
         computed('naturalFrequencyHz', 'f_e', 'Natural frequency', evaluation.naturalFrequencyHz, 'frequency', 'f_e = d/(2 π n D^2) sqrt(G/(2 ρ))', `${MEMORY}; both ends seated`),
         computed('outerDiameterAtSolidMm', '', 'Outside diameter when solid', evaluation.outerDiameterAtSolidMm, 'length', `D_e + 0.1 (m_p^2 − 0.8 m_p d − 0.2 d^2)/D, ${growth}`, `${MEMORY}; ends free to turn`),
         ...fatigueRows(evaluation, { symbol: 'τ', basis: 'Goodman, S_u = 0.67 R_m, S_e through Zimmerli’s point (Shigley ch. 10)' }),
