@@ -60,7 +60,9 @@ class Spring:
         if request["cycles"] >= 1e5:
             k = bergstraesser(w) if request["method"] == "en13906" else wahl(w)
             least = self.force(max(lengths)) if len(lengths) > 1 else 0
+            # Zimmerli's data are for steel wire under 10 mm.
             listed.append(over(d, 10))
+            listed.append(1.0 if wire["family"] == "copper-alloy" else -1.0)
             listed.append(under(goodman_factor(k * shear(greatest, D, d), k * shear(least, D, d), strength, request["peened"]), 1))
         tolerance = diameter_tolerance(D, w, request["grade"])
         if request["bore"]:
