@@ -18,6 +18,8 @@ export type ThreadPoolOptions = {
   mostWaiting: number
   /** A job that takes longer is ended with its thread. */
   longestMs: number
+  /** Memory of a thread, MiB: one that needs more ends with its job, and the server goes on. */
+  mostMemoryMib: number
 }
 
 export type ThreadPool<Job, Answer> = {
@@ -36,13 +38,13 @@ type Thread<Job, Answer> = { worker: Worker, task: Task<Job, Answer> | null, tim
  * Threads that do one job each at a time, and a queue of bounded length before them. Threads are started when first needed
  * and kept; one that dies takes only its own job with it, and another is started for the next.
  */
-export function createThreadPool<Job, Answer>({ source, threads: mostThreads, mostWaiting, longestMs }: ThreadPoolOptions): ThreadPool<Job, Answer> {
+export function createThreadPool<Job, Answer>({ source, threads: mostThreads, mostWaiting, longestMs, mostMemoryMib }: ThreadPoolOptions): ThreadPool<Job, Answer> {
   const threads = new Set<Thread<Job, Answer>>()
   const waiting: Task<Job, Answer>[] = []
   let isClosed = false
 
   function startThread(): Thread<Job, Answer> {
-    const worker = new Worker(source, { eval: true })
+    const worker = new Worker(source, { eval: true, resourceLimits: { maxOldGenerationSizeMb: mostMemoryMib } })
     const thread: Thread<Job, Answer> = { worker, task: null, timer: undefined }
     threads.add(thread)
     // An idle thread keeps no process alive.

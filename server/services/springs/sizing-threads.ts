@@ -8,6 +8,7 @@ const THREADS = Math.max(1, availableParallelism() - 1)
 /** At a tenth of a second each this is some seconds of waiting: longer than that people rather ask again. */
 const MOST_WAITING = 50
 const LONGEST_MS = 15_000
+const MOST_MEMORY_MIB = 512
 const RETRY_AFTER_S = 3
 
 let pool: ThreadPool<SizingJob, SizingAnswer> | undefined
@@ -16,7 +17,7 @@ let pool: ThreadPool<SizingJob, SizingAnswer> | undefined
 export const sizingThreads = {
   /** `source` is the thread's own, bundled: see vite/bundle-thread.ts. */
   start: (source: string): void => {
-    pool ??= createThreadPool({ source, threads: THREADS, mostWaiting: MOST_WAITING, longestMs: LONGEST_MS })
+    pool ??= createThreadPool({ source, threads: THREADS, mostWaiting: MOST_WAITING, longestMs: LONGEST_MS, mostMemoryMib: MOST_MEMORY_MIB })
   },
   /** @throws DomainError unavailable when the queue is full, a thread dies, or the server stops */
   run: async <Job extends SizingJob>(job: Job): Promise<SizingAnswerTo<Job['task']>> => {

@@ -8,15 +8,16 @@ const SOURCE = `
 const { parentPort, threadId } = require('node:worker_threads')
 parentPort.on('message', ({ job }) => {
   if (job.dies) process.exit(3)
+  if (job.hoards) for (const all = []; ;) all.push(new Array(10_000).fill(all.length))
   if (job.throws) throw new Error('a fault outside the job')
   setTimeout(() => parentPort.postMessage(job.fails ? { error: 'Error: it cannot be done' } : { answer: { value: job.value, threadId } }), job.ms ?? 0)
 })`
 
-type Job = { value?: number, ms?: number, fails?: true, dies?: true, throws?: true }
+type Job = { value?: number, ms?: number, fails?: true, dies?: true, throws?: true, hoards?: true }
 type Answer = { value: number, threadId: number }
 
 let pool: ThreadPool<Job, Answer>
-const open = (options: Partial<ThreadPoolOptions> = {}) => (pool = createThreadPool<Job, Answer>({ source: SOURCE, threads: 2, mostWaiting: 2, longestMs: 5000, ...options }))
+const open = (options: Partial<ThreadPoolOptions> = {}) => (pool = createThreadPool<Job, Answer>({ source: SOURCE, threads: 2, mostWaiting: 2, longestMs: 5000, mostMemoryMib: 64, ...options }))
 afterEach(() => pool.close())
 
 const reasonOf = (promise: Promise<unknown>) => promise.then(() => 'done', (error: unknown) => (error instanceof ThreadError ? error.reason : 'another error'))
@@ -37,7 +38,7 @@ describe('thread pool', () => {
     expect((await pool.run({ value: 6 })).value).toBe(6)
   })
 
-  it.each([['exits', { dies: true }], ['throws outside its job', { throws: true }]] as const)('loses only its own job when a thread %s, and starts another', async (_, job) => {
+  it.each([['exits', { dies: true }], ['throws outside its job', { throws: true }], ['needs too much memory', { hoards: true }]] as const)('loses only its own job when a thread %s, and starts another', async (_, job) => {
     open({ threads: 1, mostWaiting: 5 })
     const [lost, next] = await Promise.all([reasonOf(pool.run(job)), pool.run({ value: 7 })])
     expect(lost).toBe('crashed')
@@ -69,7 +70,7 @@ describe('thread pool', () => {
 describe('the thread that sizes springs', () => {
   it('is one source that needs nothing beside Node, and answers a request', async () => {
     const source = await bundleThread(fileURLToPath(new URL('../../../server/threads/sizing.ts', import.meta.url)))
-    const sizing = createThreadPool<object, { designs: { objectiveValue: number }[], searched: { wires: number } }>({ source, threads: 1, mostWaiting: 1, longestMs: 10_000 })
+    const sizing = createThreadPool<object, { designs: { objectiveValue: number }[], searched: { wires: number } }>({ source, threads: 1, mostWaiting: 1, longestMs: 10_000, mostMemoryMib: 256 })
     const request = { kind: 'compression', points: [{ lengthMm: 40, forceN: 50 }, { lengthMm: 30, forceN: 100 }], objective: 'mass', limit: 1 }
     const wires = [1.6, 1.8, 2].map(d => ({ id: String(d), material: 'EN10270-1-SH', wireDiameterMm: d }))
     const { designs, searched } = await sizing.run({ task: 'size', question: { request, wires, book: null } })
