@@ -9,7 +9,7 @@ import type { StoredPriceBook } from '../price-books/read-book'
 import { describeConflictFor } from '../springs/describe-conflict'
 import { findDesign } from '../springs/find-design'
 import { workingPointsOf } from '../springs/requirement'
-import { pricedDesignOf, storedDesignOf } from '../springs/stored-design'
+import { pricedDesignOf, storedDesignOf, storedEnergyOf } from '../springs/stored-design'
 import { priceDesign, type WorkedRung } from './price-design'
 import { readShopPlan, type ShopPlan } from './shop-plan'
 
@@ -53,9 +53,9 @@ function judge(requirement: Requirement, design: StoredDesign | null, rungs: rea
       toleranceGrade: requirement.toleranceGrade, surroundings: requirement.surroundings, ...(requirement.neededOn && { neededOn: requirement.neededOn }),
     },
     design && {
-      material: design.material, wireDiameterMm: design.wireDiameterMm, springIndex: design.evaluation.springIndex,
+      kind: design.kind, material: design.material, wireDiameterMm: design.wireDiameterMm, springIndex: design.evaluation.springIndex,
       // Only what is pressed can bow.
-      slenderness: design.kind === 'compression' ? design.freeLengthMm / design.meanDiameterMm : 0, checks: design.evaluation.checks,
+      slenderness: design.kind === 'compression' ? design.freeLengthMm / design.meanDiameterMm : 0, storedEnergyJ: storedEnergyOf(design), checks: design.evaluation.checks,
     },
     rungs,
     readGatePolicy(book),

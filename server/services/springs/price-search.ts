@@ -14,21 +14,27 @@ export type PriceSearch = {
 
 /** Lighter springs than this are not asked about: a bound of no mass at all must still be a price. */
 const LEAST_MASS_G = 1e-9
+/** An index that slows no feed. */
+const LOOSE_INDEX = 1e6
 
 /**
- * The price of one spring at a quantity. For one wire it never falls with the length of wire, and so with the mass: wire,
- * coiling, furnace, packing all stay or grow with it (see `calculateJobQuantities`), and the rest depends on the request.
+ * The price of one spring at a quantity. For one wire and index it never falls with the length of wire, and so with the mass:
+ * wire, coiling, furnace, packing all stay or grow with it (see `calculateJobQuantities`), and the rest depends on the
+ * request; it never rises with the index. Where coils and diameter are continuous, springs are put in order as if none were
+ * so tight that its feed is slowed: the search then asks for the lightest of a wire alone.
  */
 export function priceSearchOf({ book, quantity, options, request }: { book: PriceBook, quantity: number, options: PriceOptions, request: SpringSizeRequest }): PriceSearch {
   const price = createPriceObjective({ book, quantity, options })
-  const objective = (candidate: SizingCandidate<CatalogueWire>) => price(pricedCandidateOf(candidate, request), candidate.wire)
+  const isStepped = request.coilStep !== undefined || request.diameterStepMm !== undefined
+  const priceOf = (candidate: SizingCandidate<CatalogueWire>) => price(pricedCandidateOf(candidate, request), candidate.wire)
+  const priceIfLoose = (candidate: SizingCandidate<CatalogueWire>) => priceOf({ ...candidate, meanDiameterMm: LOOSE_INDEX * candidate.wire.wireDiameterMm })
   return {
-    objective,
+    objective: isStepped ? priceOf : priceIfLoose,
     leastOfMass: (wire, massG) => {
       const mass = Math.max(massG, LEAST_MASS_G)
       const wireLengthMm = mass * 4e6 / (Math.PI * wire.wireDiameterMm ** 2 * getMaterial(wire.material).densityKgPerM3.value)
       // Where the wire lies in the spring does not matter to the price.
-      return objective({ wire, massG: mass, wireLengthMm, meanDiameterMm: wire.wireDiameterMm, outerDiameterMm: wire.wireDiameterMm, activeCoils: 1, totalCoils: 1, freeLengthMm: 1 })
+      return priceIfLoose({ wire, massG: mass, wireLengthMm, meanDiameterMm: wire.wireDiameterMm, outerDiameterMm: wire.wireDiameterMm, activeCoils: 1, totalCoils: 1, freeLengthMm: 1 })
     },
   }
 }

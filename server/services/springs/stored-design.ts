@@ -1,7 +1,11 @@
 import type { StoredDesign } from '#shared/schemas/quote'
 import type { Requirement } from '#shared/schemas/enquiry'
 import { getMaterial } from '#shared/spring/materials'
+import type { CompressionConditions } from '#shared/spring/mechanics/compression/types'
+import type { ExtensionConditions } from '#shared/spring/mechanics/extension/types'
 import type { SpringInput } from '#shared/spring/mechanics/spring'
+import { storedEnergyJ } from '#shared/spring/mechanics/torsion/bending'
+import type { TorsionConditions } from '#shared/spring/mechanics/torsion/types'
 import type { SizedDesign, SizingCandidate, SizingResult, SpringSizeRequest } from '#shared/spring/sizing/types'
 import type { PricedDesign } from '../../engine/pricing'
 import { handOf } from './requirement'
@@ -21,30 +25,58 @@ export function storedDesignOf(found: SizedDesign, searched: SizingResult['searc
   }
 }
 
-type Measured = Omit<PricedDesign, 'material' | 'stressReliefMinutes' | 'stressReliefTempC'>
+type Measured = Pick<PricedDesign, 'wireDiameterMm' | 'meanDiameterMm' | 'activeCoils' | 'totalCoils' | 'freeLengthMm' | 'wireLengthMm' | 'massG'>
+/** What a spring and a request for one say of its ends. */
+type Ended =
+  | { kind: 'compression' } & Pick<CompressionConditions, 'ends'>
+  | { kind: 'extension' } & Pick<ExtensionConditions, 'hook'>
+  | { kind: 'torsion' } & Pick<TorsionConditions, 'legs'>
 
-function pricedOf(material: StoredDesign['material'], measures: Measured): PricedDesign {
+/** How the ends are made, where nothing is said as the calculation takes it. */
+function endsOf(ended: Ended): Pick<PricedDesign, 'kind' | 'ends' | 'formed'> {
+  switch (ended.kind) {
+    case 'compression': return { kind: 'compression', ends: ended.ends ?? 'closed-ground', formed: null }
+    case 'extension': return { kind: 'extension', ends: null, formed: ended.hook?.form ?? 'full-loop' }
+    case 'torsion': return { kind: 'torsion', ends: null, formed: ended.legs?.[0]?.form ?? null }
+  }
+}
+
+function pricedOf(material: StoredDesign['material'], measures: Measured, ended: Ended): PricedDesign {
   const { stressRelief } = getMaterial(material)
+  const { kind, ends, formed } = endsOf(ended)
   return {
-    kind: measures.kind, material, wireDiameterMm: measures.wireDiameterMm, meanDiameterMm: measures.meanDiameterMm, activeCoils: measures.activeCoils, totalCoils: measures.totalCoils,
-    freeLengthMm: measures.freeLengthMm, ends: measures.ends, wireLengthMm: measures.wireLengthMm, massG: measures.massG,
+    kind, material, wireDiameterMm: measures.wireDiameterMm, meanDiameterMm: measures.meanDiameterMm, activeCoils: measures.activeCoils, totalCoils: measures.totalCoils,
+    freeLengthMm: measures.freeLengthMm, ends, formed, wireLengthMm: measures.wireLengthMm, massG: measures.massG,
     stressReliefMinutes: stressRelief.minutes, stressReliefTempC: stressRelief.temperatureC,
   }
 }
 
-type Described = Pick<StoredDesign, 'kind' | 'material' | 'wireDiameterMm' | 'meanDiameterMm' | 'activeCoils' | 'totalCoils' | 'freeLengthMm'> & {
-  spring: SpringInput, evaluation: Pick<StoredDesign['evaluation'], 'wireLengthMm' | 'massG'>
-}
+type Described = Omit<Measured, 'wireLengthMm' | 'massG'> & { material: StoredDesign['material'], spring: SpringInput, evaluation: Pick<Measured, 'wireLengthMm' | 'massG'> }
 
 /** What pricing must know of a spring: its measures, its ends, and the stress relief of its material. */
 export function pricedDesignOf(design: Described): PricedDesign {
   const { wireLengthMm, massG } = design.evaluation
-  return pricedOf(design.material, { ...design, wireLengthMm, massG, ends: design.spring.kind === 'compression' ? design.spring.ends ?? 'closed-ground' : null })
+  return pricedOf(design.material, { ...design, wireLengthMm, massG }, design.spring)
 }
 
 /** What pricing must know of a spring the search asks about; what is formed at its ends follows from the request. */
-export function pricedCandidateOf({ wire, ...measures }: SizingCandidate, request: SpringSizeRequest): PricedDesign {
-  return pricedOf(wire.material, { ...measures, kind: request.kind, wireDiameterMm: wire.wireDiameterMm, ends: request.kind === 'compression' ? request.ends ?? 'closed-ground' : null })
+export function pricedCandidateOf(candidate: SizingCandidate, request: SpringSizeRequest): PricedDesign {
+  const { wire } = candidate
+  return pricedOf(wire.material, { ...candidate, wireDiameterMm: wire.wireDiameterMm }, request)
+}
+
+const NMM_PER_J = 1000
+
+/** Energy a spring holds at its greatest working load, J; nought where it has no load. */
+export function storedEnergyOf({ evaluation }: Pick<StoredDesign, 'evaluation'>): number {
+  if (evaluation.kind === 'torsion') {
+    const last = evaluation.points.at(-1)
+    return last ? storedEnergyJ(last.momentNmm, last.angleDeg) : 0
+  }
+  const last = evaluation.points.at(-1)
+  // Under the line from the force that opens the coils, or from nought, to the greatest.
+  const start = evaluation.kind === 'extension' ? evaluation.initialTensionN : 0
+  return last ? (start + last.forceN) / 2 * last.deflectionMm / NMM_PER_J : 0
 }
 
 const LENGTH_WORDS = { compression: 'long', extension: 'long inside its hooks', torsion: 'long in the body' } as const

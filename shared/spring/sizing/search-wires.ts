@@ -87,9 +87,9 @@ function bestOfWire<K extends SpringKind, W extends SizingWire>(prepared: Prepar
   const springs = prepared.search(wire, goal)
   let found: Ranked<W> | null = null
   for (const spring of springs) {
-    const { meanDiameterMm, activeCoils, totalCoils, freeLengthMm, wireLengthMm, massG, outerDiameterMm, stressMpa } = prepared.measure(wire, spring)
+    const { meanDiameterMm, activeCoils, totalCoils, freeLengthMm, wireLengthMm, massG, outerDiameterMm, initialTensionN, stressMpa } = prepared.measure(wire, spring)
     // Field by field: copies of objects by spreading take longer than the arithmetic.
-    const candidate = { wire, meanDiameterMm, activeCoils, totalCoils, freeLengthMm, wireLengthMm, massG, outerDiameterMm }
+    const candidate = { wire, meanDiameterMm, activeCoils, totalCoils, freeLengthMm, wireLengthMm, massG, outerDiameterMm, initialTensionN }
     const value = objective === 'mass' ? massG : objective === 'stress' ? stressMpa : objective(candidate)
     if (!Number.isFinite(value)) continue
     const ranked = { candidate, spring, value }

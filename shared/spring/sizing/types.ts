@@ -81,6 +81,8 @@ export interface SizingCandidate<W extends SizingWire = SizingWire> {
   readonly wireLengthMm: number
   readonly massG: number
   readonly outerDiameterMm: number
+  /** Of extension springs. */
+  readonly initialTensionN?: number | undefined
 }
 
 /** A spring that was found, of one kind. `spring` is what `evaluate` takes, points included. */

@@ -38,6 +38,7 @@ function prepare(request: ExtensionSizeRequest): PreparedSearch<'extension'> {
         wireLengthMm: extensionWireLengthMm(model, state),
         massG: extensionMassG(model, state),
         outerDiameterMm: spring.meanDiameterMm + model.wireDiameterMm,
+        initialTensionN: state.initialTensionN,
         stressMpa: shearStressMpa(greatestExtensionForceN(state), spring.meanDiameterMm, model.wireDiameterMm),
       }
     },
