@@ -16,6 +16,7 @@ export const CHROMIUM = '/usr/bin/chromium'
 export const TEST_PACKAGES = [
   { name: 'chromium', file: CHROMIUM },
   { name: 'calculix-ccx', file: '/usr/bin/ccx' },
+  { name: 'poppler-utils', file: '/usr/bin/pdftotext' },
   { name: 'fonts-dejavu-core', file: '/usr/share/fonts/truetype/dejavu/DejaVuSans.ttf' },
 ]
 

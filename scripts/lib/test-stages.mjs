@@ -47,7 +47,7 @@ async function prepareServices() {
   await ensureBuilt({ logFile: join(LOGS, 'build.log'), report: say })
 }
 
-async function prepareBrowser() {
+async function prepareServicesAndPrograms() {
   await prepareTestPrograms()
   await prepareServices()
 }
@@ -58,13 +58,13 @@ export const STAGES = /** @type {ReadonlyArray<Stage>} */ ([
   { name: 'types', minutes: 4, args: [projectPath('node_modules', 'nuxt', 'bin', 'nuxt.mjs'), 'typecheck'], report: null },
   vitestStage('unit', 5),
   vitestStage('reference', 5, prepareTestPrograms),
-  vitestStage('api', 8, prepareServices),
+  vitestStage('api', 8, prepareServicesAndPrograms),
   {
     name: 'e2e',
     minutes: 10,
     args: [projectPath('node_modules', '@playwright', 'test', 'cli.js'), 'test'],
     report: { path: projectPath('test-results', 'e2e.json'), count: countPlaywrightReport },
-    prepare: prepareBrowser,
+    prepare: prepareServicesAndPrograms,
   },
 ])
 
