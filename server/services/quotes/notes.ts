@@ -3,7 +3,7 @@ import type { StoredDesign } from '#shared/schemas/quote'
 import { getMaterial } from '#shared/spring/materials'
 
 /** What the first note says already, or what is ours to mind and not the customer's. */
-const NOT_FOR_CUSTOMERS: ReadonlySet<string> = new Set(['surroundings', 'stress-solid', 'clearance', 'wire-range', 'index'])
+const NOT_FOR_CUSTOMERS: ReadonlySet<string> = new Set(['surroundings', 'stress-solid', 'stress-hook-bending', 'stress-hook-torsion', 'clearance', 'wire-range', 'index'])
 
 /** How far it may go and how it hurts, by kind. */
 function handlingNotes(design: StoredDesign): string[] {
@@ -15,14 +15,19 @@ function handlingNotes(design: StoredDesign): string[] {
       const { greatestLengthMm } = design.evaluation
       return [
         greatestLengthMm === null ? 'Nothing in the spring stops it from being pulled too far: give it a stop.' : `Never pull it beyond ${down(greatestLengthMm)} mm inside the hooks: nothing in the spring stops it, so give it a stop.`,
-        'A hook that breaks or slips lets the spring fly: keep people out of its line, or guard it.',
+        'Pulled, it stores energy and flies when a hook slips or breaks: keep people out of its line, or guard it.',
       ]
     }
     case 'torsion': {
-      const { greatestAngleDeg } = design.evaluation
+      const { greatestAngleDeg, recommendedRodMm } = design.evaluation
+      const rodMm = design.spring.fit?.rodMm ?? design.spring.mandrelMm
+      const way = design.spring.loadOpens ? 'the way that opens it, as asked for' : 'the way that winds it up'
       return [
-        greatestAngleDeg === null ? 'Give it a stop, so that it is never turned too far.' : `Never turn it more than ${down(greatestAngleDeg)} degrees from free, and only the way that winds it up${design.spring.loadOpens ? ' unless as agreed' : ''}.`,
-        'A wound-up spring whips back when a leg slips: hold it with a tool, and wear eye protection.',
+        greatestAngleDeg === null ? `Turn it ${way} only, and give it a stop, so that it is never turned too far.` : `Turn it ${way} only, and never more than ${down(greatestAngleDeg)} degrees from free.`,
+        rodMm === undefined
+          ? `A rod through it may be ${down(recommendedRodMm)} mm thick at most: the coil grips a thicker one as it is turned.`
+          : `It clears a rod of ${rodMm} mm up to the greatest angle asked for.`,
+        'Turned, it stores energy and whips back when a leg slips: hold it with a tool, and wear eye protection.',
       ]
     }
   }
