@@ -56,12 +56,12 @@ async function prepareServicesAndPrograms() {
 export const STAGES = /** @type {ReadonlyArray<Stage>} */ ([
   { name: 'lint', minutes: 4, args: [projectPath('node_modules', 'eslint', 'bin', 'eslint.js'), '--max-warnings', '0', '.'], report: null },
   { name: 'types', minutes: 4, args: [projectPath('node_modules', 'nuxt', 'bin', 'nuxt.mjs'), 'typecheck'], report: null },
-  vitestStage('unit', 5),
-  vitestStage('reference', 5, prepareTestPrograms),
-  vitestStage('api', 8, prepareServicesAndPrograms),
+  vitestStage('unit', 8),
+  vitestStage('reference', 8, prepareTestPrograms),
+  vitestStage('api', 10, prepareServicesAndPrograms),
   {
     name: 'e2e',
-    minutes: 10,
+    minutes: 14,
     args: [projectPath('node_modules', '@playwright', 'test', 'cli.js'), 'test'],
     report: { path: projectPath('test-results', 'e2e.json'), count: countPlaywrightReport },
     prepare: prepareServicesAndPrograms,

@@ -22,10 +22,12 @@ export interface ModelAnswer {
   readonly judged: { readonly mass: number, readonly worstMiss: number } | null
 }
 
+/** Debian's own, which has Debian's package python3-scipy; another in the path may not. */
+const DEBIAN_PYTHON = '/usr/bin/python3'
 const SEARCH = fileURLToPath(new URL('./search.py', import.meta.url))
 
 /** Sizes by SciPy's differential evolution in the model written anew in Python. Throws with Python's words where it cannot. */
 export function sizeWithScipy(requests: readonly object[]): readonly ModelAnswer[] {
-  const output = execFileSync('python3', [SEARCH], { input: JSON.stringify({ requests }), encoding: 'utf8', env: { ...process.env, PYTHONDONTWRITEBYTECODE: '1' }, maxBuffer: 1 << 26 })
+  const output = execFileSync(DEBIAN_PYTHON, [SEARCH], { input: JSON.stringify({ requests }), encoding: 'utf8', env: { ...process.env, PYTHONDONTWRITEBYTECODE: '1' }, maxBuffer: 1 << 26 })
   return (JSON.parse(output) as { answers: ModelAnswer[] }).answers
 }

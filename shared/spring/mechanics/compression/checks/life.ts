@@ -5,7 +5,7 @@ import type { CompressionModel } from '../model'
 import { greatestForceN, leastForceN, statePitchMm, type CompressionState } from '../state'
 import { shearStressMpa } from '../../stress'
 import { stressCorrectionFactor } from '../../stress-factors'
-import { exceeds, fallsShort, finishCheck } from '../../checks/check'
+import { fallsShort, finishCheck } from '../../checks/check'
 import type { CompressionCheck } from './check'
 
 /** Corrected stress at the greatest working load and at the least (zero where there is one point), MPa. */
