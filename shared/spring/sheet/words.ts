@@ -32,6 +32,7 @@ const CHECKS: Readonly<Record<string, CheckWords>> = {
   'temperature': { name: 'Temperature', unit: 'temperature' },
   'resonance': { name: 'Resonance', unit: 'frequency' },
   'peening': { name: 'Shot peening', unit: 'length' },
+  'tangling': { name: 'Tangling in bulk', unit: 'length' },
   'surroundings': { name: 'Surroundings', unit: null },
   'winding': { name: 'Direction of the load', unit: null },
 }

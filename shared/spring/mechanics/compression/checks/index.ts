@@ -10,13 +10,14 @@ import { fatigueCheck, peeningCheck } from './life'
 import { coilsCheck } from './proportion'
 import { bucklingCheck, resonanceCheck } from './stability'
 import { stressSolidCheck, stressWorkingCheck } from './stress'
+import { tanglingCheck } from './tangling'
 import { clearanceCheck, orderCheck } from './travel'
 
 /** All checks of a compression spring, in the order they are shown. */
 export const COMPRESSION_CHECKS: readonly CompressionCheck[] = [
   wireRangeCheck, indexCheck, coilsCheck, orderCheck, clearanceCheck, stressSolidCheck, stressWorkingCheck, fatigueCheck,
   boreCheck, rodCheck, bucklingCheck, solidLengthCheck, freeLengthCheck, temperatureCheck, resonanceCheck, peeningCheck,
-  surroundingsCheck,
+  tanglingCheck, surroundingsCheck,
 ]
 
 /** True where no check of severity stop fails: the constraint of sizing. */
