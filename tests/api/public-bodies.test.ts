@@ -90,6 +90,30 @@ describe.each(Object.keys(ROUTES))('%s', (path) => {
   }, 400_000)
 })
 
+/** The same body with some of its numbers many times larger or smaller: most are well formed, and few springs can be made. */
+function otherNumbers(valid: Json): fc.Arbitrary<Json> {
+  const numbers = paths(valid).filter(path => typeof path.reduce<unknown>((value, key) => (value as Json)[key], valid) === 'number' && !path.includes('quantities') && path.at(-1) !== 'limit')
+  return fc.array(fc.tuple(fc.constantFrom(...numbers), fc.integer({ min: -15, max: 15 })), { minLength: 1, maxLength: 4 }).map(changes => changes.reduce(
+    (body, [path, power]) => withValue(body, path, Number((path.reduce<unknown>((value, key) => (value as Json)[key], body) as number * 10 ** (power / 10)).toPrecision(4))), valid,
+  ))
+}
+
+describe.each(Object.entries(ROUTES).filter(([path]) => /preview|springs/.test(path)))('%s', (path, valid) => {
+  it('answers springs of quite other sizes, each within the patience of a person', async () => {
+    const slow: unknown[] = []
+    const statuses = new Set<number>()
+    for (const body of fc.sample(otherNumbers(valid), { numRuns: path.includes('preview') ? 60 : 200, seed: SEED })) {
+      const from = performance.now()
+      const { status, text } = await send(path.split(' ')[0]!, body)
+      const ms = performance.now() - from
+      statuses.add(status)
+      if (ms > 15_000 || ![200, 422].includes(status)) slow.push({ ms, status, body: JSON.stringify(body), text: text.slice(0, 200) })
+    }
+    expect(slow, `seed ${SEED}`).toEqual([])
+    expect(statuses).toContain(200)
+  }, 400_000)
+})
+
 describe('the order form', () => {
   const enquire = async (requirement: object, who: object = contact) => {
     const { status, body } = await new Visitor().post<Problem>('/api/enquiries', { requirement, contact: who }, { 'idempotency-key': randomUUID() })
