@@ -135,7 +135,8 @@ function describeFatigue(model: ExtensionModel, state: ExtensionState): FatigueR
   const high = stressAtPlaceMpa(place, model, state, greatestExtensionForceN(state))
   const low = stressAtPlaceMpa(place, model, state, leastExtensionForceN(state))
   const amplitudeMpa = (high - low) / 2
-  if (!(amplitudeMpa > 0)) return null
+  // Hooks that cannot be bent have no stress to speak of: their own check stops them.
+  if (!(amplitudeMpa > 0) || !Number.isFinite(high) || !Number.isFinite(low)) return null
   const safetyFactor = extensionFatigueFactor(model, state)
   return {
     method: `Goodman line through Zimmerli's data, not peened, least in ${PLACE_WORDS[place]}`,

@@ -47,18 +47,20 @@ export const bodyLengthMm = (bodyCoils: number, wireDiameterMm: number): number 
 /** Active coils that two hooks are worth: G/E (Shigley, full hooks; taken for the other forms too). */
 export const hookCoils = (moduli: number): number => moduli
 
-/** Bending stress at the top of a hook, MPa for 1 N: (K)_A 16 D/(pi d^3) + 4/(pi d^2), C1 = 2 r1/d (Shigley). */
+/** Bending stress at the top of a hook, MPa for 1 N: (K)_A 16 D/(pi d^3) + 4/(pi d^2), C1 = 2 r1/d (Shigley); Infinity where the wire cannot be bent so tightly. */
 export function hookBendingMpaPerN(meanDiameterMm: number, wireDiameterMm: number, bendRadiusMm: number): number {
   const d = wireDiameterMm
   const c1 = (2 * bendRadiusMm) / d
+  if (!(c1 > 1)) return Infinity
   const factor = (4 * c1 * c1 - c1 - 1) / (4 * c1 * (c1 - 1))
   return (factor * 16 * meanDiameterMm) / (Math.PI * d * d * d) + 4 / (Math.PI * d * d)
 }
 
-/** Torsion where a hook leaves the body, MPa for 1 N: (4 C2 - 1)/(4 C2 - 4) 8 D/(pi d^3), C2 = 2 r2/d (Shigley). */
+/** Torsion where a hook leaves the body, MPa for 1 N: (4 C2 - 1)/(4 C2 - 4) 8 D/(pi d^3), C2 = 2 r2/d (Shigley); Infinity as above. */
 export function hookTorsionMpaPerN(meanDiameterMm: number, wireDiameterMm: number, sideBendRadiusMm: number): number {
   const d = wireDiameterMm
   const c2 = (2 * sideBendRadiusMm) / d
+  if (!(c2 > 1)) return Infinity
   return (((4 * c2 - 1) / (4 * c2 - 4)) * 8 * meanDiameterMm) / (Math.PI * d * d * d)
 }
 
