@@ -33,8 +33,12 @@ const OF_BERYLLIUM_COPPER: Partial<Record<OperationKind, string>> = {
   'end-grinding': 'Beryllium copper: never grind it dry; its dust harms the lungs. Wet, with extraction, by the shop’s own rules.',
 }
 
-/** The usual cautions at a work centre for a spring, common practice; the shop's own rules come first. */
-export function cautionsFor(operation: OperationKind, spring: { kind: SpringKind, material: MaterialCode } | null): string[] {
-  const more = spring ? [OF_KIND[spring.kind][operation], spring.material === 'ASTM-B197' ? OF_BERYLLIUM_COPPER[operation] : undefined] : []
-  return [...CAUTIONS[operation], ...more.filter(line => line !== undefined), 'The rules of this shop and of qualified people come first.']
+const LAST = 'The rules of this shop and of qualified people come first.'
+
+/** The usual cautions of operations on a spring, each once, common practice; the shop's own rules come first. */
+export function cautionsFor(operations: readonly OperationKind[], spring: { kind: SpringKind, material: MaterialCode } | null): string[] {
+  const lines = operations.flatMap(operation => [
+    ...CAUTIONS[operation], ...(spring ? [OF_KIND[spring.kind][operation], spring.material === 'ASTM-B197' ? OF_BERYLLIUM_COPPER[operation] : undefined] : []),
+  ])
+  return [...new Set([...lines.filter(line => line !== undefined), LAST])]
 }

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { requirementSchema, type RequirementInput } from '#shared/schemas/enquiry'
+import type { OperationKind } from '#shared/schemas/shop'
 import { evaluateSpring } from '#shared/spring/mechanics/evaluate-spring'
 import { checkSizeRequirement } from '#shared/spring/sizing'
 import { toSheet } from '#server/services/bench/sheet'
@@ -88,8 +89,11 @@ describe.each(['compression', 'extension', 'torsion'] as const)('a kept %s sprin
     expect('pitchMm' in sheet).toBe(kind === 'compression')
     expect('initialTensionN' in sheet).toBe(kind === 'extension')
     expect('legs' in sheet).toBe(kind === 'torsion')
-    const words = (['coiling', 'stress-relief', 'inspection', 'packing'] as const).map(centre => cautionsFor(centre, design))
+    const words = (['coiling', 'stress-relief', 'inspection', 'packing'] as const).map(centre => cautionsFor([centre], design))
     for (const lines of words) expect(lines.at(-1)).toMatch(/rules of this shop/)
+    const whole = cautionsFor(['coiling', 'stress-relief', 'inspection', 'packing'], design)
+    expect(new Set(whole).size).toBe(whole.length)
+    expect(whole.at(-1)).toMatch(/rules of this shop/)
     expect(words[2]!.join(' ')).toMatch({ compression: /pressed spring/, extension: /flies when a hook slips/, torsion: /whips back when a leg slips/ }[kind])
   })
 })
@@ -135,12 +139,12 @@ describe('materials', () => {
   })
 
   it('of beryllium warn of their dust wherever it may rise', () => {
-    const care = (centre: Parameters<typeof cautionsFor>[0], material: 'ASTM-B197' | 'ASTM-B159') => cautionsFor(centre, { kind: 'torsion', material }).join(' ')
+    const care = (centre: OperationKind, material: 'ASTM-B197' | 'ASTM-B159') => cautionsFor([centre], { kind: 'torsion', material }).join(' ')
     expect(care('coiling', 'ASTM-B197')).toMatch(/dust harms the lungs/)
     expect(care('end-grinding', 'ASTM-B197')).toMatch(/never grind it dry/)
     expect(care('stress-relief', 'ASTM-B197')).toMatch(/hold it on its fixture/)
     expect(care('end-grinding', 'ASTM-B159')).not.toMatch(/Beryllium/)
-    expect(cautionsFor('inspection', null).join(' ')).not.toMatch(/hook|leg/)
+    expect(cautionsFor(['inspection'], null).join(' ')).not.toMatch(/hook|leg/)
   })
 })
 
