@@ -16,6 +16,7 @@ import {
 import { shearStressMpa } from '../stress'
 import { stressCorrectionFactor } from '../stress-factors'
 import { modulusAtTemperatureMpa } from '../temperature'
+import { hasFatigueData } from '../fatigue-data'
 import type { FatigueResult, PointInput, PointResult } from '../types'
 import type { CompressionEvaluation, CompressionInput } from './types'
 
@@ -107,11 +108,12 @@ function describePoint(model: CompressionModel, state: CompressionState, factor:
 }
 
 function describeFatigue(model: CompressionModel, state: CompressionState): FatigueResult | null {
-  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa)) return null
+  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa) || !hasFatigueData(model)) return null
   const high = greatestCorrectedStressMpa(model, state)
   const low = leastCorrectedStressMpa(model, state)
   const amplitudeMpa = (high - low) / 2
-  if (!(amplitudeMpa > 0)) return null
+  // Drawn out beyond its free length it is no compression spring: the check of order stops it.
+  if (!(amplitudeMpa > 0) || low < 0) return null
   const safetyFactor = stateFatigueFactor(model, state)
   return {
     method: `Goodman line through Zimmerli's data, ${model.shotPeened ? 'shot peened' : 'not peened'}`,

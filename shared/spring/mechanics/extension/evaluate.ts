@@ -3,6 +3,7 @@ import { rateNPerMm } from '../rate'
 import { forceAtStressN, shearStressMpa } from '../stress'
 import { stressCorrectionFactor } from '../stress-factors'
 import { modulusAtTemperatureMpa } from '../temperature'
+import { hasFatigueData } from '../fatigue-data'
 import type { FatigueResult, PointInput, PointResult } from '../types'
 import type { EvaluationContext } from '../wire-model'
 import { describeExtensionAssumptions } from './assumptions'
@@ -130,13 +131,13 @@ function describePoint(model: ExtensionModel, state: ExtensionState, factor: num
 }
 
 function describeFatigue(model: ExtensionModel, state: ExtensionState): FatigueResult | null {
-  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa)) return null
+  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa) || !hasFatigueData(model)) return null
   const place = weakestPlace(model, state)
   const high = stressAtPlaceMpa(place, model, state, greatestExtensionForceN(state))
   const low = stressAtPlaceMpa(place, model, state, leastExtensionForceN(state))
   const amplitudeMpa = (high - low) / 2
-  // Hooks that cannot be bent have no stress to speak of: their own check stops them.
-  if (!(amplitudeMpa > 0) || !Number.isFinite(high) || !Number.isFinite(low)) return null
+  // Hooks that cannot be bent have no stress to speak of, and a spring shorter than free none at all: their own checks stop them.
+  if (!(amplitudeMpa > 0) || low < 0 || !Number.isFinite(high) || !Number.isFinite(low)) return null
   const safetyFactor = extensionFatigueFactor(model, state)
   return {
     method: `Goodman line through Zimmerli's data, not peened, least in ${PLACE_WORDS[place]}`,

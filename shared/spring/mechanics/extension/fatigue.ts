@@ -1,5 +1,6 @@
 import { bendingGoodmanFactor } from '../bending-fatigue'
 import { goodmanZimmerliFactor } from '../fatigue'
+import { hasLifeFractions } from '../fatigue-data'
 import { shearStressMpa } from '../stress'
 import { stressCorrectionFactor } from '../stress-factors'
 import type { ExtensionModel } from './model'
@@ -58,12 +59,12 @@ function fractionAt(place: FatiguePlace, cycles: number): number {
 }
 
 /**
- * Least factor of the published fractions, stress from zero to the greatest load; null under 1e5 strokes, where none are
- * published. A least load above nought is not counted, which is safe.
+ * Least factor of the published fractions, stress from zero to the greatest load; null for lives under 1e5 strokes and wire they
+ * are not published for, and without a pull. A least load above nought is not counted, which is safe.
  */
 export function extensionLifeFractionFactor(model: ExtensionModel, state: ExtensionState): number | null {
-  if (model.cycles < 1e5) return null
   const force = greatestExtensionForceN(state)
+  if (model.cycles < 1e5 || !hasLifeFractions(model) || !(force > 0)) return null
   const places: readonly FatiguePlace[] = ['body', 'hook-bending', 'hook-torsion']
   return Math.min(...places.map(place => (fractionAt(place, model.cycles) * model.tensileStrengthMpa) / stressAtPlaceMpa(place, model, state, force)))
 }

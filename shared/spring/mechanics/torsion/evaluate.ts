@@ -1,5 +1,6 @@
 import { describeAll } from '../checks/check'
 import { modulusAtTemperatureMpa } from '../temperature'
+import { hasFatigueData } from '../fatigue-data'
 import type { FatigueResult } from '../types'
 import type { EvaluationContext } from '../wire-model'
 import { describeTorsionAssumptions } from './assumptions'
@@ -99,7 +100,7 @@ function describePoint(model: TorsionModel, state: TorsionState, factor: number,
 }
 
 function describeFatigue(model: TorsionModel, state: TorsionState): FatigueResult | null {
-  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa)) return null
+  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa) || !hasFatigueData(model)) return null
   const high = correctedBendingMpa(model, state, greatestMomentNmm(state))
   const low = correctedBendingMpa(model, state, leastMomentNmm(state))
   const amplitudeMpa = (high - low) / 2

@@ -1,5 +1,5 @@
 import { FATIGUE_CYCLES, goodmanZimmerliFactor, lifeFractionFactor } from '../../fatigue'
-import { fatigueDataProblem, hasFatigueData } from '../../fatigue-data'
+import { fatigueDataProblem, hasFatigueData, hasLifeFractions, lifeFractionWords } from '../../fatigue-data'
 import { figure } from '../../figure'
 import type { CompressionModel } from '../model'
 import { greatestForceN, leastForceN, statePitchMm, type CompressionState } from '../state'
@@ -26,8 +26,9 @@ export function stateFatigueFactor(model: CompressionModel, state: CompressionSt
   return goodmanZimmerliFactor((high - low) / 2, (high + low) / 2, model.tensileStrengthMpa, model.shotPeened)
 }
 
-/** Safety factor by published fractions of tensile strength; null outside their lives. */
+/** Safety factor by published fractions of tensile strength; null for lives and wire they are not published for. */
 export function stateLifeFractionFactor(model: CompressionModel, state: CompressionState): number | null {
+  if (!hasLifeFractions(model)) return null
   const high = greatestCorrectedStressMpa(model, state)
   const low = leastCorrectedStressMpa(model, state)
   return lifeFractionFactor((high - low) / 2, (high + low) / 2, model.tensileStrengthMpa, model.cycles, model.shotPeened)
@@ -46,7 +47,7 @@ export const fatigueCheck: CompressionCheck = {
     const second = stateLifeFractionFactor(model, state)
     const differs = second !== null && (second >= 1) !== (factor >= 1)
     const says = `Fatigue safety factor ${figure(factor)} (Goodman through Zimmerli's data, ${model.shotPeened ? 'shot peened' : 'not peened'}, unlimited life)`
-    const other = second === null ? '' : ` By published fractions of tensile strength at ${figure(model.cycles)} strokes it is ${figure(second)}.`
+    const other = lifeFractionWords(second, model.cycles)
     return finishCheck(
       'fatigue',
       { stop: fatigueCheck.stops(model, state), caution: factor < FATIGUE_CAUTION || differs },
