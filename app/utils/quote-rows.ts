@@ -9,6 +9,8 @@ import { ENDS_WORDS, HOOK_CHOICES, LEG_CHOICES } from './choice-words'
 export type QuoteRow = { name: string, symbol: string, value: string, limit: string, isWide?: boolean }
 type Duty = { strokes: number, strokesPerMinute: number }
 
+/** A limit is written rounded down to a tenth, never up, as the notes beside it are. */
+const atMost = (value: number): number => Math.floor(value * 10) / 10
 const ORDINALS = ['First', 'Second', 'Third', 'Fourth', 'Fifth', 'Sixth']
 const NO_UNIT = { unit: false }
 /** Coil counts with no more places than they have. */
@@ -94,7 +96,7 @@ function extensionRows(design: StoredDesignOf<'extension'>, units: UnitSystem, d
     { name: 'Length of the body', symbol: 'L_K', value: pen.length(evaluation.bodyLengthMm), limit: '' },
     { name: 'Initial tension', symbol: 'F_0', value: formatForce(evaluation.initialTensionN, units), limit: '' },
     ...points.map((point, at): QuoteRow => ({ name: loadName(points.length, at, formatLength(point.lengthMm, units)), symbol: `F_${at + 1}`, value: formatForce(point.forceN, units), limit: 'for agreement' })),
-    ...(evaluation.greatestLengthMm === null || evaluation.greatestForceN === null ? [] : [{ name: 'Never pull beyond', symbol: 'L_n', value: pen.length(evaluation.greatestLengthMm), limit: formatForce(evaluation.greatestForceN, units) }]),
+    ...(evaluation.greatestLengthMm === null || evaluation.greatestForceN === null ? [] : [{ name: 'Never pull beyond', symbol: 'L_n', value: pen.length(atMost(evaluation.greatestLengthMm)), limit: formatForce(evaluation.greatestForceN, units) }]),
     { name: 'Rate', symbol: 'R', value: formatRate(evaluation.rateNPerMm, units), limit: '' },
     ...(points.length > 0 ? [{ name: points.length > 1 ? 'Stress at the loads' : 'Stress at the load', symbol: indexed('τ_', points.length), value: pen.stresses(points.map(point => point.stressMpa)), limit: allowed(evaluation.allowableStressMpa, pen) }] : []),
     ...hookRow('Bending in the hooks', 'σ_A', evaluation.hookBendingStressMpa, evaluation.hookBendingLimitMpa),
@@ -116,12 +118,12 @@ function torsionRows(design: StoredDesignOf<'torsion'>, units: UnitSystem, duty:
     ...points.map((point, at): QuoteRow => ({
       name: loadName(points.length, at, `${formatAngle(point.angleDeg)} from free`, 'moment'), symbol: `M_${at + 1}`, value: formatMoment(point.momentNmm, units), limit: pen.plusMinus(`moment${at + 1}Nmm`, moment => formatMoment(moment, units)),
     })),
-    ...(evaluation.greatestAngleDeg === null || evaluation.greatestMomentNmm === null ? [] : [{ name: 'Never turn beyond', symbol: 'α_n', value: formatAngle(evaluation.greatestAngleDeg), limit: formatMoment(evaluation.greatestMomentNmm, units) }]),
+    ...(evaluation.greatestAngleDeg === null || evaluation.greatestMomentNmm === null ? [] : [{ name: 'Never turn beyond', symbol: 'α_n', value: formatAngle(atMost(evaluation.greatestAngleDeg)), limit: formatMoment(evaluation.greatestMomentNmm, units) }]),
     { name: 'Rate', symbol: 'R', value: formatMomentRate(evaluation.rateNmmPerDeg, units), limit: '' },
     ...(points.length > 0
       ? [
           { name: 'Bending stress', symbol: indexed('σ_', points.length), value: pen.stresses(points.map(point => point.bendingStressMpa)), limit: allowed(evaluation.allowableStressMpa, pen) },
-          { name: 'Inside when turned', symbol: 'D_i', value: points.map(point => pen.fine(point.innerDiameterAtPointMm)).join(', '), limit: `rod up to ${pen.length(evaluation.recommendedRodMm)}` },
+          { name: 'Inside when turned', symbol: 'D_i', value: points.map(point => pen.fine(point.innerDiameterAtPointMm)).join(', '), limit: `rod up to ${pen.length(atMost(evaluation.recommendedRodMm))}` },
         ]
       : []),
     ...dutyRows(design, units, duty),

@@ -2,8 +2,8 @@ import type { Requirement } from '#shared/schemas/enquiry'
 import type { StoredDesign } from '#shared/schemas/quote'
 import { getMaterial } from '#shared/spring/materials'
 
-/** What the first note says already, or what is ours to mind and not the customer's. */
-const NOT_FOR_CUSTOMERS: ReadonlySet<string> = new Set(['surroundings', 'stress-solid', 'stress-hook-bending', 'stress-hook-torsion', 'clearance', 'wire-range', 'index'])
+/** What another note or the sheet says already, or what is ours to mind and not the customer's. */
+const NOT_FOR_CUSTOMERS: ReadonlySet<string> = new Set(['surroundings', 'stress-solid', 'stress-working', 'stress-hook-bending', 'stress-hook-torsion', 'clearance', 'wire-range', 'index'])
 
 /** How far it may go and how it hurts, by kind. */
 function handlingNotes(design: StoredDesign): string[] {
