@@ -2,6 +2,7 @@ import { fileURLToPath } from 'node:url'
 import type { NitroConfig } from 'nitropack/types'
 import { compileMailComponents } from './emails/compile-sfc'
 import { listApiRoutes } from './vite/api-routes'
+import { bundleThread } from './vite/bundle-thread'
 import { leanEntry } from './vite/lean-entry'
 import { slimFormKit } from './vite/slim-formkit'
 
@@ -14,7 +15,10 @@ const nitro: Pick<NitroConfig, 'compressPublicAssets' | 'experimental' | 'schedu
   // Each process claims its work in the database, so several processes may run these side by side.
   scheduledTasks: { '*/5 * * * *': ['payments:reconcile'], '17 * * * *': ['housekeeping'] },
   rollupConfig: { plugins: [compileMailComponents()] },
-  virtual: { '#api-routes': () => `export default ${JSON.stringify(listApiRoutes(fileURLToPath(new URL('./server/api', import.meta.url))))}` },
+  virtual: {
+    '#api-routes': () => `export default ${JSON.stringify(listApiRoutes(fileURLToPath(new URL('./server/api', import.meta.url))))}`,
+    '#sizing-thread': async () => `export default ${JSON.stringify(await bundleThread(fileURLToPath(new URL('./server/threads/sizing.ts', import.meta.url))))}`,
+  },
 }
 
 export default defineNuxtConfig({

@@ -1,6 +1,5 @@
 import { formatDay } from '~/utils/day-words'
-import { EXAMPLE_NEED, EXAMPLE_SPRING } from '~/utils/example-spring'
-import { pressProps } from '~/utils/design-drawing'
+import { EXAMPLE_COMPRESSION } from '~/utils/example-spring'
 import { convertDraft, emptyDraft, previewBody, readDraft } from '~/utils/order-draft'
 import type { TitleCell } from '~/utils/title-cell'
 import { formatWireDiameter } from '#shared/units/format'
@@ -24,20 +23,21 @@ export function useFirstQuestion() {
   })
 
   const isTyped = computed(() => Object.values(typed).some(text => text.trim() !== ''))
-  const press = computed(() => view.value?.design ? pressProps(view.value.design) : null)
+  const design = computed(() => view.value?.design ?? null)
   const words = computed(() => preview.isAsking.value ? 'Working it out…'
     : preview.error.value ? preview.error.value.detail
       : view.value?.conflict ? 'No spring of ours does this as it stands. Go on, and we say what would make it possible.'
-        : press.value ? 'Drawn to scale from your two loads.'
+        : design.value ? 'Drawn to scale from your two loads.'
           : Object.values(read.value.faults)[0] ?? 'An example: 60 N at 50 mm and 150 N at 35 mm. Type your own, and it follows.')
 
   const cells = computed<TitleCell[]>(() => {
-    const spring = press.value ?? EXAMPLE_SPRING
+    const { spring } = EXAMPLE_COMPRESSION
+    const { wireDiameterMm, totalCoils } = design.value ?? spring
     const rungs = view.value?.ladder ?? []
     const last = rungs.at(-1)
     return [
-      { label: 'Wire', value: `${formatWireDiameter(spring.wireDiameterMm, units.system)}${view.value?.design ? `, ${view.value.design.materialName}` : ', spring steel'}`, span: 6 },
-      { label: 'Coils', value: `${Number(spring.totalCoils.toFixed(2))}, ground ends`, span: 6 },
+      { label: 'Wire', value: `${formatWireDiameter(wireDiameterMm, units.system)}${view.value?.design ? `, ${view.value.design.materialName}` : ', spring steel'}`, span: 6 },
+      { label: 'Coils', value: `${Number(totalCoils.toFixed(2))}, ground ends`, span: 6 },
       ...rungs.map((rung): TitleCell => ({ label: `${count(rung.quantity)} springs`, value: `${each(rung.unitPrice)} each`, span: 4 })),
       ...(last?.dispatchOn ? [{ label: `${count(last.quantity)} can leave`, value: formatDay(last.dispatchOn), span: 4 as const }] : []),
     ]
@@ -48,9 +48,9 @@ export function useFirstQuestion() {
     const store = useOrderDraftStore()
     store.recall()
     store.convertTo(units.system)
-    store.draft = { ...store.draft, ...(isTyped.value ? { knows: EXAMPLE_NEED.knows, ...typed } : {}) }
+    store.draft = { ...store.draft, ...(isTyped.value ? { kind: 'compression' as const, knows: 'two-loads' as const, ...typed } : {}) }
     store.keep(new Date())
     await navigateTo('/order')
   }
-  return { typed, press, words, cells, goOn }
+  return { typed, design, words, cells, goOn }
 }

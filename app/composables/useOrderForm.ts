@@ -1,9 +1,9 @@
 import { getNode } from '@formkit/core'
 import type { ConflictView } from '#shared/schemas/quote'
 import { unitSymbol } from '#shared/units/convert'
-import { EXAMPLE_NEED } from '~/utils/example-spring'
+import { EXAMPLE_NEEDS } from '~/utils/example-spring'
 import { formatWeekday } from '~/utils/day-words'
-import { missingFields, previewBody, readDraft, typedNumber, type OrderDraft } from '~/utils/order-draft'
+import { isChoice, missingFields, previewBody, readDraft, typedNumber, type OrderDraft } from '~/utils/order-draft'
 import { ORDER_FIELDS, orderFieldId, quantityOf, type OrderFieldName } from '~/utils/order-fields'
 import { ORDER_READ_KEY } from '~/utils/order-keys'
 import { openItems } from '~/utils/order-open'
@@ -81,7 +81,7 @@ export function useOrderForm() {
   /** Makes one of the changes that would give a spring, in the units of the form. */
   function applyChange({ path, to }: ConflictView['changes'][number]): void {
     const field = fieldOfChange(path)
-    if (!field || field === 'certificate' || field === 'knows') return
+    if (!field || isChoice(field)) return
     const quantity = quantityOf(field)
     const text = typeof to === 'number' && quantity ? typedNumber(to, quantity, store.units) : String(to)
     if (typeof to === 'number' && quantity) store.written = { ...store.written, [field]: { text, valueSi: to } }
@@ -120,14 +120,16 @@ export function useOrderForm() {
     neededOn: computed(() => typeof read.value.requirement.neededOn === 'string' ? read.value.requirement.neededOn : ''),
     dayReading: computed(() => typeof read.value.requirement.neededOn === 'string' ? formatWeekday(read.value.requirement.neededOn) : ''),
     setNeededOn: (day: string) => change({ neededOn: formatDay(day) }),
-    useExample: () => change({ ...EXAMPLE_NEED, ...exampleInUnits(store.units) }),
+    useExample: () => change({ kind: store.draft.kind, ...exampleInUnits(EXAMPLE_NEEDS[store.draft.kind], store.units) }),
     startAgain: () => { submit.outcome.value = null },
   }
 }
 
-function exampleInUnits(units: 'metric' | 'inch'): Partial<OrderDraft> {
-  if (units === 'metric') return {}
-  return {
-    firstForce: typedNumber(60, 'force', units), firstLength: typedNumber(50, 'length', units), secondForce: typedNumber(150, 'force', units), secondLength: typedNumber(35, 'length', units),
-  }
+/** The example's numbers, which are metric, as they are typed in the units of the form. */
+function exampleInUnits(example: Partial<OrderDraft>, units: 'metric' | 'inch'): Partial<OrderDraft> {
+  if (units === 'metric') return example
+  return Object.fromEntries(Object.entries(example).map(([field, text]) => {
+    const quantity = quantityOf(field as OrderFieldName)
+    return [field, quantity ? typedNumber(Number(text), quantity, units) : text]
+  }))
 }

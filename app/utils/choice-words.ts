@@ -1,4 +1,4 @@
-import type { CompressionEnds, MaterialCode, Surroundings, ToleranceGrade } from '#shared/spring/codes'
+import type { CompressionEnds, HookForm, LegForm, MaterialCode, SpringKind, Surroundings, ToleranceGrade } from '#shared/spring/codes'
 
 /** The choices of the order form in plain words; also how the quote says what was chosen. */
 export const SURROUNDINGS_WORDS: Readonly<Record<Surroundings, string>> = {
@@ -7,6 +7,12 @@ export const SURROUNDINGS_WORDS: Readonly<Record<Surroundings, string>> = {
 export const ENDS_WORDS: Readonly<Record<CompressionEnds, string>> = {
   'closed-ground': 'Closed and ground', 'closed': 'Closed, not ground', 'open': 'Open', 'open-ground': 'Open and ground',
 }
+export const KIND_WORDS: Readonly<Record<SpringKind, string>> = { compression: 'Compression spring', extension: 'Extension spring', torsion: 'Torsion spring' }
+export const HOOK_CHOICES: Readonly<Record<HookForm, string>> = {
+  'full-loop': 'A whole loop over the middle', 'half-loop': 'Half a loop, short', 'crossover-loop': 'A loop crossed to the middle', 'extended-hook': 'A hook on a straight piece',
+}
+export const LEG_CHOICES: Readonly<Record<LegForm, string>> = { tangential: 'Straight off the coil', straight: 'Along the axis' }
+export const LOAD_CHOICES = { 'winds-up': 'The load winds it up, as it should', 'opens': 'The load opens it' } as const
 export const TOLERANCE_WORDS: Readonly<Record<ToleranceGrade, string>> = { 1: 'Grade 1, fine', 2: 'Grade 2, usual', 3: 'Grade 3, coarse' }
 export const HAND_WORDS = { either: 'Either', right: 'Right', left: 'Left' } as const
 
@@ -23,4 +29,6 @@ export const MATERIAL_WORDS: Readonly<Record<MaterialCode, string>> = {
   'ASTM-A232': 'Chrome vanadium: ASTM A232',
   'ASTM-A401': 'Chrome silicon: ASTM A401',
   'ASTM-A313-302': 'Stainless steel: ASTM A313, type 302',
+  'ASTM-B159': 'Phosphor bronze: ASTM B159',
+  'ASTM-B197': 'Beryllium copper: ASTM B197',
 }

@@ -2,13 +2,13 @@ import type { Requirement } from '#shared/schemas/enquiry'
 import { formatNumber } from '#shared/units/format'
 import type { UnitSystem } from '#shared/units/convert'
 import { formatDay } from './day-words'
-import { typedNumber, type OrderDraft, type WrittenBySystem } from './order-draft'
+import { isChoice, typedNumber, type OrderDraft, type WrittenBySystem } from './order-draft'
 import { QUANTITY_FIELDS, quantityOf, type OrderFieldName } from './order-fields'
 
 /** What was asked for once, as it would be typed again in `units`: to change something, or to order anew. */
 export function draftOfRequirement(requirement: Requirement, units: UnitSystem): { draft: Partial<OrderDraft>, written: WrittenBySystem } {
   const draft: Partial<OrderDraft> = {
-    knows: requirement.need.knows, hand: requirement.hand, surroundings: requirement.surroundings, couldHurt: requirement.couldHurt, material: requirement.material, ends: requirement.ends,
+    ...kindOf(requirement), hand: requirement.hand, surroundings: requirement.surroundings, couldHurt: requirement.couldHurt, material: requirement.material,
     toleranceGrade: String(requirement.toleranceGrade), certificate: requirement.certificate, strokes: formatNumber(requirement.strokes), strokesPerMinute: requirement.strokesPerMinute ? String(requirement.strokesPerMinute) : '',
     neededOn: requirement.neededOn ? formatDay(requirement.neededOn) : '',
   }
@@ -16,7 +16,7 @@ export function draftOfRequirement(requirement: Requirement, units: UnitSystem):
   const written: WrittenBySystem = {}
   for (const [field, valueSi] of Object.entries(sizesOf(requirement)) as [OrderFieldName, number | undefined][]) {
     const quantity = quantityOf(field)
-    if (!quantity || field === 'knows' || field === 'certificate') continue
+    if (!quantity || isChoice(field)) continue
     const text = valueSi === undefined ? '' : typedNumber(valueSi, quantity, units)
     draft[field] = text
     if (valueSi !== undefined) written[field] = { text, valueSi }
@@ -24,9 +24,36 @@ export function draftOfRequirement(requirement: Requirement, units: UnitSystem):
   return { draft, written }
 }
 
-function sizesOf({ need, boreMm, rodMm, maxFreeLengthMm, maxSolidLengthMm, coldestC, hottestC }: Requirement): Partial<Record<OrderFieldName, number | undefined>> {
-  const fit = { bore: boreMm, rod: rodMm, longest: maxFreeLengthMm, shortestRoom: maxSolidLengthMm, coldest: coldestC, hottest: hottestC }
-  if (need.knows === 'two-loads') return { ...fit, firstForce: need.first.forceN, firstLength: need.first.lengthMm, secondForce: need.second.forceN, secondLength: need.second.lengthMm }
-  if (need.knows === 'load-and-rate') return { ...fit, firstForce: need.load.forceN, firstLength: need.load.lengthMm, rate: need.rateNPerMm }
-  return { ...fit, rate: need.rateNPerMm, freeLength: need.freeLengthMm, shortestLength: need.shortestLengthMm }
+function kindOf(requirement: Requirement): Partial<OrderDraft> {
+  switch (requirement.kind) {
+    case 'compression': return { kind: 'compression', knows: requirement.need.knows, ends: requirement.ends }
+    case 'extension': return { kind: 'extension', knowsExtension: requirement.need.knows, hook: requirement.hook }
+    case 'torsion': return { kind: 'torsion', knowsTorsion: requirement.need.knows, legForm: requirement.legForm, load: requirement.load }
+  }
+}
+
+type Sizes = Partial<Record<OrderFieldName, number | undefined>>
+
+function sizesOf(requirement: Requirement): Sizes {
+  const { boreMm, rodMm, maxFreeLengthMm, coldestC, hottestC } = requirement
+  const common = { bore: boreMm, rod: rodMm, longest: maxFreeLengthMm, coldest: coldestC, hottest: hottestC }
+  switch (requirement.kind) {
+    case 'compression': return { ...common, shortestRoom: requirement.maxSolidLengthMm, ...loadSizes(requirement.need) }
+    case 'extension': return { ...common, ...loadSizes(requirement.need) }
+    case 'torsion': return { ...common, firstLeg: requirement.firstLegMm, secondLeg: requirement.secondLegMm, ...momentSizes(requirement.need) }
+  }
+}
+
+function loadSizes(need: Extract<Requirement, { kind: 'compression' | 'extension' }>['need']): Sizes {
+  switch (need.knows) {
+    case 'two-loads': return { firstForce: need.first.forceN, firstLength: need.first.lengthMm, secondForce: need.second.forceN, secondLength: need.second.lengthMm }
+    case 'load-and-rate': return { firstForce: need.load.forceN, firstLength: need.load.lengthMm, rate: need.rateNPerMm }
+    case 'load-and-length': return { firstForce: need.load.forceN, firstLength: need.load.lengthMm, freeLength: need.freeLengthMm }
+    case 'rate-and-length': return { rate: need.rateNPerMm, freeLength: need.freeLengthMm, shortestLength: need.shortestLengthMm }
+  }
+}
+
+function momentSizes(need: Extract<Requirement, { kind: 'torsion' }>['need']): Sizes {
+  if (need.knows === 'two-moments') return { firstMoment: need.first.momentNmm, firstAngle: need.first.angleDeg, secondMoment: need.second.momentNmm, secondAngle: need.second.angleDeg }
+  return { firstMoment: need.load.momentNmm, firstAngle: need.load.angleDeg, ...(need.knows === 'moment-and-rate' ? { turnRate: need.rateNmmPerDeg } : {}) }
 }

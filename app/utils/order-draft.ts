@@ -1,15 +1,21 @@
-import type { RequirementInput } from '#shared/schemas/enquiry'
+import type { CompressionNeed, ExtensionNeed, TorsionNeed } from '#shared/schemas/enquiry'
+import type { SpringKind } from '#shared/spring/codes'
 import type { CountryCode } from '#shared/countries'
 import { fromSi, type Quantity, type UnitSystem } from '#shared/units/convert'
 import { parseNumber, parseQuantity } from '#shared/units/parse'
 import { parseDay } from './day-words'
-import { ORDER_FIELD_NAMES, QUANTITY_FIELDS, quantityOf, type OrderFieldName } from './order-fields'
+import { ORDER_FIELD_NAMES, QUANTITY_FIELDS, quantityOf, type OrderChoiceName, type OrderFieldName } from './order-fields'
+import { knowsOf, NEED_FIELDS, needFieldsOf, NEED_PATHS, readNeed } from './order-need'
 
 /** The order form as typed: text in the units the person uses. */
-export type OrderDraft = Record<Exclude<OrderFieldName, 'certificate' | 'knows'>, string> & { certificate: boolean, knows: RequirementInput['need']['knows'], website: string }
+export type OrderDraft = Record<Exclude<OrderFieldName, OrderChoiceName>, string> & {
+  kind: SpringKind, certificate: boolean, knows: CompressionNeed['knows'], knowsExtension: ExtensionNeed['knows'], knowsTorsion: TorsionNeed['knows'], website: string,
+}
 
 export const emptyDraft = (): OrderDraft => ({
-  knows: 'two-loads', firstForce: '', firstLength: '', secondForce: '', secondLength: '', rate: '', freeLength: '', shortestLength: '',
+  kind: 'compression', knows: 'two-loads', knowsExtension: 'two-loads', knowsTorsion: 'two-moments',
+  firstForce: '', firstLength: '', secondForce: '', secondLength: '', rate: '', freeLength: '', shortestLength: '',
+  firstMoment: '', firstAngle: '', secondMoment: '', secondAngle: '', turnRate: '', firstLeg: '', secondLeg: '', legForm: 'tangential', load: 'winds-up', hook: 'full-loop',
   bore: '', rod: '', longest: '', shortestRoom: '', hand: 'either',
   surroundings: 'dry', coldest: '', hottest: '', strokes: '10 000', strokesPerMinute: '', couldHurt: '',
   material: 'any', ends: 'closed-ground', toleranceGrade: '2', certificate: false,
@@ -23,13 +29,13 @@ export const PERSONAL_FIELDS = ['title', 'name', 'firm', 'email', 'vatNumber', '
 /** Text that a change of units wrote, with the exact SI value behind it, so that going back and forth loses nothing. */
 export type WrittenBySystem = Partial<Record<OrderFieldName, { text: string, valueSi: number }>>
 
-/** Fields that are needed for what the customer knows. */
-export const NEED_FIELDS: Readonly<Record<OrderDraft['knows'], readonly OrderFieldName[]>> = {
-  'two-loads': ['firstForce', 'firstLength', 'secondForce', 'secondLength'],
-  'load-and-rate': ['firstForce', 'firstLength', 'rate'],
-  'rate-and-length': ['rate', 'freeLength', 'shortestLength'],
-}
 const ALL_NEED_FIELDS = new Set<OrderFieldName>(Object.values(NEED_FIELDS).flat())
+
+/** True for a field that the draft's kind and way of knowing do not ask for: what stands in it is left alone. */
+function isIdle(field: OrderFieldName, draft: OrderDraft): boolean {
+  if (ALL_NEED_FIELDS.has(field)) return !needFieldsOf(draft).includes(field)
+  return field === 'shortestRoom' && draft.kind !== 'compression'
+}
 
 /** A draft as read: the request's body, not yet validated; what could not be read; and which field each path of the body came from. */
 export type ReadDraft = {
@@ -48,7 +54,7 @@ export function readDraft(draft: OrderDraft, { units, today, written = {} }: { u
 
   for (const field of ORDER_FIELD_NAMES) {
     const quantity = quantityOf(field)
-    if (!quantity || (ALL_NEED_FIELDS.has(field) && !NEED_FIELDS[draft.knows].includes(field))) continue
+    if (!quantity || isIdle(field, draft)) continue
     const text = String(draft[field])
     if (text.trim() === '') continue
     const kept = written[field]
@@ -64,7 +70,7 @@ export function readDraft(draft: OrderDraft, { units, today, written = {} }: { u
     return parsed.ok ? parsed.value : undefined
   }
 
-  const fieldOfPath: ReadDraft['fieldOfPath'] = { ...PATHS, ...NEED_PATHS[draft.knows] }
+  const fieldOfPath: ReadDraft['fieldOfPath'] = { ...PATHS, ...NEED_PATHS[`${draft.kind}:${knowsOf(draft)}`] }
   const quantities: number[] = []
   for (const field of QUANTITY_FIELDS) {
     const quantity = count(field)
@@ -76,11 +82,11 @@ export function readDraft(draft: OrderDraft, { units, today, written = {} }: { u
   if (day && !day.ok) faults.neededOn = day.message
 
   const requirement = {
-    kind: 'compression', need: readNeed(draft.knows, valuesSi),
-    boreMm: valuesSi.bore, rodMm: valuesSi.rod, maxFreeLengthMm: valuesSi.longest, maxSolidLengthMm: valuesSi.shortestRoom, hand: draft.hand,
+    kind: draft.kind, need: readNeed(draft, valuesSi),
+    boreMm: valuesSi.bore, rodMm: valuesSi.rod, maxFreeLengthMm: valuesSi.longest, hand: draft.hand,
     surroundings: draft.surroundings, coldestC: valuesSi.coldest, hottestC: valuesSi.hottest, strokes: count('strokes'), strokesPerMinute: count('strokesPerMinute'),
-    couldHurt: draft.couldHurt || undefined, material: draft.material, ends: draft.ends, toleranceGrade: Number(draft.toleranceGrade), certificate: draft.certificate,
-    quantities, neededOn: day?.ok ? day.day : undefined,
+    couldHurt: draft.couldHurt || undefined, material: draft.material, toleranceGrade: Number(draft.toleranceGrade), certificate: draft.certificate,
+    quantities, neededOn: day?.ok ? day.day : undefined, ...kindPart(draft, valuesSi),
   }
   const contact = {
     title: draft.title, name: draft.name, firm: draft.firm, email: draft.email, countryCode: draft.country, vatNumber: draft.vatNumber.trim() || undefined, remarks: draft.remarks,
@@ -88,27 +94,22 @@ export function readDraft(draft: OrderDraft, { units, today, written = {} }: { u
   return { requirement, contact, faults, valuesSi, fieldOfPath }
 }
 
-function readNeed(knows: OrderDraft['knows'], { firstForce, firstLength, secondForce, secondLength, rate, freeLength, shortestLength }: ReadDraft['valuesSi']): Record<string, unknown> {
-  const first = { forceN: firstForce, lengthMm: firstLength }
-  if (knows === 'two-loads') return { knows, first, second: { forceN: secondForce, lengthMm: secondLength } }
-  return knows === 'load-and-rate' ? { knows, load: first, rateNPerMm: rate } : { knows, rateNPerMm: rate, freeLengthMm: freeLength, shortestLengthMm: shortestLength }
+function kindPart(draft: OrderDraft, { shortestRoom, firstLeg, secondLeg }: ReadDraft['valuesSi']): Record<string, unknown> {
+  switch (draft.kind) {
+    case 'compression': return { maxSolidLengthMm: shortestRoom, ends: draft.ends }
+    case 'extension': return { hook: draft.hook }
+    case 'torsion': return { firstLegMm: firstLeg, secondLegMm: secondLeg, legForm: draft.legForm, load: draft.load }
+  }
 }
 
 const PATHS: Record<string, OrderFieldName> = {
   'requirement.boreMm': 'bore', 'requirement.rodMm': 'rod', 'requirement.maxFreeLengthMm': 'longest', 'requirement.maxSolidLengthMm': 'shortestRoom', 'requirement.hand': 'hand',
   'requirement.surroundings': 'surroundings', 'requirement.coldestC': 'coldest', 'requirement.hottestC': 'hottest', 'requirement.strokes': 'strokes', 'requirement.strokesPerMinute': 'strokesPerMinute',
   'requirement.couldHurt': 'couldHurt', 'requirement.material': 'material', 'requirement.ends': 'ends', 'requirement.toleranceGrade': 'toleranceGrade', 'requirement.certificate': 'certificate',
-  'requirement.quantities': 'quantity1', 'requirement.neededOn': 'neededOn', 'requirement.need.knows': 'knows', 'requirement.need': 'knows', 'requirement.kind': 'knows',
+  'requirement.quantities': 'quantity1', 'requirement.neededOn': 'neededOn', 'requirement.need.knows': 'knows', 'requirement.need': 'knows', 'requirement.kind': 'kind',
+  'requirement.hook': 'hook', 'requirement.firstLegMm': 'firstLeg', 'requirement.secondLegMm': 'secondLeg', 'requirement.legForm': 'legForm', 'requirement.load': 'load',
   'contact.title': 'title', 'contact.name': 'name', 'contact.firm': 'firm', 'contact.email': 'email', 'contact.countryCode': 'country', 'contact.vatNumber': 'vatNumber', 'contact.remarks': 'remarks',
 }
-const NEED_PATHS: Readonly<Record<OrderDraft['knows'], Record<string, OrderFieldName>>> = {
-  'two-loads': {
-    'requirement.need.first.forceN': 'firstForce', 'requirement.need.first.lengthMm': 'firstLength', 'requirement.need.second.forceN': 'secondForce', 'requirement.need.second.lengthMm': 'secondLength',
-  },
-  'load-and-rate': { 'requirement.need.load.forceN': 'firstForce', 'requirement.need.load.lengthMm': 'firstLength', 'requirement.need.rateNPerMm': 'rate' },
-  'rate-and-length': { 'requirement.need.rateNPerMm': 'rate', 'requirement.need.freeLengthMm': 'freeLength', 'requirement.need.shortestLengthMm': 'shortestLength' },
-}
-
 /** The number of an SI value as one would type it in `units`: no more places than a caliper reads, no trailing noughts. */
 export function typedNumber(valueSi: number, quantity: Quantity, units: UnitSystem): string {
   const shown = fromSi(valueSi, quantity, units)
@@ -122,7 +123,7 @@ export function convertDraft(draft: OrderDraft, { from, to, written }: { from: U
   const nowWritten: WrittenBySystem = {}
   for (const field of ORDER_FIELD_NAMES) {
     const quantity = quantityOf(field)
-    if (!quantity || field === 'certificate' || field === 'knows') continue
+    if (!quantity || isChoice(field)) continue
     const text = draft[field]
     const kept = written[field]
     const parsed = kept?.text === text ? { ok: true, value: kept.valueSi } as const : parseQuantity(text, quantity, from)
@@ -133,9 +134,12 @@ export function convertDraft(draft: OrderDraft, { from, to, written }: { from: U
   return { draft: converted, written: nowWritten }
 }
 
+/** True for a field that holds a choice or a tick, not text. */
+export const isChoice = (field: OrderFieldName): field is OrderChoiceName => field === 'kind' || field === 'knows' || field === 'knowsExtension' || field === 'knowsTorsion' || field === 'certificate'
+
 /** What is still to be filled in before the form can be sent, in the order of the page. */
 export function missingFields(draft: OrderDraft): OrderFieldName[] {
-  const needed: OrderFieldName[] = [...NEED_FIELDS[draft.knows], 'couldHurt', ...(QUANTITY_FIELDS.every(field => draft[field].trim() === '') ? ['quantity1' as const] : []), 'title', 'name', 'firm', 'email']
+  const needed: OrderFieldName[] = [...needFieldsOf(draft), 'couldHurt', ...(QUANTITY_FIELDS.every(field => draft[field].trim() === '') ? ['quantity1' as const] : []), 'title', 'name', 'firm', 'email']
   return needed.filter(field => String(draft[field]).trim() === '')
 }
 
@@ -145,7 +149,7 @@ export function missingFields(draft: OrderDraft): OrderFieldName[] {
  */
 export function previewBody(draft: OrderDraft, read: ReadDraft): { requirement: Record<string, unknown>, countryCode: CountryCode } | null {
   if (Object.keys(read.faults).length > 0) return null
-  const isDescribed = NEED_FIELDS[draft.knows].every(field => read.valuesSi[field] !== undefined)
+  const isDescribed = needFieldsOf(draft).every(field => read.valuesSi[field] !== undefined)
   const { quantities } = read.requirement
   if (!isDescribed || !Array.isArray(quantities) || quantities.length === 0) return null
   return { requirement: { ...read.requirement, couldHurt: draft.couldHurt || 'no' }, countryCode: draft.country as CountryCode }

@@ -4,14 +4,27 @@ export const QUANTITY_FIELDS = ['quantity1', 'quantity2', 'quantity3', 'quantity
 
 /** Every field of the order form: its section, what it is called where it is still open, and the physical quantity typed into it. */
 export const ORDER_FIELDS = {
+  kind: { section: 1, words: 'Which way it works' },
   knows: { section: 1, words: 'What you know' },
+  knowsExtension: { section: 1, words: 'What you know' },
+  knowsTorsion: { section: 1, words: 'What you know' },
   firstForce: { section: 1, words: 'First load', quantity: 'force' },
   firstLength: { section: 1, words: 'Its length', quantity: 'length' },
   secondForce: { section: 1, words: 'Second load', quantity: 'force' },
   secondLength: { section: 1, words: 'Its length', quantity: 'length' },
+  firstMoment: { section: 1, words: 'First moment', quantity: 'moment' },
+  firstAngle: { section: 1, words: 'Its angle', quantity: 'angle' },
+  secondMoment: { section: 1, words: 'Second moment', quantity: 'moment' },
+  secondAngle: { section: 1, words: 'Its angle', quantity: 'angle' },
   rate: { section: 1, words: 'Rate', quantity: 'rate' },
+  turnRate: { section: 1, words: 'Rate of turning', quantity: 'momentRate' },
   freeLength: { section: 1, words: 'Free length', quantity: 'length' },
   shortestLength: { section: 1, words: 'Shortest working length', quantity: 'length' },
+  firstLeg: { section: 2, words: 'First leg', quantity: 'length' },
+  secondLeg: { section: 2, words: 'Second leg', quantity: 'length' },
+  legForm: { section: 2, words: 'Legs' },
+  load: { section: 2, words: 'Which way it is turned' },
+  hook: { section: 2, words: 'Hooks' },
   bore: { section: 2, words: 'Bore', quantity: 'length' },
   rod: { section: 2, words: 'Rod', quantity: 'length' },
   longest: { section: 2, words: 'Longest, unloaded', quantity: 'length' },
@@ -44,6 +57,8 @@ export const ORDER_FIELDS = {
 } as const satisfies Record<string, { section: number, words: string, quantity?: Quantity }>
 
 export type OrderFieldName = keyof typeof ORDER_FIELDS
+/** Fields that hold a choice of a few words, or a tick. */
+export type OrderChoiceName = 'kind' | 'knows' | 'knowsExtension' | 'knowsTorsion' | 'certificate'
 export const ORDER_FIELD_NAMES = Object.keys(ORDER_FIELDS) as OrderFieldName[]
 
 /** The physical quantity typed into a field, if it is one. */

@@ -12,7 +12,7 @@ export function openItems(fields: Iterable<OrderFieldName>): OpenItem[] {
   return [...bySection].sort(([a], [b]) => a - b).map(([section, [first, ...others]]) => {
     const names = [first, ...others].flatMap(field => field ? [ORDER_FIELDS[field].words] : [])
     const unique = [...new Set(names)]
-    const words = section === 1 && unique.length > 2 ? 'Loads and lengths' : unique.map((name, at) => at ? lowerFirst(name) : name).join(', ')
+    const words = section === 1 && unique.length > 2 ? (first === 'firstMoment' ? 'Moments and angles' : 'Loads and lengths') : unique.map((name, at) => at ? lowerFirst(name) : name).join(', ')
     return { section, fieldId: first ? orderFieldId(first) : '', words }
   })
 }

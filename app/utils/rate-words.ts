@@ -10,7 +10,7 @@ export const RATE_GROUP_WORDS: Readonly<Record<RateGroup, string>> = {
 
 const UNIT_WORDS: Readonly<Record<string, string>> = {
   'hours': 'h', 'minutes': 'min', 'seconds': 's', 'metres per minute': 'm/min', 'pieces per minute': 'a minute', 'pieces per hour': 'an hour', 'pieces': 'springs', 'metres': 'm',
-  'kilograms': 'kg', 'percent': '%', 'days': 'days', 'millimetres': 'mm', 'degrees Celsius': '°C',
+  'kilograms': 'kg', 'percent': '%', 'days': 'days', 'millimetres': 'mm', 'degrees Celsius': '°C', 'joules': 'J',
 }
 const MONEY_WORDS: Readonly<Record<string, string>> = { 'currency': '', 'per hour': ' an hour', 'per kg': ' a kg' }
 

@@ -16,6 +16,9 @@ export const CHROMIUM = '/usr/bin/chromium'
 export const TEST_PACKAGES = [
   { name: 'chromium', file: CHROMIUM },
   { name: 'calculix-ccx', file: '/usr/bin/ccx' },
+  { name: 'python3-scipy', file: '/usr/lib/python3/dist-packages/scipy/version.py' },
+  { name: 'units', file: '/usr/bin/units' },
+  { name: 'poppler-utils', file: '/usr/bin/pdftotext' },
   { name: 'fonts-dejavu-core', file: '/usr/share/fonts/truetype/dejavu/DejaVuSans.ttf' },
 ]
 

@@ -47,7 +47,7 @@ async function prepareServices() {
   await ensureBuilt({ logFile: join(LOGS, 'build.log'), report: say })
 }
 
-async function prepareBrowser() {
+async function prepareServicesAndPrograms() {
   await prepareTestPrograms()
   await prepareServices()
 }
@@ -56,15 +56,15 @@ async function prepareBrowser() {
 export const STAGES = /** @type {ReadonlyArray<Stage>} */ ([
   { name: 'lint', minutes: 4, args: [projectPath('node_modules', 'eslint', 'bin', 'eslint.js'), '--max-warnings', '0', '.'], report: null },
   { name: 'types', minutes: 4, args: [projectPath('node_modules', 'nuxt', 'bin', 'nuxt.mjs'), 'typecheck'], report: null },
-  vitestStage('unit', 5),
-  vitestStage('reference', 5, prepareTestPrograms),
-  vitestStage('api', 8, prepareServices),
+  vitestStage('unit', 8),
+  vitestStage('reference', 8, prepareTestPrograms),
+  vitestStage('api', 10, prepareServicesAndPrograms),
   {
     name: 'e2e',
-    minutes: 10,
+    minutes: 14,
     args: [projectPath('node_modules', '@playwright', 'test', 'cli.js'), 'test'],
     report: { path: projectPath('test-results', 'e2e.json'), count: countPlaywrightReport },
-    prepare: prepareBrowser,
+    prepare: prepareServicesAndPrograms,
   },
 ])
 

@@ -1,3 +1,6 @@
+import sizingThread from '#sizing-thread'
+import { sizingThreads } from '../services/springs/sizing-threads'
+
 /** How long requests may take to finish after a stop was asked for. */
 const FINISH_WITHIN_MS = 10_000
 
@@ -8,6 +11,7 @@ const FINISH_WITHIN_MS = 10_000
 export default defineNitroPlugin((nitro) => {
   const workers = [outboxWorker, stripeEventWorker]
   for (const worker of workers) worker.start()
+  sizingThreads.start(sizingThread)
 
   // Nitro reads this setting only after its plugins have run; its own default is half a minute.
   process.env.NITRO_SHUTDOWN_TIMEOUT ??= String(FINISH_WITHIN_MS)
@@ -18,7 +22,7 @@ export default defineNitroPlugin((nitro) => {
     })
   }
   nitro.hooks.hook('close', async () => {
-    await Promise.all(workers.map(worker => worker.stop()))
+    await Promise.all([...workers.map(worker => worker.stop()), sizingThreads.close()])
     await closeDatabase()
     log.info('stopped')
   })

@@ -82,7 +82,7 @@ function readQuery(event: H3Event): Record<string, string> {
   const result: Record<string, string> = {}
   const url = new URL(event.path, 'http://local')
   for (const [name, value] of url.searchParams) {
-    if (name in result) throw new HttpProblem(400, `${name.slice(0, 40)} is given twice.`)
+    if (Object.hasOwn(result, name)) throw new HttpProblem(400, `${name.slice(0, 40)} is given twice.`)
     result[name] = value
   }
   return result

@@ -1,17 +1,26 @@
 import { z } from 'zod'
 import { accessKeySchema, pageQuerySchema, reasonSchema, textSchema, versionSchema } from './shared-fields'
-import type { CompressionEnds, MaterialCode } from '../spring/codes'
-import type { CompressionEvaluation } from '../spring/mechanics/types'
+import type { CoilHand, MaterialCode, SpringKind, ToleranceGrade } from '../spring/codes'
+import type { EvaluationOf, InputOf } from '../spring/mechanics/spring'
+import type { LoadPoint, MomentPoint } from '../spring/sizing/types'
 import type { OrderState } from './order-states'
 import type { PaymentStatus } from './payment'
 import type { EnquiryRequest } from './enquiry'
 
-/** A spring as it is quoted and made, with the whole check that was made of it. */
-export type StoredDesign = {
-  kind: 'compression', material: MaterialCode, materialName: string, wireDiameterMm: number, meanDiameterMm: number, activeCoils: number, totalCoils: number,
-  freeLengthMm: number, ends: CompressionEnds, hand: 'left' | 'right', seatingCoefficient: number, toleranceGrade: 1 | 2 | 3,
-  evaluation: CompressionEvaluation, wiresSearched: number, wiresFeasible: number,
+/** A spring as it is quoted and made, of one kind, with the whole check that was made of it. `spring` is what `evaluate` takes. */
+export type StoredDesignOf<K extends SpringKind> = {
+  kind: K, material: MaterialCode, materialName: string, wireDiameterMm: number, meanDiameterMm: number, activeCoils: number,
+  /** Coils wound: total coils of compression springs, body coils of the others. */
+  totalCoils: number,
+  /** Compression: free length. Extension: inside the hooks. Torsion: the body. */
+  freeLengthMm: number,
+  hand: CoilHand, toleranceGrade: ToleranceGrade, spring: InputOf<K>, evaluation: EvaluationOf<K>, wiresSearched: number, wiresFeasible: number,
 }
+export type StoredDesign = { [K in SpringKind]: StoredDesignOf<K> }[SpringKind]
+
+/** What the spring is asked to do: a load at a length, or a moment at an angle. */
+export type WorkingPoint = LoadPoint | MomentPoint
+
 /** Why an enquiry waits for a person: a sentence for each side. */
 export type GateReason = { code: string, customerText: string, estimatorText: string }
 
@@ -27,7 +36,7 @@ export type ConflictView = { words: string, changes: { path: string, label: stri
 /** The answer to the order form as one types. */
 export type PreviewView = {
   design: StoredDesign | null, conflict: ConflictView | null, currency: string, priceBookNumber: number, priceBookInForceFrom: string, taxPercent: string, depositPercent: string,
-  depositBy: string, ladder: LadderRung[], waitsForPerson: Pick<GateReason, 'code' | 'customerText'>[], points: { forceN: number, lengthMm: number }[],
+  depositBy: string, ladder: LadderRung[], waitsForPerson: Pick<GateReason, 'code' | 'customerText'>[], points: WorkingPoint[],
 }
 export type EnquiryOutcome = { ref: string, key: string, outcome: 'quoted' | 'waiting', reasons: string[], answerBy: string | null, quoteUrl: string }
 
@@ -35,7 +44,7 @@ export type EnquiryOutcome = { ref: string, key: string, outcome: 'quoted' | 'wa
 export type QuoteView = {
   ref: string, revision: string, state: OrderState, version: number, title: string, firm: string, contactName: string, couldHurt: boolean,
   /** Null while a person still has to answer. */
-  design: StoredDesign | null, points: { forceN: number, lengthMm: number }[], currency: string, taxPercent: string, depositPercent: string,
+  design: StoredDesign | null, points: WorkingPoint[], currency: string, taxPercent: string, depositPercent: string,
   validUntil: string | null, depositBy: string | null, sentAt: string | null, checkedBy: string | null, priceBookNumber: number | null, noteToCustomer: string, notes: string[],
   ladder: LadderRung[], acceptedQuantity: number | null, addressConfirmed: boolean, isSignedIn: boolean, maskedEmail: string,
   answerBy: string | null, reasons: string[], payment: PaymentStatus, request: EnquiryRequest['requirement'],
@@ -53,7 +62,7 @@ export type EstimatingRow = { ref: string, title: string, firm: string, contactN
 export type EstimatingList = { rows: EstimatingRow[], nextCursor: string | null, waiting: number }
 export type EstimatingView = {
   ref: string, state: OrderState, version: number, title: string, firm: string, contactName: string, contactEmail: string, countryCode: string, createdAt: string, answerBy: string | null, neededOn: string | null,
-  request: EnquiryRequest, points: { forceN: number, lengthMm: number }[], reasons: GateReason[], assignedTo: string | null,
+  request: EnquiryRequest, points: WorkingPoint[], reasons: GateReason[], assignedTo: string | null,
   quote: null | {
     revision: string, state: 'draft' | 'sent' | 'superseded', version: number, design: StoredDesign | null, currency: string, priceBookNumber: number, priceBookInForceFrom: string, taxPercent: string, depositPercent: string,
     computedMarginPercent: string, marginPercentOverride: string | null, marginReason: string | null, marginFloorPercent: string, noteToCustomer: string, validUntil: string, sentAt: string | null, ladder: EstimateRung[],
@@ -74,7 +83,7 @@ export const estimatingQuerySchema = pageQuerySchema.extend({ state: z.enum(['wa
 /** The order as its customer follows it. */
 export type OrderRow = { ref: string, title: string, state: OrderState, quantity: number | null, createdAt: string, grossMinor: number | null, currency: string, dispatchOn: string | null }
 export type OrderStatusView = {
-  ref: string, title: string, firm: string, state: OrderState, version: number, quantity: number | null, currency: string, design: StoredDesign | null, points: { forceN: number, lengthMm: number }[],
+  ref: string, title: string, firm: string, state: OrderState, version: number, quantity: number | null, currency: string, design: StoredDesign | null, points: WorkingPoint[],
   grossMinor: number | null, depositMinor: number | null, balanceMinor: number | null, paidMinor: number, promisedOn: string | null, quoteRevision: string | null,
   events: { at: string, to: OrderState, why: string }[], operations: { name: string, state: string, finishedAt: string | null }[],
   canPay: 'deposit' | 'balance' | null, payment: PaymentStatus,

@@ -1,5 +1,9 @@
 import { z } from 'zod'
 import { daySchema, textSchema, versionSchema } from './shared-fields'
+import type { CoilHand, CompressionEnds, HookForm } from '../spring/codes'
+import type { SpringInput } from '../spring/mechanics/spring'
+import type { Leg } from '../spring/mechanics/torsion/types'
+import type { LoadPoint, MomentPoint } from '../spring/sizing/types'
 import type { StoredDesign } from './quote'
 
 export const CENTRE_KINDS = ['coiling', 'stress-relief', 'end-grinding', 'inspection', 'packing'] as const
@@ -61,10 +65,15 @@ export type BenchOperation = OperationView & { jobRef: string, customer: string,
 export type BenchView = { timeZone: string, centre: CentreView, current: BenchOperation | null, next: BenchOperation[], sheet: BenchSheet | null, cautions: string[] }
 /** Set-up values of the operation now at the work centre. */
 export type BenchSheet = {
-  material: string, wireDiameterMm: number, meanDiameterMm: number, outerDiameterMm: number, innerDiameterMm: number, activeCoils: number, totalCoils: number,
-  freeLengthMm: number, pitchMm: number, wireLengthMm: number, hand: string, ends: string, stressRelief: string, wirePlannedKg: number,
-  loads: { lengthMm: number, forceN: number }[],
-}
+  material: string, wireDiameterMm: number, outerDiameterMm: number, innerDiameterMm: number, totalCoils: number, wireLengthMm: number,
+  hand: CoilHand, stressRelief: string, wirePlannedKg: number,
+  /** The spring itself, to be drawn. */
+  spring: SpringInput,
+} & (
+  | { kind: 'compression', freeLengthMm: number, pitchMm: number, ends: CompressionEnds, loads: LoadPoint[] }
+  | { kind: 'extension', insideHooksMm: number, bodyLengthMm: number, hook: HookForm, hookLengthMm: number, initialTensionN: number, loads: LoadPoint[] }
+  | { kind: 'torsion', bodyLengthMm: number, legs: Leg[], rodMm: number | null, moments: MomentPoint[] }
+)
 /** One job's own page. */
 export type JobSheetView = JobView & {
   timeZone: string, wireProductId: string | null, design: StoredDesign | null, sheet: BenchSheet | null,

@@ -1,10 +1,18 @@
-/** Kinds of spring the house knows. Only compression is calculated so far. */
+/** Kinds of spring the house knows. */
 export const SPRING_KINDS = ['compression', 'extension', 'torsion'] as const
 export type SpringKind = (typeof SPRING_KINDS)[number]
 
 /** Forms of the two end coils of a compression spring. */
 export const COMPRESSION_ENDS = ['closed-ground', 'closed', 'open', 'open-ground'] as const
 export type CompressionEnds = (typeof COMPRESSION_ENDS)[number]
+
+/** How the two ends of an extension spring are bent: a whole turn, half a turn, a loop crossed to the middle, a loop on a straight shank. */
+export const HOOK_FORMS = ['full-loop', 'half-loop', 'crossover-loop', 'extended-hook'] as const
+export type HookForm = (typeof HOOK_FORMS)[number]
+
+/** How a leg leaves the body of a torsion spring: straight out along the axis, or as a tangent of the coil. */
+export const LEG_FORMS = ['straight', 'tangential'] as const
+export type LegForm = (typeof LEG_FORMS)[number]
 
 /** How the stress is corrected and which static limits go with it. */
 export const STRESS_METHODS = ['en13906', 'wahl'] as const
@@ -38,5 +46,7 @@ export const MATERIAL_CODES = [
   'ASTM-A232',
   'ASTM-A401',
   'ASTM-A313-302',
+  'ASTM-B159',
+  'ASTM-B197',
 ] as const
 export type MaterialCode = (typeof MATERIAL_CODES)[number]

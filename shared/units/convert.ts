@@ -1,8 +1,8 @@
-/** Which units a person reads and types. Inside, everything is SI: mm, N, N/mm, MPa, g. */
+/** Which units a person reads and types. Inside, everything is SI: mm, N, N/mm, N mm, MPa, g; angles are degrees. */
 export type UnitSystem = 'metric' | 'inch'
 
 /** The quantities that change their unit with the system. */
-export type Quantity = 'length' | 'force' | 'rate' | 'stress' | 'mass' | 'temperature'
+export type Quantity = 'length' | 'force' | 'rate' | 'moment' | 'momentRate' | 'angle' | 'stress' | 'mass' | 'temperature'
 
 /** Exact by definition of the international inch (1959). */
 export const MM_PER_INCH = 25.4
@@ -14,6 +14,8 @@ export const N_PER_KGF = 9.80665
 export const G_PER_LB = 453.59237
 /** N/mm in one lbf/in. */
 export const N_PER_MM_PER_LBF_PER_INCH = N_PER_LBF / MM_PER_INCH
+/** N mm in one lbf in. */
+export const NMM_PER_LBF_INCH = N_PER_LBF * MM_PER_INCH
 /** MPa in one psi: one lbf over one square inch. */
 export const MPA_PER_PSI = N_PER_LBF / (MM_PER_INCH * MM_PER_INCH)
 
@@ -32,6 +34,9 @@ export const DISPLAY_UNITS: Record<UnitSystem, Record<Quantity, DisplayUnit>> = 
     length: { symbol: 'mm', size: 1 },
     force: { symbol: 'N', size: 1 },
     rate: { symbol: 'N/mm', size: 1 },
+    moment: { symbol: 'N·mm', size: 1 },
+    momentRate: { symbol: 'N·mm/°', size: 1 },
+    angle: { symbol: '°', size: 1 },
     stress: { symbol: 'MPa', size: 1 },
     mass: { symbol: 'g', size: 1 },
     temperature: { symbol: '°C', size: 1 },
@@ -40,6 +45,9 @@ export const DISPLAY_UNITS: Record<UnitSystem, Record<Quantity, DisplayUnit>> = 
     length: { symbol: 'in', size: MM_PER_INCH },
     force: { symbol: 'lbf', size: N_PER_LBF },
     rate: { symbol: 'lbf/in', size: N_PER_MM_PER_LBF_PER_INCH },
+    moment: { symbol: 'lbf·in', size: NMM_PER_LBF_INCH },
+    momentRate: { symbol: 'lbf·in/°', size: NMM_PER_LBF_INCH },
+    angle: { symbol: '°', size: 1 },
     stress: { symbol: 'ksi', size: MPA_PER_PSI * 1000 },
     mass: { symbol: 'oz', size: G_PER_LB / 16 },
     temperature: { symbol: '°F', size: 5 / 9, offset: -160 / 9 },

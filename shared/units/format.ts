@@ -55,6 +55,22 @@ export function formatRate(rateNPerMm: number, units: UnitSystem, options: Forma
   return format(rateNPerMm, 'rate', units, shown >= 1 && shown < 100 ? 2 : undefined, options)
 }
 
+/** A moment in N mm or lbf in, to about four figures. */
+export function formatMoment(momentNmm: number, units: UnitSystem, options: FormatOptions = {}): string {
+  return format(momentNmm, 'moment', units, undefined, options)
+}
+
+/** A rate of turning in N mm or lbf in for each degree, to about four figures. */
+export function formatMomentRate(rateNmmPerDeg: number, units: UnitSystem, options: FormatOptions = {}): string {
+  return format(rateNmmPerDeg, 'momentRate', units, undefined, options)
+}
+
+/** An angle in degrees (1 place); its sign stands close to the number. */
+export function formatAngle(angleDeg: number, options: Pick<FormatOptions, 'decimals'> = {}): string {
+  const text = formatNumber(angleDeg, options.decimals ?? 1)
+  return text === NO_VALUE ? text : `${text}°`
+}
+
 /** A stress in MPa (no places) or ksi (1 place). */
 export function formatStress(stressMpa: number, units: UnitSystem, options: FormatOptions = {}): string {
   return format(stressMpa, 'stress', units, units === 'inch' ? 1 : 0, options)

@@ -9,7 +9,7 @@ export type Parsed<Value> =
   | { readonly ok: false, readonly fault: ParseFault, readonly message: string }
 
 const QUANTITY_WORDS: Record<Quantity, string> = {
-  length: 'a length', force: 'a force', rate: 'a rate', stress: 'a stress', mass: 'a mass', temperature: 'a temperature',
+  length: 'a length', force: 'a force', rate: 'a rate', moment: 'a moment', momentRate: 'a rate of turning', angle: 'an angle', stress: 'a stress', mass: 'a mass', temperature: 'a temperature',
 }
 const LONGEST_TEXT = 40
 const VULGAR: Record<string, string> = {

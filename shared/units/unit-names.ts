@@ -1,4 +1,4 @@
-import { G_PER_LB, MM_PER_INCH, MPA_PER_PSI, N_PER_KGF, N_PER_LBF, N_PER_MM_PER_LBF_PER_INCH, type Quantity } from './convert'
+import { G_PER_LB, MM_PER_INCH, MPA_PER_PSI, NMM_PER_LBF_INCH, N_PER_KGF, N_PER_LBF, N_PER_MM_PER_LBF_PER_INCH, type Quantity } from './convert'
 
 /** A unit that a person may type: SI amount in one, and for temperature the SI value at nought. */
 export interface TypedUnit {
@@ -38,6 +38,30 @@ const NAMES: Record<Quantity, ReadonlyArray<readonly [names: string, size: numbe
     ['lbf/in lb/in lbs/in lbf/inch lb/inch lbf/" lb/"', N_PER_MM_PER_LBF_PER_INCH],
     ['kgf/mm kp/mm', N_PER_KGF],
     ['kgf/cm kp/cm', N_PER_KGF / 10],
+  ],
+  moment: [
+    ['N·mm Nmm N*mm N-mm', 1],
+    ['N·cm Ncm N*cm', 10],
+    ['N·m Nm N*m', 1000],
+    ['lbf·in lbfin lbf*in lbf-in lb·in lbin lb-in in·lbf inlbf in-lb inlb', NMM_PER_LBF_INCH],
+    ['lbf·ft lbfft lb·ft lbft ft-lb ftlb', 12 * NMM_PER_LBF_INCH],
+    ['ozf·in ozfin oz·in ozin oz-in in-oz', NMM_PER_LBF_INCH / 16],
+    ['kgf·cm kgfcm kgcm kp·cm', 10 * N_PER_KGF],
+  ],
+  momentRate: [
+    ['N·mm/° Nmm/° N·mm/deg Nmm/deg', 1],
+    ['N·m/° Nm/° N·m/deg Nm/deg', 1000],
+    ['N·mm/rad Nmm/rad', Math.PI / 180],
+    ['N·m/rad Nm/rad', 1000 * Math.PI / 180],
+    ['lbf·in/° lbfin/° lbf·in/deg lbfin/deg in-lb/deg lb-in/deg', NMM_PER_LBF_INCH],
+    ['lbf·in/rad lbfin/rad in-lb/rad', NMM_PER_LBF_INCH * Math.PI / 180],
+    ['N·mm/turn Nmm/turn N·mm/rev', 1 / 360],
+    ['lbf·in/turn lbfin/turn in-lb/turn', NMM_PER_LBF_INCH / 360],
+  ],
+  angle: [
+    ['° deg degree degrees', 1],
+    ['rad radian radians', 180 / Math.PI],
+    ['turn turns rev', 360],
   ],
   stress: [
     ['MPa N/mm2 N/mm²', 1],

@@ -2,17 +2,26 @@ import { randomUUID } from 'node:crypto'
 import fc from 'fast-check'
 import { describe, expect, inject, it } from 'vitest'
 import type { Problem } from '#shared/schemas/problem'
-import { usualRequirement } from './support/orders'
+import { usualExtension, usualRequirement, usualTorsion } from './support/orders'
 import { Visitor } from './support/visitor'
 
 const contact = { name: 'Ilse Varrow', firm: 'Tarnbeck', email: 'ilse@bodies.example', countryCode: 'IE', title: 'Bottle filler', remarks: 'None.' }
 const evaluate = { kind: 'compression', material: 'EN10270-1-SH', wireDiameterMm: 2.5, meanDiameterMm: 20, activeCoils: 8.25, freeLengthMm: 60, points: [{ lengthMm: 50 }, { lengthMm: 35 }] }
 const size = { kind: 'compression', points: [{ lengthMm: 50, forceN: 60 }, { lengthMm: 35, forceN: 150 }], fit: { boreMm: 26 }, materials: ['EN10270-1-SH'], wireDiametersMm: [2, 2.5], objective: 'mass', limit: 2 }
 
-/** Every public route that takes a body, with one that is right. */
+const evaluateExtension = { kind: 'extension', material: 'EN10270-1-SH', wireDiameterMm: 1.6, meanDiameterMm: 14, bodyCoils: 20, initialTensionN: 10, hook: { form: 'full-loop', bendRadiusMm: 6 }, points: [{ forceN: 30 }] }
+const evaluateTorsion = { kind: 'torsion', material: 'EN10270-1-SM', wireDiameterMm: 2, meanDiameterMm: 16, bodyCoils: 6, legs: [{ lengthMm: 20, form: 'tangential' }, { lengthMm: 30, form: 'straight' }], mandrelMm: 8, points: [{ angleDeg: 45 }, { momentNmm: 900 }] }
+const sizeExtension = { kind: 'extension', points: [{ lengthMm: 60, forceN: 20 }, { lengthMm: 90, forceN: 60 }], hook: { form: 'half-loop' }, fit: { boreMm: 20 }, materials: ['EN10270-1-SH'], wireDiametersMm: [1.5, 1.6], objective: 'mass', limit: 2 }
+const sizeTorsion = { kind: 'torsion', points: [{ angleDeg: 90, momentNmm: 500 }], legs: [{ lengthMm: 30, form: 'tangential' }, { lengthMm: 30, form: 'tangential' }], fit: { rodMm: 8 }, materials: ['EN10270-1-SH'], wireDiametersMm: [1.6, 2], objective: 'mass', limit: 2 }
+
+/** Every public route that takes a body, with one that is right; those that take a spring, with one of each kind. */
 const ROUTES: Readonly<Record<string, Record<string, unknown>>> = {
   '/api/order/preview': { requirement: usualRequirement },
+  '/api/order/preview extension': { requirement: usualExtension },
+  '/api/order/preview torsion': { requirement: usualTorsion },
   '/api/enquiries': { requirement: usualRequirement, contact },
+  '/api/enquiries extension': { requirement: usualExtension, contact },
+  '/api/enquiries torsion': { requirement: usualTorsion, contact },
   '/api/quotes/OX-1/accept': { quantity: 100, version: 1, key: 'x'.repeat(43) },
   '/api/quotes/OX-1/decline': { version: 1, reason: 'No.', key: 'x'.repeat(43) },
   '/api/quotes/OX-1/confirm-link': { key: 'x'.repeat(43) },
@@ -20,7 +29,11 @@ const ROUTES: Readonly<Record<string, Record<string, unknown>>> = {
   '/api/auth/link': { email: 'nobody@bodies.example' },
   '/api/auth/use-link': { token: 'x'.repeat(43) },
   '/api/v1/springs/evaluate': evaluate,
+  '/api/v1/springs/evaluate extension': evaluateExtension,
+  '/api/v1/springs/evaluate torsion': evaluateTorsion,
   '/api/v1/springs/size': size,
+  '/api/v1/springs/size extension': sizeExtension,
+  '/api/v1/springs/size torsion': sizeTorsion,
 }
 const RUNS = 2_000
 const SEED = 20_261_201
@@ -68,12 +81,36 @@ describe.each(Object.keys(ROUTES))('%s', (path) => {
     await Promise.all(Array.from({ length: 8 }, async () => {
       while (next < bodies.length) {
         const body = bodies[next++]
-        const { status, type, text } = await send(path, body)
+        const { status, type, text } = await send(path.split(' ')[0]!, body)
         const isRefused = status >= 400
         if (status >= 500 || (isRefused && !type.startsWith('application/problem+json'))) faults.push({ status, type, body, text: text.slice(0, 200) })
       }
     }))
     expect(faults.slice(0, 3), `seed ${SEED}`).toEqual([])
+  }, 400_000)
+})
+
+/** The same body with some of its numbers many times larger or smaller: most are well formed, and few springs can be made. */
+function otherNumbers(valid: Json): fc.Arbitrary<Json> {
+  const numbers = paths(valid).filter(path => typeof path.reduce<unknown>((value, key) => (value as Json)[key], valid) === 'number' && !path.includes('quantities') && path.at(-1) !== 'limit')
+  return fc.array(fc.tuple(fc.constantFrom(...numbers), fc.integer({ min: -15, max: 15 })), { minLength: 1, maxLength: 4 }).map(changes => changes.reduce(
+    (body, [path, power]) => withValue(body, path, Number((path.reduce<unknown>((value, key) => (value as Json)[key], body) as number * 10 ** (power / 10)).toPrecision(4))), valid,
+  ))
+}
+
+describe.each(Object.entries(ROUTES).filter(([path]) => /preview|springs/.test(path)))('%s', (path, valid) => {
+  it('answers springs of quite other sizes, each within the patience of a person', async () => {
+    const slow: unknown[] = []
+    const statuses = new Set<number>()
+    for (const body of fc.sample(otherNumbers(valid), { numRuns: path.includes('preview') ? 60 : 200, seed: SEED })) {
+      const from = performance.now()
+      const { status, text } = await send(path.split(' ')[0]!, body)
+      const ms = performance.now() - from
+      statuses.add(status)
+      if (ms > 15_000 || ![200, 422].includes(status)) slow.push({ ms, status, body: JSON.stringify(body), text: text.slice(0, 200) })
+    }
+    expect(slow, `seed ${SEED}`).toEqual([])
+    expect(statuses).toContain(200)
   }, 400_000)
 })
 

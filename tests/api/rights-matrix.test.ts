@@ -25,6 +25,7 @@ const RIGHTS: Readonly<Record<string, readonly Who[]>> = {
   'POST /api/auth/login': EVERYBODY, 'POST /api/auth/logout': EVERYBODY, 'GET /api/auth/session': SIGNED_IN, 'POST /api/auth/link': EVERYBODY, 'POST /api/auth/use-link': EVERYBODY, 'POST /api/auth/password': SIGNED_IN,
   'GET /api/auth/sessions': SIGNED_IN, 'DELETE /api/auth/sessions': SIGNED_IN, 'DELETE /api/auth/sessions/:id': SIGNED_IN,
   'POST /api/webhooks/stripe': EVERYBODY,
+  'GET /api/springs/sheet.pdf': EVERYBODY,
   'POST /api/v1/springs/evaluate': EVERYBODY, 'POST /api/v1/springs/size': EVERYBODY, 'GET /api/v1/materials': EVERYBODY, 'GET /api/v1/openapi.json': EVERYBODY,
   'GET /api/estimating': ESTIMATING, 'GET /api/estimating/:ref': ESTIMATING, 'POST /api/estimating/:ref/line': ESTIMATING, 'POST /api/estimating/:ref/margin': ESTIMATING, 'POST /api/estimating/:ref/send': ESTIMATING,
   'POST /api/estimating/:ref/revise': ESTIMATING, 'POST /api/estimating/:ref/withdraw': ESTIMATING, 'POST /api/estimating/:ref/assign': ESTIMATING,

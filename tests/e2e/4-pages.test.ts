@@ -9,6 +9,12 @@ test('the front page', async ({ page }) => {
   await look(page, 'index')
 })
 
+test('the page for engineers before anything is typed', async ({ page }) => {
+  await page.goto('/springs')
+  await expect(page.getByText('Type the sizes, or begin from an example.')).toBeVisible()
+  await look(page, 'springs-empty')
+})
+
 test('the order form before anything is typed', async ({ page }) => {
   await new OrderForm(page).open()
   await look(page, 'order-empty')

@@ -6,14 +6,15 @@ import {
   solidLengthMm, totalCoilsFor, wahlFactor, wireMassG, type CompressionEnds, type CompressionInput, type MaterialCode,
 } from '#shared/spring'
 import data from './data/worked-examples.json'
+import { MORE_COMPRESSION_EXAMPLES } from './examples/compression'
+import { EXTENSION_EXAMPLES } from './examples/extension'
+import { num, type Computed, type Inputs } from './examples/inputs'
+import { TORSION_EXAMPLES } from './examples/torsion'
 
 /*
  * Published worked examples, each recomputed by the code the product uses. Where an example names an ASTM wire, strength
  * and modulus come from our tables too. Tolerances are those of the sources' rounding, kept with the data.
  */
-type Inputs = Readonly<Record<string, number>>
-type Computed = Record<string, number>
-
 const MM_PER_INCH = 25.4
 const MPA_PER_KPSI = 6.894757
 
@@ -57,6 +58,7 @@ function solidSafeSpring(code: MaterialCode, ends: CompressionEnds, x: { d: numb
 }
 
 const EXAMPLES: Readonly<Record<string, (x: Inputs) => Computed>> = {
+  ...MORE_COMPRESSION_EXAMPLES, ...EXTENSION_EXAMPLES, ...TORSION_EXAMPLES,
   'shigley8-p10-3': (x) => {
     const s = solidSafeSpring('ASTM-A228', 'open-ground', { d: num(x.d), OD: num(x.OD), totalCoils: num(x.total_coils), fraction: num(x.shear_yield_fraction) })
     const F = num(x.working_force)
@@ -301,11 +303,6 @@ function fatigueDesign(x: Inputs, line: 'gerber' | 'goodman'): Computed {
   }
 }
 
-function num(value: number | undefined): number {
-  if (value === undefined) throw new Error('The example lacks an input')
-  return value
-}
-
 describe('published worked examples', () => {
   it('are at least ten, each with a source and a computation here', () => {
     expect(data.examples.length).toBeGreaterThanOrEqual(10)
@@ -315,7 +312,7 @@ describe('published worked examples', () => {
   })
 
   const cases = data.examples.flatMap((example) => {
-    const published: Readonly<Record<string, { value: number, tolerance: number } | undefined>> = example.published
+    const published = example.published as Readonly<Record<string, { value: number, tolerance: number } | undefined>>
     return Object.entries(published).flatMap(([quantity, row]) => (row ? [{ example, quantity, ...row }] : []))
   })
 

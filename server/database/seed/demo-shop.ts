@@ -31,6 +31,8 @@ export const DEMO_WIRE_PRICES: Readonly<Partial<Record<MaterialCode, { perKgAt2M
   'EN10270-1-SH': { perKgAt2Mm: 2.95, leadDays: 4 },
   'EN10270-2-FDSiCr': { perKgAt2Mm: 4.6, leadDays: 8 },
   'EN10270-3-1.4310': { perKgAt2Mm: 8.9, leadDays: 7 },
+  'ASTM-B159': { perKgAt2Mm: 19.5, leadDays: 12 },
+  'ASTM-B197': { perKgAt2Mm: 62, leadDays: 18 },
 }
 
 /** Price of a kilogram in currency units with four decimals, for an invented wire of this thickness. */

@@ -46,7 +46,7 @@ export async function playOrder(stage: Stage, cast: Cast, demo: DemoOrder, now: 
   if (!reaches('in-work')) return
 
   const isWhole = reaches('finished')
-  await work({ stage, cast, demo, jobId: job!.id, startMs: start + 24 * HOUR_MS, until: isWhole ? Infinity : 1 })
+  await work({ stage, cast, demo, jobId: job!.id, startMs: start + 24 * HOUR_MS, until: isWhole ? Infinity : demo.finishedOperations ?? 1 })
   if (!reaches('settled')) return
   await pay(stage, order!.id, 'balance', new Date(start + 200 * HOUR_MS))
   const [done] = await stage.db.select({ version: jobs.version }).from(jobs).where(eq(jobs.id, job!.id))

@@ -19,7 +19,7 @@ export function isUsualShape({ springIndex, wireDiameterMm, slenderness }: Pick<
 
 /** Rules about the spring itself. */
 export function judgeDesign(design: GateDesign, policy: GatePolicy): GateReason[] {
-  return [...judgeGeometry(design, policy), ...judgeMaterial(design, policy), ...judgeChecks(design, policy)]
+  return [...judgeGeometry(design, policy), ...judgeEnergy(design, policy), ...judgeMaterial(design, policy), ...judgeChecks(design, policy)]
 }
 
 function judgeGeometry(design: GateDesign, policy: GatePolicy): GateReason[] {
@@ -52,6 +52,17 @@ function judgeGeometry(design: GateDesign, policy: GatePolicy): GateReason[] {
     })
   }
   return reasons
+}
+
+// A compression spring is held between its seats; the others fly or whip round when what holds them gives way (common practice, no source).
+function judgeEnergy({ kind, storedEnergyJ }: GateDesign, policy: GatePolicy): GateReason[] {
+  if (kind === 'compression' || storedEnergyJ <= policy.energyMaxJ) return []
+  const what = kind === 'extension' ? { end: 'a hook', does: 'it would fly' } : { end: 'a leg', does: 'it would whip round' }
+  return [{
+    code: 'stored-energy',
+    customerText: `At work it holds much energy: if ${what.end} gave way, ${what.does}. A person looks at how it is held.`,
+    estimatorText: `It holds ${outside(storedEnergyJ, policy.energyMaxJ, 1)} J at its greatest load, over ${figure(policy.energyMaxJ)} J. Ask how it is held and guarded.`,
+  }]
 }
 
 function judgeMaterial({ material }: GateDesign, policy: GatePolicy): GateReason[] {

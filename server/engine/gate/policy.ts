@@ -3,7 +3,7 @@ import { Decimal, roundToMinor } from '#shared/money/decimal'
 import { rateText, readNumberRates, type PriceBook } from '../pricing'
 
 export type MaterialFamily = 'carbon-steel' | 'oil-tempered' | 'stainless' | 'copper-alloy' | 'other'
-export type CautionGroup = 'clearance' | 'stress' | 'fit' | 'stock' | 'other'
+export type CautionGroup = 'clearance' | 'stress' | 'hook' | 'fit' | 'stock' | 'other'
 
 /** Limits inside which a quote goes out at once, from a price book's gate rates. */
 export interface GatePolicy {
@@ -13,6 +13,8 @@ export interface GatePolicy {
   wireMinMm: number
   wireMaxMm: number
   slendernessMax: number
+  /** Held at the greatest working load by a spring with hooks or legs. */
+  energyMaxJ: number
   tightestGrade: number
   lifeMaxCycles: number
   quantityMin: number
@@ -26,7 +28,7 @@ export interface GatePolicy {
 }
 
 const FAMILIES: readonly MaterialFamily[] = ['carbon-steel', 'oil-tempered', 'stainless', 'copper-alloy', 'other']
-const CAUTION_GROUPS: readonly CautionGroup[] = ['clearance', 'stress', 'fit', 'stock', 'other']
+const CAUTION_GROUPS: readonly CautionGroup[] = ['clearance', 'stress', 'hook', 'fit', 'stock', 'other']
 const JUDGED_SURROUNDINGS = ['salt', 'food', 'chemical'] as const
 
 /** Family of a material code; a code the table does not know is `other`. */
@@ -42,6 +44,7 @@ export function materialFamilyOf(material: string): MaterialFamily {
 export function cautionGroupOf(checkCode: string): CautionGroup {
   if (checkCode === 'clearance') return 'clearance'
   if (checkCode === 'stress-solid' || checkCode === 'stress-working') return 'stress'
+  if (checkCode === 'stress-hook-bending' || checkCode === 'stress-hook-torsion') return 'hook'
   if (checkCode === 'bore' || checkCode === 'rod') return 'fit'
   return checkCode === 'wire-range' ? 'stock' : 'other'
 }
@@ -56,6 +59,7 @@ export function readGatePolicy(book: PriceBook): GatePolicy {
     wireMinMm: rates['gate.wire-min-mm'],
     wireMaxMm: rates['gate.wire-max-mm'],
     slendernessMax: rates['gate.slenderness-max'],
+    energyMaxJ: rates['gate.energy-max-j'],
     tightestGrade: rates['gate.tightest-grade'],
     lifeMaxCycles: rates['gate.life-max-cycles'],
     quantityMin: rates['gate.quantity-min'],

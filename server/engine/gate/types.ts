@@ -1,4 +1,5 @@
 import type { Currency } from '#shared/money'
+import type { SpringKind } from '#shared/spring/codes'
 
 /** What the gate must know of the requirement. Temperatures °C, strokes in the spring's life. */
 export interface GateRequirement {
@@ -23,11 +24,14 @@ export interface GateCheck {
 
 /** The design that was found, with its whole check. */
 export interface GateDesign {
+  kind: SpringKind
   material: string
   wireDiameterMm: number
   springIndex: number
-  /** Free length over mean diameter. */
+  /** Free length over mean diameter of a spring that is pressed; nought for the others, which cannot bow. */
   slenderness: number
+  /** What it holds at its greatest working load and lets go of at once if a hook breaks or a leg slips; nought without one. */
+  storedEnergyJ: number
   checks: readonly GateCheck[]
 }
 
@@ -41,7 +45,7 @@ export interface GateRung {
 }
 
 export type GateCode =
-  | 'could-hurt' | 'nothing-fits' | 'check-failed' | 'caution' | 'index' | 'wire-range' | 'slenderness' | 'tolerance-grade' | 'life'
+  | 'could-hurt' | 'nothing-fits' | 'check-failed' | 'caution' | 'index' | 'wire-range' | 'slenderness' | 'stored-energy' | 'tolerance-grade' | 'life'
   | 'quantity' | 'order-value' | 'material' | 'finish' | 'surroundings' | 'temperature' | 'needed-on'
 
 /** Why an enquiry waits for a person: a sentence for each side. */

@@ -15,8 +15,8 @@ export interface RoutingOperation {
 }
 
 /**
- * Operations of a compression spring in order: coiling, stress relief where the design needs it, end grinding where the ends are
- * ground, inspection, packing. Minutes come from the price that was accepted. Throws PlanningError `minutes-missing`.
+ * Operations of a spring in order: coiling with its hooks or legs formed by the coiler, stress relief where the design needs it,
+ * end grinding where the ends are ground, inspection, packing. Minutes come from the price that was accepted. Throws PlanningError `minutes-missing`.
  */
 export function buildRouting(
   design: Pick<PricedDesign, 'ends' | 'stressReliefMinutes'>,

@@ -3,7 +3,7 @@ import type { JobQuantities } from './job-quantities'
 import { rateText } from './rates'
 import { countText, figureText, rateMoneyText, shortMaterialName } from './words'
 import type { RateCode } from './rate-codes'
-import type { CostLineCode, PriceLine, PriceRequest } from './types'
+import type { CostLineCode, FormedEnd, PriceLine, PriceRequest } from './types'
 
 /** A quantity is fixed to these digits before money is made of it, so that anyone can work a line out again from what it shows. */
 const KG_DIGITS = 3
@@ -80,13 +80,27 @@ function buildPackingLine(job: JobQuantities, { book }: PriceRequest): PriceLine
   }
 }
 
+const FORMED: Readonly<Record<FormedEnd, string>> = {
+  'full-loop': 'full loops', 'half-loop': 'half loops', 'crossover-loop': 'crossed loops', 'extended-hook': 'extended hooks', 'tangential': 'legs off the coil', 'straight': 'legs along the axis',
+}
+
+/** Why coiling takes as long as it does: what is formed at the ends, and an index that slows the feed. */
+function coilingWords({ design, book }: PriceRequest): { setUp: string, run: string } {
+  const index = design.meanDiameterMm / design.wireDiameterMm
+  const isSlowed = index < Number(rateText(book, 'coiling.index-easy')) && Number(rateText(book, 'coiling.index-slowing-percent')) > 0
+  const tight = isSlowed ? `, tight at index ${index.toFixed(1)}` : ''
+  if (design.formed === null) return { setUp: '', run: tight }
+  return { setUp: `, ${FORMED[design.formed]}`, run: ` with 2 ${FORMED[design.formed]} each${tight}` }
+}
+
 /** The cost lines of a job in their fixed order; a line that does not apply is left out. Each amount is rounded once. */
 export function buildCostLines(job: JobQuantities, request: PriceRequest): PriceLine[] {
   const { design, options, quantity } = request
   const pieces = countText(job.piecesCoiled, 'piece', 'pieces')
+  const coiling = coilingWords(request)
   const hourLines: HourLine[] = [
-    { code: 'coiling-set-up', label: 'Coiling, set-up', hours: job.coilingSetUpHours, rateCode: 'hourly.coiling', describe: (hours) => `${hours}, tolerance grade ${options.toleranceGrade}` },
-    { code: 'coiling-run', label: 'Coiling, run', hours: job.coilingRunHours, rateCode: 'hourly.coiling', describe: (hours) => `${pieces}, ${hours}` },
+    { code: 'coiling-set-up', label: 'Coiling, set-up', hours: job.coilingSetUpHours, rateCode: 'hourly.coiling', describe: (hours) => `${hours}, tolerance grade ${options.toleranceGrade}${coiling.setUp}` },
+    { code: 'coiling-run', label: 'Coiling, run', hours: job.coilingRunHours, rateCode: 'hourly.coiling', describe: (hours) => `${pieces}${coiling.run}, ${hours}` },
   ]
   if (job.stressReliefBatches > 0) {
     hourLines.push({
@@ -111,7 +125,7 @@ export function buildCostLines(job: JobQuantities, request: PriceRequest): Price
     label: job.sampleSize === quantity ? 'Inspection, every spring' : 'Inspection',
     hours: job.firstOffHours + job.measuringHours,
     rateCode: 'hourly.inspection',
-    describe: (hours) => `first-off and ${countText(job.sampleSize, 'spring', 'springs')}, ${hours}`,
+    describe: (hours) => `first-off and ${countText(job.sampleSize, 'spring', 'springs')}, ${countText(job.measurementsPerSpring, 'measurement', 'measurements')} each, ${hours}`,
   })
 
   const certificate = buildCertificateLine(request)

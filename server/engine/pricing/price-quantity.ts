@@ -27,6 +27,9 @@ export function assertPriceable(design: PricedDesign, wireProduct: PricedWirePro
       throw new PriceError('design-unreadable', `A price needs ${field} above zero.`, field)
     }
   }
+  if (design.kind === 'compression' ? design.formed !== null : design.ends !== null) {
+    throw new PriceError('design-unreadable', 'Only compression springs have ends to grind; only the others have hooks or legs.', 'ends')
+  }
   if (!Number.isFinite(design.stressReliefMinutes) || design.stressReliefMinutes < 0) {
     throw new PriceError('design-unreadable', 'A price needs the time of stress relief, zero or more.', 'stressReliefMinutes')
   }

@@ -3,7 +3,7 @@ import type { RateGroup } from '#shared/rate-groups'
 /** How a rate's value is read. Every value is decimal text. */
 export type RateUnit =
   | 'per hour' | 'hours' | 'minutes' | 'seconds' | 'metres per minute' | 'pieces per minute' | 'pieces per hour' | 'pieces' | 'metres'
-  | 'kilograms' | 'percent' | 'factor' | 'currency' | 'per kg' | 'days' | 'millimetres' | 'degrees Celsius' | 'number' | 'yes is 1'
+  | 'kilograms' | 'percent' | 'factor' | 'currency' | 'per kg' | 'days' | 'millimetres' | 'degrees Celsius' | 'joules' | 'number' | 'yes is 1'
 
 export type { RateGroup }
 
@@ -44,6 +44,14 @@ export const RATE_CODES = [
   row('coiling.setup-factor.grade-1', 'Coiler set-up, tolerance grade 1', 'factor', 'coiling', '1.50', 'practice'),
   row('coiling.setup-factor.grade-2', 'Coiler set-up, tolerance grade 2', 'factor', 'coiling', '1.00', 'practice'),
   row('coiling.setup-factor.grade-3', 'Coiler set-up, tolerance grade 3', 'factor', 'coiling', '0.85', 'practice'),
+  row('coiling.setup-factor.extension', 'Coiler set-up, springs with hooks', 'factor', 'coiling', '2.00', 'shop-practice'),
+  row('coiling.setup-factor.torsion', 'Coiler set-up, springs with legs', 'factor', 'coiling', '2.00', 'shop-practice'),
+  row('coiling.setup-factor.full-loop', 'Coiler set-up, full loops', 'factor', 'coiling', '1.00', 'practice'),
+  row('coiling.setup-factor.half-loop', 'Coiler set-up, half loops', 'factor', 'coiling', '1.05', 'practice'),
+  row('coiling.setup-factor.crossover-loop', 'Coiler set-up, loops crossed to the middle', 'factor', 'coiling', '1.10', 'practice'),
+  row('coiling.setup-factor.extended-hook', 'Coiler set-up, loops on a straight shank', 'factor', 'coiling', '1.25', 'practice'),
+  row('coiling.setup-factor.tangential', 'Coiler set-up, legs off the coil', 'factor', 'coiling', '1.00', 'practice'),
+  row('coiling.setup-factor.straight', 'Coiler set-up, legs along the axis', 'factor', 'coiling', '1.15', 'practice'),
   row('coiling.feed.fine', 'Wire feed, wire to 0.5 mm', 'metres per minute', 'coiling', '60', 'shop-practice'),
   row('coiling.feed.light', 'Wire feed, wire to 2 mm', 'metres per minute', 'coiling', '40', 'shop-practice'),
   row('coiling.feed.medium', 'Wire feed, wire to 6 mm', 'metres per minute', 'coiling', '18', 'shop-practice'),
@@ -52,6 +60,19 @@ export const RATE_CODES = [
   row('coiling.forming-seconds.light', 'Cut-off and forming, wire to 2 mm', 'seconds', 'coiling', '0.30', 'practice'),
   row('coiling.forming-seconds.medium', 'Cut-off and forming, wire to 6 mm', 'seconds', 'coiling', '0.80', 'practice'),
   row('coiling.forming-seconds.heavy', 'Cut-off and forming, wire over 6 mm', 'seconds', 'coiling', '1.50', 'practice'),
+  // With these a spring with hooks or legs comes off at about a third of the pace of a plain one, as shop practice has it.
+  row('coiling.end-seconds.fine', 'Forming one hook or leg, wire to 0.5 mm', 'seconds', 'coiling', '0.40', 'practice'),
+  row('coiling.end-seconds.light', 'Forming one hook or leg, wire to 2 mm', 'seconds', 'coiling', '0.80', 'practice'),
+  row('coiling.end-seconds.medium', 'Forming one hook or leg, wire to 6 mm', 'seconds', 'coiling', '2.50', 'practice'),
+  row('coiling.end-seconds.heavy', 'Forming one hook or leg, wire over 6 mm', 'seconds', 'coiling', '6.00', 'practice'),
+  row('coiling.end-factor.full-loop', 'Time of one end, full loop', 'factor', 'coiling', '1.00', 'practice'),
+  row('coiling.end-factor.half-loop', 'Time of one end, half loop', 'factor', 'coiling', '0.80', 'practice'),
+  row('coiling.end-factor.crossover-loop', 'Time of one end, loop crossed to the middle', 'factor', 'coiling', '1.15', 'practice'),
+  row('coiling.end-factor.extended-hook', 'Time of one end, loop on a straight shank', 'factor', 'coiling', '1.40', 'practice'),
+  row('coiling.end-factor.tangential', 'Time of one end, leg off the coil', 'factor', 'coiling', '0.80', 'practice'),
+  row('coiling.end-factor.straight', 'Time of one end, leg along the axis', 'factor', 'coiling', '1.00', 'practice'),
+  row('coiling.index-easy', 'Least index that coils at full feed', 'number', 'coiling', '6', 'shop-practice'),
+  row('coiling.index-slowing-percent', 'Slower feed for each unit of index below that', 'percent', 'coiling', '8', 'practice'),
   row('coiling.cap.fine', 'Most springs a minute, wire to 0.5 mm', 'pieces per minute', 'coiling', '200', 'shop-practice'),
   row('coiling.cap.light', 'Most springs a minute, wire to 2 mm', 'pieces per minute', 'coiling', '100', 'shop-practice'),
   row('coiling.cap.medium', 'Most springs a minute, wire to 6 mm', 'pieces per minute', 'coiling', '60', 'practice'),
@@ -74,7 +95,9 @@ export const RATE_CODES = [
 
   row('inspection.first-off-minutes', 'First-off, each job', 'minutes', 'inspection', '15', 'practice'),
   row('inspection.minutes-per-measurement', 'One measurement', 'minutes', 'inspection', '0.30', 'practice'),
-  row('inspection.measurements-per-spring', 'Measurements on each sampled spring', 'number', 'inspection', '3', 'practice'),
+  row('inspection.measurements-per-spring', 'Measurements on each sampled spring, compression', 'number', 'inspection', '3', 'practice'),
+  row('inspection.measurements-per-spring.extension', 'Measurements on each sampled spring, with hooks', 'number', 'inspection', '5', 'practice'),
+  row('inspection.measurements-per-spring.torsion', 'Measurements on each sampled spring, with legs', 'number', 'inspection', '4', 'practice'),
   row('inspection.aql', 'Acceptance quality limit of the sample: 0.65, 1.0, 1.5, 2.5, 4.0 or 6.5', 'percent', 'inspection', '1.0', 'policy'),
   row('certificate.2.1', 'Statement of compliance 2.1', 'currency', 'inspection', '6.00', 'practice'),
   row('certificate.2.2', 'Test report 2.2', 'currency', 'inspection', '12.00', 'practice'),
@@ -105,6 +128,7 @@ export const RATE_CODES = [
   row('gate.wire-min-mm', 'Thinnest wire quoted at once', 'millimetres', 'gate', '0.3', 'practice'),
   row('gate.wire-max-mm', 'Thickest wire quoted at once', 'millimetres', 'gate', '8', 'practice'),
   row('gate.slenderness-max', 'Greatest free length over mean diameter quoted at once', 'number', 'gate', '4', 'shop-practice'),
+  row('gate.energy-max-j', 'Most energy a spring with hooks or legs holds at work, quoted at once', 'joules', 'gate', '20', 'practice'),
   row('gate.tightest-grade', 'Tightest tolerance grade quoted at once', 'number', 'gate', '2', 'practice'),
   row('gate.life-max-cycles', 'Longest life quoted at once', 'number', 'gate', '10000000', 'practice'),
   row('gate.quantity-min', 'Fewest springs quoted at once', 'pieces', 'gate', '10', 'policy'),
@@ -123,6 +147,7 @@ export const RATE_CODES = [
   // The cheapest spring lies close to the limits of stress, clearance and fit by its nature, so these cautions do not stop it.
   row('gate.caution.clearance', 'Quoted at once though close to touching coils', 'yes is 1', 'gate', '1', 'policy'),
   row('gate.caution.stress', 'Quoted at once though close to an allowed stress', 'yes is 1', 'gate', '1', 'policy'),
+  row('gate.caution.hook', 'Quoted at once though close to what its hooks allow', 'yes is 1', 'gate', '1', 'policy'),
   row('gate.caution.fit', 'Quoted at once though close in bore or over rod', 'yes is 1', 'gate', '1', 'policy'),
   row('gate.caution.stock', 'Quoted at once though its wire is not stocked', 'yes is 1', 'gate', '1', 'policy'),
   row('gate.caution.other', 'Quoted at once with any other caution', 'yes is 1', 'gate', '0', 'policy'),

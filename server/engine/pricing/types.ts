@@ -1,4 +1,5 @@
 import type { Currency } from '#shared/money'
+import type { HookForm, LegForm, SpringKind } from '#shared/spring/codes'
 import type { RateCode } from './rate-codes'
 
 /** One version of the shop's rates. Values are decimal text: money in major units of `currency`, the rest in the rate's own unit. */
@@ -12,17 +13,24 @@ export interface PriceBook {
 
 export type EndForm = 'closed-ground' | 'closed' | 'open' | 'open-ground'
 export type ToleranceGrade = 1 | 2 | 3
+/** Hooks and legs, which a coiler forms one after the other. */
+export type FormedEnd = HookForm | LegForm
 export type CertificateKind = 'none' | '2.1' | '2.2' | '3.1'
 
-/** What pricing must know of a compression spring. Lengths mm, mass g of one spring, time min, temperature °C. */
+/** What pricing must know of a spring. Lengths mm, mass g of one spring, time min, temperature °C. */
 export interface PricedDesign {
+  kind: SpringKind
   material: string
   wireDiameterMm: number
   meanDiameterMm: number
   activeCoils: number
+  /** Coils wound: total coils of compression springs, body coils of the others. */
   totalCoils: number
   freeLengthMm: number
-  ends: EndForm
+  /** Of compression springs; hooks and legs are never ground. */
+  ends: EndForm | null
+  /** Form of the two hooks or legs, alike; null where none is formed. */
+  formed: FormedEnd | null
   /** Wire in one spring. */
   wireLengthMm: number
   massG: number

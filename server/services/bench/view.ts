@@ -54,7 +54,7 @@ export async function readBench({ db, now, timeZone }: Pick<ServiceContext, 'db'
   const first = rows[0]
   return {
     timeZone, centre: toCentreView(centre), current: views[0] ?? null, next: views.slice(1),
-    sheet: first?.design ? toSheet(first.design, Number(first.wireKg)) : null, cautions: first ? cautionsFor(first.kind) : [],
+    sheet: first?.design ? toSheet(first.design, Number(first.wireKg)) : null, cautions: first ? cautionsFor([first.kind], first.design) : [],
   }
 }
 

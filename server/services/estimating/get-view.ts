@@ -76,7 +76,7 @@ const whoWithoutSignIn = (event: typeof orderEvents.$inferSelect, order: OrderRe
 
 async function explainConflict(context: ServiceContext, order: OrderRecord, book: StoredPriceBook): Promise<ConflictView | null> {
   const { requirement } = order.request
-  const { best, result } = findDesign(requirement, { wires: await listCatalogueWires(context.db), book })
+  const { best, result } = await findDesign(requirement, { wires: await listCatalogueWires(context.db), book })
   return best ? null : describeConflictFor(requirement, result, { customer: customerOf(order), book })
 }
 

@@ -17,7 +17,7 @@ export async function refreshDates(
 ): Promise<StoredRung[]> {
   const { design } = quote
   if (!design) return [...rungs]
-  const priced = pricedDesignOf(design.material, { ...design, wireLengthMm: design.evaluation.wireLengthMm, massG: design.evaluation.massG })
+  const priced = pricedDesignOf(design)
   const refreshed: StoredRung[] = []
   for (const { rung, lines } of rungs) {
     // A wire that is no longer offered has no date; the estimator sees that before the customer does.

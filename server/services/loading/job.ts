@@ -29,6 +29,6 @@ export async function getJob(context: ServiceContext, ref: string): Promise<JobS
     ...moves.map(move => ({ at: move.at.toISOString(), who: move.who ?? 'Wirewright', words: move.words })),
     ...records.filter(record => record.act !== 'count').map(record => ({ at: record.at.toISOString(), who: record.who, words: `${OPERATION_NAMES[record.kind]}: ${record.act}${record.note ? `, ${record.note}` : ''}` })),
   ].sort((a, b) => a.at.localeCompare(b.at))
-  const cautions = [...new Set(view.operations.flatMap(operation => cautionsFor(operation.kind)))]
+  const cautions = cautionsFor(view.operations.map(operation => operation.kind), row?.design ?? null)
   return { ...view, timeZone: context.timeZone, wireProductId: row?.wireProductId ?? null, design: row?.design ?? null, sheet: row?.design ? toSheet(row.design, view.wireKg) : null, centres: centres.filter(centre => takesWire(centre, row?.design?.wireDiameterMm ?? 0)).map(toCentreView), history, cautions }
 }

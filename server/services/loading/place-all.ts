@@ -23,7 +23,7 @@ export async function placeWholeJob(context: ServiceContext, ref: string, versio
       const locked = await lockJob(tx, head.id)
       if (locked.job.version !== version) throw stale('job')
       if (locked.job.state !== 'to-plan' && locked.job.state !== 'planned') throw conflict('This job has started. Move its operations one by one.')
-      const shop = await readPlan(tx, { exceptJobId: head.id })
+      const shop = await readPlan(tx, { from: context.now, exceptJobId: head.id })
       const plan = placeJob({
         operations: locked.operations.map(row => ({ position: row.position, kind: row.kind, setUpMinutes: Number(row.setUpMinutes), runMinutes: Number(row.runMinutes) })),
         centres: planCentresOf(shop, context.timeZone), busyByCentre: shop.busyByCentre, wireDiameterMm: locked.wireDiameterMm, notBeforeMs: Math.ceil(context.now.getTime() / 300_000) * 300_000,

@@ -20,7 +20,8 @@ export async function previewOrder(context: ServiceContext, { requirement, count
     taxPercent: resolveTax({ book, customer, homeCountry: HOME_COUNTRY }).percent, depositPercent: rateText(book, 'policy.deposit-percent'),
     depositBy: addDays(shopDayOf(context), readNumberRates(book)['policy.deposit-hold-days']),
     ladder: toLadder(worked.rungs.map(rungAmountsOf)),
-    waitsForPerson: worked.reasons.map(({ code, customerText }) => ({ code, customerText })),
+    // The same words once, however many checks they stand for.
+    waitsForPerson: worked.reasons.filter(({ customerText }, at, all) => all.findIndex(other => other.customerText === customerText) === at).map(({ code, customerText }) => ({ code, customerText })),
     points: worked.points,
   }
 }

@@ -10,8 +10,8 @@ const SATURDAY = 6
 /** The plan as it stands: work centres, closed days and what is taken. */
 export type ShopPlan = { closedDays: readonly string[], centres: readonly Omit<PlanCentre, 'calendar'>[], shifts: ReadonlyMap<string, Omit<WorkCalendar, 'timeZone' | 'holidays'>>, busyByCentre: Readonly<Record<string, Interval[]>> }
 
-/** Reads the plan as the caller's transaction sees it: for whoever places operations. `exceptJobId` leaves one job's own places out. */
-export async function readPlan(db: Queryable, { exceptJobId }: { exceptJobId?: string } = {}): Promise<ShopPlan> {
+/** Reads the plan as the caller's transaction sees it, from a moment on: for whoever places operations. `exceptJobId` leaves one job's own places out. */
+export async function readPlan(db: Queryable, { from, exceptJobId }: { from?: Date, exceptJobId?: string } = {}): Promise<ShopPlan> {
   // One after another: a transaction has one connection, which takes one statement at a time.
   const centreRows = await db.select().from(workCentres).where(eq(workCentres.isActive, true)).orderBy(asc(workCentres.code)).limit(100)
   const closedRows = await db.select({ day: holidays.day }).from(holidays).limit(1_000)
@@ -19,7 +19,7 @@ export async function readPlan(db: Queryable, { exceptJobId }: { exceptJobId?: s
     centreId: operations.workCentreId,
     startMs: sql<string>`extract(epoch from lower(${operations.plannedSpan})) * 1000`, endMs: sql<string>`extract(epoch from upper(${operations.plannedSpan})) * 1000`,
   }).from(operations)
-    .where(and(isNotNull(operations.workCentreId), sql`upper(${operations.plannedSpan}) > now()`, exceptJobId ? ne(operations.jobId, exceptJobId) : undefined)).limit(20_000)
+    .where(and(isNotNull(operations.workCentreId), sql`upper(${operations.plannedSpan}) > ${from ? sql`${from.toISOString()}::timestamptz` : sql`now()`}`, exceptJobId ? ne(operations.jobId, exceptJobId) : undefined)).limit(20_000)
   const busyByCentre: Record<string, Interval[]> = {}
   for (const { centreId, startMs, endMs } of taken) {
     if (centreId !== null) (busyByCentre[centreId] ??= []).push({ startMs: Number(startMs), endMs: Number(endMs) })

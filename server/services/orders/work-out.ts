@@ -1,6 +1,5 @@
 import type { Requirement } from '#shared/schemas/enquiry'
-import type { ConflictView, GateReason, StoredDesign } from '#shared/schemas/quote'
-import type { LoadPoint } from '#shared/spring/sizing/types'
+import type { ConflictView, GateReason, StoredDesign, WorkingPoint } from '#shared/schemas/quote'
 import { listCatalogueWires, type CatalogueWire } from '../catalogue/list-wires'
 import type { ServiceContext } from '../context'
 import { judgeGate, readGatePolicy } from '../../engine/gate'
@@ -10,13 +9,13 @@ import type { StoredPriceBook } from '../price-books/read-book'
 import { describeConflictFor } from '../springs/describe-conflict'
 import { findDesign } from '../springs/find-design'
 import { workingPointsOf } from '../springs/requirement'
-import { pricedDesignOf, storedDesignOf } from '../springs/stored-design'
+import { pricedDesignOf, storedDesignOf, storedEnergyOf } from '../springs/stored-design'
 import { priceDesign, type WorkedRung } from './price-design'
 import { readShopPlan, type ShopPlan } from './shop-plan'
 
 /** Everything that follows from a requirement before anything is stored: the spring, its prices and dates, and who must look at it. */
 export type WorkedOut = {
-  book: StoredPriceBook, plan: ShopPlan, points: LoadPoint[],
+  book: StoredPriceBook, plan: ShopPlan, points: WorkingPoint[],
   design: StoredDesign | null, wire: CatalogueWire | null, rungs: WorkedRung[],
   /** Null where a spring was found. */
   conflict: ConflictView | null,
@@ -33,12 +32,12 @@ export type WorkedOut = {
 export async function workOut(context: ServiceContext, requirement: Requirement, customer: PricedCustomer): Promise<WorkedOut> {
   const [book, wires, plan] = await Promise.all([getCurrentPriceBook(context), listCatalogueWires(context.db), readShopPlan(context.db)])
   const points = workingPointsOf(requirement)
-  const { best, result, materialRule } = findDesign(requirement, { wires, book })
+  const { best, result, materialRule } = await findDesign(requirement, { wires, book })
   const priced = { requirement, customer, book, plan, clock: context }
 
   const design = best ? storedDesignOf(best, result.searched, requirement) : null
   const rungs = best && design
-    ? priceDesign({ ...priced, wire: best.wire, design: pricedDesignOf(design.material, { ...design, wireLengthMm: design.evaluation.wireLengthMm, massG: design.evaluation.massG }) })
+    ? priceDesign({ ...priced, wire: best.wire, design: pricedDesignOf(design) })
     : []
   return {
     book, plan, points, design, wire: best?.wire ?? null, rungs, materialRule,
@@ -54,8 +53,9 @@ function judge(requirement: Requirement, design: StoredDesign | null, rungs: rea
       toleranceGrade: requirement.toleranceGrade, surroundings: requirement.surroundings, ...(requirement.neededOn && { neededOn: requirement.neededOn }),
     },
     design && {
-      material: design.material, wireDiameterMm: design.wireDiameterMm, springIndex: design.evaluation.springIndex,
-      slenderness: design.freeLengthMm / design.meanDiameterMm, checks: design.evaluation.checks,
+      kind: design.kind, material: design.material, wireDiameterMm: design.wireDiameterMm, springIndex: design.evaluation.springIndex,
+      // Only what is pressed can bow.
+      slenderness: design.kind === 'compression' ? design.freeLengthMm / design.meanDiameterMm : 0, storedEnergyJ: storedEnergyOf(design), checks: design.evaluation.checks,
     },
     rungs,
     readGatePolicy(book),

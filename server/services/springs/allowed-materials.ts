@@ -6,15 +6,15 @@ import type { Requirement } from '#shared/schemas/enquiry'
 export type AllowedMaterials = { materials: readonly MaterialCode[], rule: string | null }
 
 /**
- * Where the customer leaves the material to us: anything where it is dry, stainless where plain steel would rust without a
- * finish. A material that is named is taken as named; the check of the surroundings then says what to mind.
- * Common practice, no source.
+ * Where the customer leaves the material to us: anything where it is dry, else what does not rust: stainless and copper alloys.
+ * Copper alloys cost more, so that the price leaves them out unless nothing else does it. A material that is named is taken as
+ * named; the check of the surroundings then says what to mind. Common practice, no source.
  */
 export function allowedMaterialsFor({ material, surroundings }: Pick<Requirement, 'material' | 'surroundings'>): AllowedMaterials {
   if (material !== 'any') return { materials: [material], rule: null }
   if (surroundings === 'dry') return { materials: MATERIAL_CODES, rule: null }
   return {
     materials: MATERIAL_CODES.filter(code => getMaterial(code).resistsCorrosion),
-    rule: `Surroundings: ${surroundings}. Stainless wire only, since plain steel would rust there without a finish (common practice).`,
+    rule: `Surroundings: ${surroundings}. Only wire that does not rust, stainless or a copper alloy, since plain steel would without a finish (common practice).`,
   }
 }

@@ -27,7 +27,7 @@ const withoutDialect = ({ $schema: _dialect, ...schema }: Record<string, unknown
 export function describeApi(origin: string): Record<string, unknown> {
   return {
     openapi: '3.1.0',
-    info: { title: 'Wirewright: springs', version: '1', description: 'SI units, named in each field: mm, N, MPa, g, kg, °C. Numbers are finite; an unknown field is refused. Compression springs only, for now.' },
+    info: { title: 'Wirewright: springs', version: '1', description: 'SI units, named in each field: mm, N, MPa, g, kg, °C. Numbers are finite; an unknown field is refused.' },
     servers: [{ url: origin }],
     paths: {
       '/api/v1/springs/evaluate': postOperation({ id: 'evaluateSpring', summary: 'A spring fully described: every computed value and check.', request: 'EvaluateRequest', response: 'EvaluateResponse' }),

@@ -1,5 +1,5 @@
 import type { EvaluateRequest, EvaluateResponse } from '#shared/schemas/spring'
-import { evaluateCompression } from '#shared/spring/mechanics'
+import { evaluateSpring as evaluate } from '#shared/spring/mechanics/evaluate-spring'
 
 /** Every computed value and check of a spring that is fully described. */
-export const evaluateSpring = (request: EvaluateRequest): EvaluateResponse => evaluateCompression(request) as EvaluateResponse
+export const evaluateSpring = (request: EvaluateRequest): EvaluateResponse => evaluate(request)

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import {
-  COIL_HANDS, COMPRESSION_ENDS, MATERIAL_CODES, SEATING_COEFFICIENTS, STRESS_METHODS, SURROUNDINGS, TOLERANCE_GRADES,
+  COIL_HANDS, COMPRESSION_ENDS, HOOK_FORMS, LEG_FORMS, MATERIAL_CODES, SEATING_COEFFICIENTS, STRESS_METHODS, SURROUNDINGS, TOLERANCE_GRADES,
 } from '../../spring/codes'
 
 /**
@@ -19,15 +19,6 @@ function choice<const T extends readonly [string, ...string[]]>(what: string, va
   return z.enum(values, { error: `${what} must be one of: ${values.join(', ')}.` })
 }
 
-/** Only compression is calculated so far; the other kinds get a sentence of their own. */
-export const CompressionKind = z.literal('compression', {
-  error: (issue) => {
-    if (issue.input === 'extension') return 'Extension springs are not yet offered by the calculation.'
-    if (issue.input === 'torsion') return 'Torsion springs are not yet offered by the calculation.'
-    return 'The kind must be compression.'
-  },
-})
-
 export const MaterialCodeSchema = choice('The material', MATERIAL_CODES)
 export const CompressionEndsSchema = choice('The ends', COMPRESSION_ENDS)
 export const StressMethodSchema = choice('The method', STRESS_METHODS)
@@ -42,6 +33,9 @@ export const WireDiameterMm = quantity('The wire diameter', 'mm', { min: 0.01, m
 export const LengthMm = quantity('The length', 'mm', { min: 0.01, max: 20_000 })
 export const ForceN = quantity('The force', 'N', { min: 0.0001, max: 10_000_000 })
 export const RateNPerMm = quantity('The rate', 'N/mm', { min: 0.00001, max: 10_000_000 })
+export const MomentNmm = quantity('The moment', 'N mm', { min: 0.0001, max: 1_000_000_000 })
+export const AngleDeg = quantity('The angle', 'degrees', { min: 0.001, max: 360_000 })
+export const RateNmmPerDeg = quantity('The rate', 'N mm per degree', { min: 0.0000001, max: 100_000_000 })
 export const FreeLengthMm = quantity('The free length', 'mm', { min: 0.01, max: 20_000 })
 export const TemperatureC = quantity('The temperature', '°C', { min: -273, max: 1500 })
 
@@ -84,10 +78,8 @@ export const MaterialValuesSchema = z.strictObject({
   densityKgPerM3: quantity('The density', 'kg/m3', { min: 500, max: 25_000 }).optional(),
 })
 
-/** Fields evaluating and sizing share. */
-export const compressionConditions = {
-  ends: CompressionEndsSchema.optional(),
-  seatingCoefficient: SeatingCoefficientSchema.optional(),
+/** Fields of every kind that evaluating and sizing share. */
+export const springConditions = {
   method: StressMethodSchema.optional(),
   temperatureC: TemperatureC.optional(),
   duty: DutySchema.optional(),
@@ -95,6 +87,31 @@ export const compressionConditions = {
   preset: z.boolean({ error: 'preset must be true or false.' }).optional(),
   toleranceGrade: ToleranceGradeSchema.optional(),
   fit: FitSchema.optional(),
+}
+
+export const compressionConditions = {
+  ...springConditions,
+  ends: CompressionEndsSchema.optional(),
+  seatingCoefficient: SeatingCoefficientSchema.optional(),
   guided: z.boolean({ error: 'guided must be true or false.' }).optional(),
   solidSafe: z.boolean({ error: 'solidSafe must be true or false.' }).optional(),
+}
+
+const BendRadiusMm = quantity('The bend radius', 'mm', { min: 0.005, max: 5000 })
+
+export const HookSchema = z.strictObject({
+  form: choice('The form of the hooks', HOOK_FORMS),
+  bendRadiusMm: BendRadiusMm.optional(),
+  sideBendRadiusMm: BendRadiusMm.optional(),
+})
+export const extensionConditions = { ...springConditions, hook: HookSchema.optional() }
+
+export const LegSchema = z.strictObject({
+  lengthMm: quantity('The length of the leg', 'mm', { min: 0.01, max: 5000 }),
+  form: choice('The form of the leg', LEG_FORMS),
+})
+export const torsionConditions = {
+  ...springConditions,
+  legs: z.array(LegSchema, { error: 'Legs must be a list of lengths and forms.' }).max(2, { error: 'At most two legs.' }).optional(),
+  loadOpens: z.boolean({ error: 'loadOpens must be true or false.' }).optional(),
 }

@@ -12,7 +12,7 @@ export const MaterialSchema = z.object({
   code: MaterialCodeSchema,
   name: z.string(),
   standard: z.string(),
-  family: z.enum(['cold-drawn-carbon', 'tempered-steel', 'stainless']),
+  family: z.enum(['cold-drawn-carbon', 'tempered-steel', 'stainless', 'copper-alloy']),
   wireDiameterFromMm: z.number(),
   wireDiameterToMm: z.number(),
   youngsModulusMpa: modulus,

@@ -19,6 +19,8 @@ export interface Figure {
   readonly widthPx: number
   readonly heightPx: number
   readonly shapes: readonly Shape[]
+  /** The scale it is drawn at. */
+  readonly pxPerMm: number
   /** True if a long thin spring is drawn with its middle left out between break lines. */
   readonly isInterrupted: boolean
 }
@@ -75,5 +77,5 @@ export function figureShapes(spring: DrawnSpring, options: FigureOptions): Figur
     ...dimensionAcross({ x1Px: x0Px, x2Px: endPx, yPx: topPx - 20, partPx: [topPx, topPx], label: lengthLabel(shownFree ? '0' : '', lengthMm, units) }),
     ...leader({ fromPx: [crownXPx, bottomPx - wireRadiusPx / 2], elbowPx: [crownXPx + 20, bottomPx + 26], label: `${diameterSign}${formatWireDiameter(spring.wireDiameterMm, units, { unit: false })} wire` }),
   ]
-  return { widthPx: Number(px(widthPx)), heightPx: Number(px(heightPx)), shapes, isInterrupted }
+  return { widthPx: Number(px(widthPx)), heightPx: Number(px(heightPx)), shapes, pxPerMm, isInterrupted }
 }

@@ -1,3 +1,4 @@
+import { penOf, SHEET } from './pens'
 import { px, type Shape, type TextShape } from './shapes'
 
 const escapeText = (value: string): string => value.replace(/[&<>"]/g, (mark) => `&#${mark.charCodeAt(0)};`)
@@ -26,47 +27,15 @@ function shapeMarkup(shape: Shape, inks: Inks): string {
   return `<svg x="${box[0]}" y="${box[1]}" width="${box[2]}" height="${box[3]}" viewBox="${box.join(' ')}">${shape.shapes.map((inner) => shapeMarkup(inner, inks)).join('')}</svg>`
 }
 
-// The drawing on paper, where no style sheet is at hand: the tokens' values of design.md
-const INK = '#16191F'
-const GRAPHITE = '#474E58'
-const STEEL = '#1D4A76'
-const PAPER_INKS: Record<string, string> = {
-  'w-edge near': `fill="none" stroke="${INK}"`,
-  'w-edge far': 'fill="none" stroke="#7C848B"',
-  'w-body near': 'fill="none" stroke="#F8F9F9"',
-  'w-body far': 'fill="none" stroke="#E3E7E8"',
-  'w-cut': `fill="none" stroke="${INK}" stroke-width="1.4"`,
-  'w-face': `fill="none" stroke="${INK}" stroke-width="1.6"`,
-  'dim-line': `fill="none" stroke="${GRAPHITE}" stroke-width="0.9"`,
-  'dim-arrow': `fill="${GRAPHITE}"`,
-  'dim-text': `fill="${INK}" font-size="14" font-weight="500"`,
-  'tick': `fill="${GRAPHITE}" font-size="13"`,
-  'chart-title': `fill="${INK}" font-size="14" font-weight="600"`,
-  'axis': `fill="none" stroke="${STEEL}" stroke-width="0.9" stroke-dasharray="16 3.5 2.5 3.5"`,
-  'hatch': `fill="none" stroke="${GRAPHITE}" stroke-width="0.9" opacity="0.55"`,
-  'plate': `fill="none" stroke="${INK}" stroke-width="2.4"`,
-  'ghost': `fill="none" stroke="${GRAPHITE}" stroke-width="0.9" stroke-dasharray="5 4"`,
-  'plumb': `fill="none" stroke="${STEEL}" stroke-width="1" stroke-dasharray="2 3"`,
-  'gridline': 'fill="none" stroke="#C9CDC8" stroke-width="0.8"',
-  'base': `fill="none" stroke="${INK}" stroke-width="1.1"`,
-  'break': `fill="none" stroke="${GRAPHITE}" stroke-width="0.9"`,
-  'solid-edge': `fill="none" stroke="${INK}" stroke-width="1.4"`,
-  'least': `fill="none" stroke="${GRAPHITE}" stroke-width="1" stroke-dasharray="6 3"`,
-  'load-line': `fill="none" stroke="${INK}" stroke-width="1.8"`,
-  'tolerance': `fill="none" stroke="${INK}" stroke-width="1.4"`,
-  'wanted': `fill="#FDFDFB" stroke="${INK}" stroke-width="1.8"`,
-  'now': `fill="${STEEL}"`,
-  'force': `fill="none" stroke="${STEEL}" stroke-width="2.2"`,
-  'force-arrow': `fill="${STEEL}"`,
-}
-
-/** Attributes for a look without a style sheet; an unknown look throws, so that no line is lost in silence. */
+/** Attributes for a look; an unknown look throws, so that no line is lost in silence. */
 function paperInks(look: string): string {
-  const isRound = look.endsWith(' round')
-  const isHalo = look.endsWith(' halo')
-  const ink = PAPER_INKS[look.replace(/ (round|halo)$/, '')]
-  if (ink === undefined) throw new Error(`No ink is known for the look '${look}'`)
-  return ` ${ink}${isRound ? ' stroke-linecap="round"' : ''}${isHalo ? ' paint-order="stroke" stroke="#FDFDFB" stroke-width="5" stroke-linejoin="round"' : ''}`
+  const { pen, isRound, hasHalo } = penOf(look)
+  const written: Record<string, string | number | undefined> = {
+    'fill': pen.fill ?? 'none', 'stroke': pen.stroke, 'stroke-width': pen.widthPx, 'stroke-dasharray': pen.dashPx?.join(' '), 'opacity': pen.opacity,
+    'font-size': pen.fontPx, 'font-weight': pen.fontWeight, 'stroke-linecap': isRound ? 'round' : undefined,
+    ...(hasHalo ? { 'paint-order': 'stroke', 'stroke': SHEET, 'stroke-width': 5, 'stroke-linejoin': 'round' } : {}),
+  }
+  return Object.entries(written).map(([name, value]) => (value === undefined ? '' : ` ${name}="${value}"`)).join('')
 }
 
 interface Sheet {

@@ -2,6 +2,7 @@ import { fromSi, type UnitSystem } from '../../units/convert'
 import { decimalsFor, formatForce, formatLength, formatNumber, formatShare, formatWireDiameter } from '../../units/format'
 import type { CompressionEnds } from '../codes'
 import { shearStressMpa } from '../mechanics/stress'
+import type { ChartRow } from './chart-rows'
 import type { DrawnSpring } from './drawn-spring'
 import { forceAtN, type LoadCharted } from './load-chart'
 
@@ -67,22 +68,15 @@ export function readingSentence({ length, force, share, stateWords }: PressReadi
   return `At ${length} it pushes with ${force}${share === null ? '' : `, at ${share} of the stress allowed`}. ${stateWords}`
 }
 
-export interface ChartRow {
-  readonly name: string
-  readonly length: string
-  readonly force: string
-  readonly tolerance: string
-}
-
 /** The chart's data as rows of a table, longest first. */
 export function chartRows(charted: LoadCharted, units: UnitSystem): ChartRow[] {
   const at = (name: string, lengthMm: number, forceN = forceAtN(charted, lengthMm), toleranceN?: number | null) =>
-    ({ lengthMm, name, length: formatLength(lengthMm, units), force: formatForce(forceN, units), tolerance: toleranceN ? `±${formatForce(toleranceN, units)}` : '' })
+    ({ lengthMm, name, place: formatLength(lengthMm, units), load: formatForce(forceN, units), tolerance: toleranceN ? `±${formatForce(toleranceN, units)}` : '' })
   const rows = [
     at('Free', charted.freeLengthMm, 0),
     ...charted.points.map((point, i) => at(`Load F${i + 1}`, point.lengthMm, point.forceN, point.toleranceN)),
     ...(charted.leastWorkingLengthMm ? [at('Least working length', charted.leastWorkingLengthMm)] : []),
     at('Solid, not for use', charted.solidLengthMm),
   ]
-  return rows.sort((a, b) => b.lengthMm - a.lengthMm).map(({ name, length, force, tolerance }) => ({ name, length, force, tolerance }))
+  return rows.sort((a, b) => b.lengthMm - a.lengthMm).map(({ name, place, load, tolerance }) => ({ name, place, load, tolerance }))
 }

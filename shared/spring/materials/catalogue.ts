@@ -1,5 +1,6 @@
 import { MATERIAL_CODES, type MaterialCode } from '../codes'
 import { ASTM_A227, ASTM_A228, ASTM_A229, ASTM_A232, ASTM_A313_302, ASTM_A401 } from './astm'
+import { ASTM_B159, ASTM_B197 } from './copper-alloys'
 import { EN10270_1_SH, EN10270_1_SL, EN10270_1_SM } from './en10270-1'
 import { EN10270_2_FDSICR } from './en10270-2'
 import { EN10270_3_14310 } from './en10270-3'
@@ -17,6 +18,8 @@ const MATERIALS: Readonly<Record<MaterialCode, Material>> = {
   'ASTM-A232': ASTM_A232,
   'ASTM-A401': ASTM_A401,
   'ASTM-A313-302': ASTM_A313_302,
+  'ASTM-B159': ASTM_B159,
+  'ASTM-B197': ASTM_B197,
 }
 
 /** The material of a code. */

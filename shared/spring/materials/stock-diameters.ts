@@ -35,7 +35,8 @@ function inMillimetres(inches: readonly number[]): number[] {
  */
 export function standardDiametersMm(code: MaterialCode): readonly number[] {
   const { min, max } = getMaterial(code).strength.rangeMm
-  const sizes = code.startsWith('EN')
+  // Copper alloys are sold here in the preferred metric sizes (common practice, no source).
+  const sizes = code.startsWith('EN') || code.startsWith('ASTM-B')
     ? [...PREFERRED_MM, ...EN_TABULATED_MM]
     : inMillimetres(code === 'ASTM-A228' ? [...MUSIC_GAUGE_IN, ...STEEL_GAUGE_IN] : STEEL_GAUGE_IN)
   const limit = Math.min(max, THICKEST_COLD_COILED_MM)

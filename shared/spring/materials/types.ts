@@ -27,7 +27,7 @@ export interface StrengthModel {
 }
 
 /** Families share static limits, fatigue reading and behaviour with heat. */
-export type MaterialFamily = 'cold-drawn-carbon' | 'tempered-steel' | 'stainless'
+export type MaterialFamily = 'cold-drawn-carbon' | 'tempered-steel' | 'stainless' | 'copper-alloy'
 
 export interface Material {
   readonly code: MaterialCode

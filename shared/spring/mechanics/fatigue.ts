@@ -1,5 +1,7 @@
 /** Lives below this are not checked for fatigue. */
 export const FATIGUE_CYCLES = 1e5
+/** The fractions of tensile strength by life end here. */
+export const LONGEST_PUBLISHED_LIFE = 1e7
 
 /**
  * Torsional fatigue strength of steel spring wire under 10 mm, independent of size and strength (Zimmerli's data as quoted
@@ -66,7 +68,7 @@ const LIFE_FRACTIONS = [
   { decade: 7, unpeened: 0.3, peened: 0.36 },
 ] as const
 
-/** Fraction of tensile strength allowed from zero to greatest stress at a life; straight between decades, constant over 1e7. */
+/** Fraction of tensile strength allowed from zero to greatest stress at a life; straight between decades; over 1e7, where none is published, that of 1e7. */
 export function lifeFraction(cycles: number, peened: boolean): number | null {
   if (cycles < 1e5) return null
   const [five, six, seven] = LIFE_FRACTIONS

@@ -1,5 +1,8 @@
+export { evaluateSpring } from './evaluate-spring'
+export { evaluateExtension } from './extension/evaluate'
+export { evaluateTorsion } from './torsion/evaluate'
 export { evaluateCompression } from './compression/evaluate'
-export type { EvaluationContext } from './compression/model'
+export type { EvaluationContext } from './wire-model'
 export { activeCoilsForRate, rateNPerMm } from './rate'
 export { forceAtStressN, shearStressMpa } from './stress'
 export { bergstraesserFactor, directShearFactor, stressCorrectionFactor, wahlFactor } from './stress-factors'
@@ -18,6 +21,10 @@ export {
 export { meanDiameterToleranceMm } from './tolerances/mean-diameter'
 export { freeLengthToleranceMm, loadToleranceN, parallelismMm, squarenessMm } from './tolerances/load-and-length'
 export type {
-  Check, CheckSeverity, CompressionConditions, CompressionEvaluation, CompressionInput, Duty, FatigueResult, Fit, MaterialValues,
+  Check, CheckSeverity, Duty, FatigueResult, Fit, MaterialValues,
   PointInput, PointResult, Tolerance,
 } from './types'
+export type { CompressionConditions, CompressionEvaluation, CompressionInput } from './compression/types'
+export type { EvaluationOf, InputOf, SpringEvaluation, SpringInput } from './spring'
+export type { ExtensionConditions, ExtensionEvaluation, ExtensionInput, Hook } from './extension/types'
+export type { Leg, TorsionConditions, TorsionEvaluation, TorsionInput, TorsionPointInput, TorsionPointResult } from './torsion/types'

@@ -1,6 +1,4 @@
-import type {
-  CoilHand, CompressionEnds, MaterialCode, SeatingCoefficient, StressMethod, ToleranceGrade,
-} from '../codes'
+import type { CoilHand, MaterialCode, StressMethod, ToleranceGrade } from '../codes'
 
 /** Values that replace the table's for one calculation. */
 export interface MaterialValues {
@@ -29,11 +27,8 @@ export type PointInput =
   | { readonly forceN: number }
   | { readonly deflectionMm: number }
 
-/** What evaluating and sizing share: how the spring is made, seated and used. */
-export interface CompressionConditions {
-  readonly ends?: CompressionEnds | undefined
-  /** Default 0.5: both ends on flat parallel seats. */
-  readonly seatingCoefficient?: SeatingCoefficient | undefined
+/** What evaluating and sizing share for every kind: how the spring is made and used. */
+export interface SpringConditions {
   readonly method?: StressMethod | undefined
   readonly temperatureC?: number | undefined
   readonly duty?: Duty | undefined
@@ -41,24 +36,13 @@ export interface CompressionConditions {
   readonly preset?: boolean | undefined
   readonly toleranceGrade?: ToleranceGrade | undefined
   readonly fit?: Fit | undefined
-  /** A guide other than the bore or the rod of `fit` keeps it straight. */
-  readonly guided?: boolean | undefined
-  /** False: going solid is excluded by the design, so the stress there only cautions. */
-  readonly solidSafe?: boolean | undefined
 }
 
-/** A compression spring fully described. Lengths in mm, forces in N. */
-export interface CompressionInput extends CompressionConditions {
-  readonly kind: 'compression'
+/** What describes a spring outright, whatever its kind. Lengths in mm. */
+export interface WoundSpring {
   readonly material: MaterialCode
   readonly wireDiameterMm: number
   readonly meanDiameterMm: number
-  readonly activeCoils: number
-  /** Default: the active coils and the end coils of the form. */
-  readonly totalCoils?: number | undefined
-  readonly freeLengthMm: number
-  /** Working positions in order of rising force, up to 6. */
-  readonly points?: readonly PointInput[] | undefined
   readonly materialValues?: MaterialValues | undefined
   readonly hand?: CoilHand | undefined
 }
@@ -106,32 +90,19 @@ export interface FatigueResult {
   readonly lifeFractionSafetyFactor: number | null
 }
 
-export interface CompressionEvaluation {
+/** What every evaluation gives, whatever the kind. Lengths mm, masses g, stresses MPa at 20 °C. */
+export interface WoundEvaluation {
   readonly springIndex: number
   readonly stressCorrectionFactor: number
-  readonly rateNPerMm: number
   readonly outerDiameterMm: number
   readonly innerDiameterMm: number
-  readonly totalCoils: number
   readonly wireLengthMm: number
   readonly massG: number
+  /** Null where the standard does not cover the wire and no strength is given; the same for the allowable stress. */
   readonly tensileStrengthMpa: number | null
   readonly allowableStressMpa: number | null
-  readonly points: readonly PointResult[]
   readonly checks: readonly Check[]
   readonly tolerances: readonly Tolerance[]
   readonly assumptions: readonly string[]
-  readonly solidLengthMm: number
-  readonly solid: { readonly forceN: number, readonly stressMpa: number, readonly correctedStressMpa: number }
-  /** Sum of the least gaps between coils, Sa. */
-  readonly minimumClearanceMm: number
-  /** Solid length and least gaps, Ln. */
-  readonly shortestLengthMm: number
-  readonly outerDiameterAtSolidMm: number
-  readonly pitchMm: number
-  readonly naturalFrequencyHz: number
-  readonly buckling: { readonly slenderness: number, readonly criticalDeflectionMm: number | null, readonly ok: boolean }
   readonly fatigue: FatigueResult | null
-  /** Rate at the working temperature; null where none is given. */
-  readonly rateAtTemperatureNPerMm: number | null
 }

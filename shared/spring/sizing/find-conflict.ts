@@ -1,70 +1,106 @@
-import type { ToleranceGrade } from '../codes'
+import type { SpringKind, ToleranceGrade } from '../codes'
 import { getMaterial } from '../materials'
-import { meanDiameterToleranceMm } from '../mechanics/tolerances/mean-diameter'
+import { INDEX_STEPS, MEAN_DIAMETER_STEPS_MM, meanDiameterToleranceMm } from '../mechanics/tolerances/mean-diameter'
 import { checkSizeRequirement } from './check-requirement'
-import { anchorPaths, listRequirements, readNumber, writeNumber, type Requirement } from './requirement-paths'
+import type { DroppableRequirement } from './kind-search'
+import { searchOf } from './kinds'
+import { FIT_PATHS, readNumber, writeNumber } from './requirement-paths'
 import { isFeasible, searchWires, type SearchOptions } from './search-wires'
-import type { CompressionSizeRequest, SizingChange, SizingConflict, SizingWire } from './types'
-import { LEAST_INDEX, MOST_INDEX } from './compression/wire-search'
+import { LEAST_INDEX, MOST_INDEX } from './steps'
+import type { SizeRequestOf, SizingChange, SizingConflict, SizingWire, SpringSizeRequest } from './types'
 
 /**
- * Why no wire gives a spring: a set of requirements that cannot hold together although any smaller part of it can, and for
- * each single number the least change found that admits a spring, proven by sizing again.
+ * Why no wire gives a spring: a smallest set of requirements that cannot hold together, and for each single number the
+ * least change found that admits a spring, proven by sizing again.
  */
-export function findConflict<W extends SizingWire>(request: CompressionSizeRequest, wires: readonly W[], options: SearchOptions<W> = {}): SizingConflict<W> {
+export function findConflict<W extends SizingWire>(request: SpringSizeRequest, wires: readonly W[], options: SearchOptions<W> = {}): SizingConflict<W> {
   if (wires.length === 0) return { requirements: ['materials'], changes: [] }
   return { requirements: smallestClash(request, wires), changes: findChanges(request, wires, options) }
 }
 
-function smallestClash<W extends SizingWire>(request: CompressionSizeRequest, wires: readonly W[]): string[] {
+function smallestClash(request: SpringSizeRequest, wires: readonly SizingWire[]): string[] {
+  switch (request.kind) {
+    case 'compression': return smallestClashOf('compression', request, wires)
+    case 'extension': return smallestClashOf('extension', request, wires)
+    case 'torsion': return smallestClashOf('torsion', request, wires)
+  }
+}
+
+/**
+ * First what clashes whatever the spring must do. Then one requirement after another is left out while the rest still clash,
+ * which leaves a set of which every part is needed; and every smaller set is tried, by size, so what is named is a smallest.
+ */
+function smallestClashOf<K extends SpringKind>(kind: K, request: SizeRequestOf<K>, wires: readonly SizingWire[]): string[] {
+  const { temperatureC } = request
+  if (temperatureC !== undefined && wires.every(wire => getMaterial(wire.material).temperatureLimitC.value < temperatureC)) return ['temperatureC']
   const { boreMm, rodMm } = request.fit ?? {}
   if (boreMm !== undefined && rodMm !== undefined && !wires.some(wire => fitsBetween(boreMm, rodMm, wire, request.toleranceGrade ?? 2))) {
     return ['fit.boreMm', 'fit.rodMm']
   }
-  const all = listRequirements(request)
-  const clashes = (kept: readonly Requirement[]) => !isFeasible(dropAllBut(request, all, kept), wires)
-  // Pairs of anchor and one requirement are the plainest answers: look for them first.
-  if (request.points.length === 1) {
-    const single = all.find(requirement => clashes([requirement]))
-    if (single) return [...anchorPaths(request), single.path]
-  }
-  let kept = all
+  const search = searchOf(kind)
+  const all = search.listRequirements(request)
+  const anchors = search.anchorPaths(request)
+  // Without a load there is nothing to search for.
+  const isWhole = (kept: readonly DroppableRequirement<K>[]) => anchors.length > 0 || kept.some(({ path }) => path.startsWith('points.'))
+  const clashes = (kept: readonly DroppableRequirement<K>[]) => isWhole(kept) && !isFeasible(dropAllBut(request, all, kept), wires)
+
+  let least = all
   for (const requirement of all) {
-    if (isLastPoint(requirement, kept, request)) continue
-    const fewer = kept.filter(other => other !== requirement)
-    if (clashes(fewer)) kept = fewer
+    const fewer = least.filter(other => other !== requirement)
+    if (clashes(fewer)) least = fewer
   }
-  return [...anchorPaths(request), ...kept.map(requirement => requirement.path)]
+  for (let size = 0; size < least.length; size++) {
+    const found = firstSubset(all, size, clashes)
+    if (found) least = found
+  }
+  return [...anchors, ...least.map(({ path }) => path)]
 }
 
-// Room between bore and rod for one thickness of wire and the diameter tolerance, whatever the load; midway is best.
-function fitsBetween(boreMm: number, rodMm: number, wire: SizingWire, grade: ToleranceGrade): boolean {
-  const d = wire.wireDiameterMm
-  const D = Math.min(Math.max((boreMm + rodMm) / 2, LEAST_INDEX * d), MOST_INDEX * d)
-  const tolerance = meanDiameterToleranceMm(D, D / d, grade)
-  const slack = Number.isNaN(tolerance) ? 0 : tolerance
-  return D + d + slack <= boreMm && D - d - slack >= rodMm
+// The first subset of a size, in the order of the list, that satisfies.
+function firstSubset<T>(list: readonly T[], size: number, satisfies: (subset: readonly T[]) => boolean): readonly T[] | null {
+  const choose = (from: number, chosen: readonly T[]): readonly T[] | null => {
+    if (chosen.length === size) return satisfies(chosen) ? chosen : null
+    for (let i = from; i < list.length; i++) {
+      const found = choose(i + 1, [...chosen, list[i] as T])
+      if (found) return found
+    }
+    return null
+  }
+  return choose(0, [])
 }
 
-function dropAllBut(request: CompressionSizeRequest, all: readonly Requirement[], kept: readonly Requirement[]): CompressionSizeRequest {
+// Room between bore and rod for one thickness of wire and the diameter tolerance, whatever the load. Between two steps the tolerance is constant.
+function fitsBetween(boreMm: number, rodMm: number, { wireDiameterMm: d }: SizingWire, grade: ToleranceGrade): boolean {
+  const low = LEAST_INDEX * d
+  const high = MOST_INDEX * d
+  const steps = [...MEAN_DIAMETER_STEPS_MM, ...INDEX_STEPS.map(w => w * d)].filter(D => D > low && D < high).sort((a, b) => a - b)
+  let from = low
+  for (const to of [...steps, high]) {
+    const middle = (from + to) / 2
+    const tolerance = meanDiameterToleranceMm(middle, middle / d, grade)
+    const slack = d + (Number.isNaN(tolerance) ? 0 : tolerance)
+    if (Math.max(from, rodMm + slack) <= Math.min(to, boreMm - slack)) return true
+    from = to
+  }
+  return false
+}
+
+function dropAllBut<K extends SpringKind>(request: SizeRequestOf<K>, all: readonly DroppableRequirement<K>[], kept: readonly DroppableRequirement<K>[]): SizeRequestOf<K> {
   return all.reduce((current, requirement) => (kept.includes(requirement) ? current : requirement.without(current)), request)
 }
 
-// Of two points one must stay, or nothing is left to size.
-function isLastPoint(requirement: Requirement, kept: readonly Requirement[], request: CompressionSizeRequest): boolean {
-  if (request.points.length < 2 || !requirement.path.startsWith('points.')) return false
-  return kept.filter(other => other.path.startsWith('points.')).length < 2
-}
-
-// Direction in which a limit of the fit gives way.
-const FIT_WIDENS: Readonly<Record<string, 1 | -1>> = {
-  'fit.boreMm': 1, 'fit.rodMm': -1, 'fit.maxFreeLengthMm': 1, 'fit.maxSolidLengthMm': 1,
-}
 // Steps outward from the asked value, as fractions of it, until a spring is found.
-const PROBES = [0.02, 0.05, 0.1, 0.2, 0.35, 0.5, 0.75, 1, 2, 4] as const
-const REFINEMENTS = 7
+const PROBES = [0.005, 0.02, 0.05, 0.1, 0.2, 0.35, 0.5, 0.75, 1, 2, 4] as const
+const REFINEMENTS = 12
+const FIGURES = 4
 
-function findChanges<W extends SizingWire>(request: CompressionSizeRequest, wires: readonly W[], options: SearchOptions<W>): SizingChange<W>[] {
+// A limit of the fit gives way in one direction: the rod gets thinner, the others wider. Anything else may go either way.
+function directions(path: string): readonly (1 | -1)[] {
+  if (path === 'fit.rodMm') return [-1]
+  return FIT_PATHS.includes(path) ? [1] : [1, -1]
+}
+
+function findChanges<W extends SizingWire>(request: SpringSizeRequest, wires: readonly W[], options: SearchOptions<W>): SizingChange<W>[] {
   const changes: SizingChange<W>[] = []
   for (const path of changeablePaths(request)) {
     const from = readNumber(request, path)
@@ -78,15 +114,15 @@ function findChanges<W extends SizingWire>(request: CompressionSizeRequest, wire
   return changes.sort((a, b) => relative(a) - relative(b))
 }
 
-function changeablePaths(request: CompressionSizeRequest): string[] {
-  return [
-    ...Object.keys(FIT_WIDENS),
-    ...request.points.flatMap((_, i) => [`points.${i}.forceN`, `points.${i}.lengthMm`]),
-    'rateNPerMm', 'freeLengthMm', 'temperatureC', 'duty.cycles',
-  ]
+function changeablePaths(request: SpringSizeRequest): readonly string[] {
+  switch (request.kind) {
+    case 'compression': return searchOf('compression').changeablePaths(request)
+    case 'extension': return searchOf('extension').changeablePaths(request)
+    case 'torsion': return searchOf('torsion').changeablePaths(request)
+  }
 }
 
-function leastChange<W extends SizingWire>(request: CompressionSizeRequest, wires: readonly W[], path: string, from: number): number | null {
+function leastChange(request: SpringSizeRequest, wires: readonly SizingWire[], path: string, from: number): number | null {
   const works = (value: number) => {
     const changed = writeNumber(request, path, value)
     return checkSizeRequirement(changed).length === 0 && isFeasible(changed, wires)
@@ -94,21 +130,21 @@ function leastChange<W extends SizingWire>(request: CompressionSizeRequest, wire
   if (path === 'temperatureC' || path === 'duty.cycles') {
     return thresholds(path, wires).filter(value => value < from).find(works) ?? null
   }
-  const way = FIT_WIDENS[path]
-  const ways = way === undefined ? ([1, -1] as const) : [way]
-  let failing = new Map<1 | -1, number>(ways.map(w => [w, from]))
+  const ways = directions(path)
+  const failing = new Map<1 | -1, number>(ways.map(way => [way, from]))
   for (const fraction of PROBES) {
-    for (const w of ways) {
-      const value = from * (1 + w * fraction)
+    for (const way of ways) {
+      const value = from * (1 + way * fraction)
       if (value <= 0) continue
-      if (works(value)) return refine(works, failing.get(w) ?? from, value)
-      failing = new Map(failing).set(w, value)
+      if (works(value)) return refine(works, failing.get(way) ?? from, value)
+      failing.set(way, value)
     }
   }
   return null
 }
 
-// The value is rounded away from the asked one to three figures or so, and must still work.
+// Between a value that fails and one that works lies a limit. Where steps or tolerances make several, one of them is found; what
+// is given works in any case. It is rounded away from the asked value to four figures, and must still work.
 function refine(works: (value: number) => boolean, failing: number, working: number): number {
   let bad = failing
   let good = working
@@ -117,14 +153,14 @@ function refine(works: (value: number) => boolean, failing: number, working: num
     if (works(middle)) good = middle
     else bad = middle
   }
-  const step = 10 ** (Math.floor(Math.log10(Math.abs(good))) - 2)
+  const step = 10 ** (Math.floor(Math.log10(Math.abs(good))) - FIGURES + 1)
   const outward = (good > bad ? Math.ceil(good / step) : Math.floor(good / step)) * step
   const rounded = Number(outward.toPrecision(6))
   return works(rounded) ? rounded : good
 }
 
 // Heat stops at the limits of the materials; life stops only where fatigue or the dynamic gaps begin.
-function thresholds<W extends SizingWire>(path: 'temperatureC' | 'duty.cycles', wires: readonly W[]): number[] {
+function thresholds(path: 'temperatureC' | 'duty.cycles', wires: readonly SizingWire[]): number[] {
   if (path === 'duty.cycles') return [99_999, 10_000]
   const limits = new Set(wires.map(wire => getMaterial(wire.material).temperatureLimitC.value))
   return [...limits].sort((a, b) => b - a)

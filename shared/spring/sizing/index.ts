@@ -1,11 +1,10 @@
-export { sizeCompression, type SizingOptions } from './compression/size'
+export { sizeSpring, type SizingOptions } from './size-spring'
 export { searchWires, type SearchOptions, type SearchOutcome, type SizingObjective } from './search-wires'
+export { minimiseBounded, type BoundedMinimum, type BoundedOptions, type BoundedProblem } from './bounded-minimum'
 export { describeConflict } from './describe-conflict'
-export { checkSizeRequirement, type RequirementProblem } from './check-requirement'
-export {
-  impliedRateAndFreeLength, resolveRequirement, type FieldError, type RequirementField, type RequirementForm,
-  type RequirementResolution, type ResolvedRequirement,
-} from './resolve-requirement'
+export { checkSizeRequirement } from './check-requirement'
+export type { RequirementProblem } from './requirement-problem'
 export type {
-  CompressionSizeRequest, LoadPoint, SizedDesign, SizingCandidate, SizingChange, SizingConflict, SizingResult, SizingWire,
+  CompressionSizeRequest, ExtensionSizeRequest, LoadPoint, MomentPoint, SizedDesign, SizedDesignOf, SizeRequestOf, SizingCandidate, SizingChange,
+  SizingConflict, SizingResult, SizingWire, SpringSizeRequest, TorsionSizeRequest,
 } from './types'

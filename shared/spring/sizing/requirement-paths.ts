@@ -1,91 +1,48 @@
-import type { CompressionSizeRequest } from './types'
-
-/** One requirement that can be left out of a request. */
-export interface Requirement {
-  readonly path: string
-  readonly without: (request: CompressionSizeRequest) => CompressionSizeRequest
-}
+import type { SpringKind } from '../codes'
+import type { DroppableRequirement } from './kind-search'
+import type { SizeRequestOf, SpringSizeRequest } from './types'
 
 const FIT_KEYS = ['boreMm', 'rodMm', 'maxFreeLengthMm', 'maxSolidLengthMm'] as const
 export type FitKey = (typeof FIT_KEYS)[number]
 
-function withoutFit(key: FitKey): Requirement {
-  return {
-    path: `fit.${key}`,
-    // A bore or a rod also guides: leaving it out must not leave the spring free to buckle.
-    without: (request) => {
-      const guides = (key === 'boreMm' || key === 'rodMm') && request.fit?.[key] !== undefined
-      return { ...request, guided: request.guided || guides, fit: { ...request.fit, [key]: undefined } }
-    },
-  }
-}
+/** Paths of the limits of the fit. */
+export const FIT_PATHS: readonly string[] = FIT_KEYS.map(key => `fit.${key}`)
 
-/** The requirements of a request that can be dropped one by one, those of the surroundings first. */
-export function listRequirements(request: CompressionSizeRequest): Requirement[] {
-  const list: Requirement[] = []
+/** Requirements that any kind may have: the fit, the heat, the life. `changeFit` says what leaving out a limit of the fit means. */
+export function listCommonRequirements<K extends SpringKind>(
+  request: SizeRequestOf<K>, changeFit: (request: SizeRequestOf<K>, key: FitKey) => SizeRequestOf<K> = withoutFit,
+): DroppableRequirement<K>[] {
+  const list: DroppableRequirement<K>[] = []
   for (const key of FIT_KEYS) {
-    if (request.fit?.[key] !== undefined) list.push(withoutFit(key))
+    if (request.fit?.[key] !== undefined) list.push({ path: `fit.${key}`, without: r => changeFit(r, key) })
   }
-  if (request.temperatureC !== undefined) {
-    list.push({ path: 'temperatureC', without: r => ({ ...r, temperatureC: undefined }) })
-  }
-  if ((request.duty?.cycles ?? 0) > 0) {
-    list.push({ path: 'duty.cycles', without: r => ({ ...r, duty: { ...r.duty, cycles: undefined } }) })
-  }
-  if (!request.guided && request.fit?.boreMm === undefined && request.fit?.rodMm === undefined) {
-    list.push({ path: 'guided', without: r => ({ ...r, guided: true }) })
-  }
-  if (request.solidSafe !== false) {
-    list.push({ path: 'solidSafe', without: r => ({ ...r, solidSafe: false }) })
-  }
-  const [first, second] = request.points
-  if (first && second) {
-    list.push({ path: 'points.0', without: r => ({ ...r, points: r.points.slice(-1) }) })
-    list.push({ path: 'points.1', without: r => ({ ...r, points: r.points.slice(0, 1) }) })
-  } else if (first && request.rateNPerMm !== undefined) {
-    list.push({ path: 'rateNPerMm', without: r => ({ ...r, rateNPerMm: undefined }) })
-  } else if (first && request.freeLengthMm !== undefined) {
-    list.push({ path: 'freeLengthMm', without: r => ({ ...r, freeLengthMm: undefined }) })
-  }
+  if (request.temperatureC !== undefined) list.push({ path: 'temperatureC', without: r => ({ ...r, temperatureC: undefined }) })
+  if ((request.duty?.cycles ?? 0) > 0) list.push({ path: 'duty.cycles', without: r => ({ ...r, duty: { ...r.duty, cycles: undefined } }) })
   return list
 }
 
-/** Requirements that hold in every case: what is left to name when all others are dropped. */
-export function anchorPaths(request: CompressionSizeRequest): string[] {
-  if (request.points.length > 1) return []
-  if (request.points.length === 1) return ['points.0']
-  return ['rateNPerMm', 'freeLengthMm']
+/** The request without one limit of its fit. */
+export function withoutFit<R extends Pick<SpringSizeRequest, 'fit'>>(request: R, key: FitKey): R {
+  return { ...request, fit: { ...request.fit, [key]: undefined } }
 }
+
+type Tree = { readonly [key: string]: unknown }
+const isTree = (value: unknown): value is Tree => typeof value === 'object' && value !== null
 
 /** Value at a path of numbers, such as `fit.boreMm` or `points.1.forceN`; undefined where there is none. */
-export function readNumber(request: CompressionSizeRequest, path: string): number | undefined {
-  const point = /^points\.(\d+)\.(lengthMm|forceN)$/.exec(path)
-  if (point) return request.points[Number(point[1])]?.[point[2] === 'lengthMm' ? 'lengthMm' : 'forceN']
-  const fitKey = FIT_KEYS.find(key => path === `fit.${key}`)
-  if (fitKey) return request.fit?.[fitKey]
-  switch (path) {
-    case 'rateNPerMm': return request.rateNPerMm
-    case 'freeLengthMm': return request.freeLengthMm
-    case 'temperatureC': return request.temperatureC
-    case 'duty.cycles': return request.duty?.cycles
-    default: return undefined
-  }
+export function readNumber(request: SpringSizeRequest, path: string): number | undefined {
+  let place: unknown = request
+  for (const key of path.split('.')) place = isTree(place) ? place[key] : undefined
+  return typeof place === 'number' ? place : undefined
 }
 
-/** The request with another value at a path of numbers. */
-export function writeNumber(request: CompressionSizeRequest, path: string, value: number): CompressionSizeRequest {
-  const point = /^points\.(\d+)\.(lengthMm|forceN)$/.exec(path)
-  if (point) {
-    const key = point[2] === 'lengthMm' ? 'lengthMm' : 'forceN'
-    return { ...request, points: request.points.map((p, i) => (i === Number(point[1]) ? { ...p, [key]: value } : p)) }
+/** The request with another value at a path that holds a number. Throws where it holds none. */
+export function writeNumber<R extends SpringSizeRequest>(request: R, path: string, value: number): R {
+  if (readNumber(request, path) === undefined) throw new Error(`No number at ${path} in a size request`)
+  const write = (place: unknown, [key, ...rest]: readonly string[]): unknown => {
+    if (key === undefined) return value
+    if (Array.isArray(place)) return place.map((item: unknown, i) => (i === Number(key) ? write(item, rest) : item))
+    return isTree(place) ? { ...place, [key]: write(place[key], rest) } : place
   }
-  const fitKey = FIT_KEYS.find(key => path === `fit.${key}`)
-  if (fitKey) return { ...request, fit: { ...request.fit, [fitKey]: value } }
-  switch (path) {
-    case 'rateNPerMm': return { ...request, rateNPerMm: value }
-    case 'freeLengthMm': return { ...request, freeLengthMm: value }
-    case 'temperatureC': return { ...request, temperatureC: value }
-    case 'duty.cycles': return { ...request, duty: { ...request.duty, cycles: value } }
-    default: throw new Error(`No number at ${path} in a size request`)
-  }
+  return write(request, path.split('.')) as R
 }

@@ -1,25 +1,23 @@
-import { describeSpring } from '../mechanics/compression/evaluate'
-import { buildCompressionModel, type CompressionModel } from '../mechanics/compression/model'
-import { greatestForceN, fillState, stateWireLengthMm, type CompressionState } from '../mechanics/compression/state'
-import { shearStressMpa } from '../mechanics/stress'
-import { wireMassG } from '../mechanics/wire-length'
-import { searchFixedTravel } from './compression/fixed-travel-search'
-import { searchFreeRate } from './compression/free-rate-search'
-import { searchStepped } from './compression/stepped-search'
-import { STEP_TOLERANCE, resolveTravel, type Travel } from './compression/travel'
-import type { CompressionSizeRequest, SizedDesign, SizingCandidate, SizingWire } from './types'
-import { createSearchState, type Steps, type WireGoal, type WireSpring } from './compression/wire-search'
+import type { SpringKind } from '../codes'
+import type { PreparedSearch, WireGoal, WireSpring } from './kind-search'
+import { searchOf } from './kinds'
+import type { SizeRequestOf, SizedDesign, SizedDesignOf, SizingCandidate, SizingWire, SpringSizeRequest } from './types'
 
 /** What is best: the lightest, the least stressed at work, or the least of a number the caller gives a candidate. */
 export type SizingObjective<W extends SizingWire> = 'mass' | 'stress' | ((candidate: SizingCandidate<W>) => number)
 
 export interface SearchOptions<W extends SizingWire> {
+  /**
+   * Mass unless told. A function of the caller must, for one wire, never fall with the mass of the spring (price does not:
+   * wire, coiling, furnace and carriage grow with it) where coils and diameter are continuous, since only the lightest spring
+   * of a wire is asked about then; in steps every spring that passes is. NaN or Infinity leaves a spring out.
+   */
   readonly objective?: SizingObjective<W> | undefined
   /**
-   * How many springs of one wire a caller's objective is asked about, lightest first; 6 unless told. The lightest is nearly
-   * always the cheapest of a wire, since wire, coiling and carriage all grow with its length.
+   * For a caller's objective: a number that no spring of the wire of at least this mass falls under. With it wires are left out
+   * that cannot win.
    */
-  readonly candidatesPerWire?: number | undefined
+  readonly leastOfMass?: ((wire: W, massG: number) => number) | undefined
 }
 
 export interface SearchOutcome<W extends SizingWire> {
@@ -29,97 +27,81 @@ export interface SearchOutcome<W extends SizingWire> {
 
 interface Ranked<W extends SizingWire> {
   readonly candidate: SizingCandidate<W>
+  readonly spring: WireSpring
   readonly value: number
 }
 
 const DEFAULT_LIMIT = 5
-const DEFAULT_CANDIDATES = 6
 
 /** The best springs over the wires, one for each wire, best first. Pure and deterministic; the request must be checked before. */
-export function searchWires<W extends SizingWire>(request: CompressionSizeRequest, wires: readonly W[], options: SearchOptions<W> = {}): SearchOutcome<W> {
-  const objective = options.objective ?? 'mass'
-  const travel = resolveTravel(request)
-  const state = createSearchState(travel)
+export function searchWires<W extends SizingWire>(request: SpringSizeRequest, wires: readonly W[], options: SearchOptions<W> = {}): SearchOutcome<W> {
+  switch (request.kind) {
+    case 'compression': return searchKind('compression', request, wires, options)
+    case 'extension': return searchKind('extension', request, wires, options)
+    case 'torsion': return searchKind('torsion', request, wires, options)
+  }
+}
+
+function searchKind<K extends SpringKind, W extends SizingWire>(kind: K, request: SizeRequestOf<K>, wires: readonly W[], options: SearchOptions<W>): SearchOutcome<W> {
+  const { objective = 'mass', leastOfMass } = options
+  const prepared = searchOf(kind).prepare(request)
+  const limit = request.limit ?? DEFAULT_LIMIT
+  const boundOf = lowerBoundOf(prepared, objective, leastOfMass)
+  // Wires that may win first: once `limit` better springs are known, the rest is only counted.
+  const ordered = wires.map(wire => ({ wire, bound: boundOf(wire) })).sort((a, b) => a.bound - b.bound)
   const best: Ranked<W>[] = []
   let feasibleWires = 0
-  for (const wire of wires) {
-    const candidates = candidatesOf(request, travel, wire, state, objective, options.candidatesPerWire ?? DEFAULT_CANDIDATES)
-    if (candidates.length === 0) continue
-    feasibleWires++
-    let bestOfWire: Ranked<W> | null = null
-    for (const candidate of candidates) {
-      const value = objectiveValue(objective, candidate, travel)
-      if (!Number.isFinite(value)) continue
-      const ranked = { candidate, value }
-      if (!bestOfWire || compareRanked(ranked, bestOfWire) < 0) bestOfWire = ranked
+  for (const { wire, bound } of ordered) {
+    const worst = best.length < limit ? Infinity : best[best.length - 1]?.value ?? Infinity
+    if (bound > worst || bound === Infinity) {
+      if (prepared.isFeasible(wire)) feasibleWires++
+      continue
     }
-    if (bestOfWire) best.push(bestOfWire)
+    const { springs, found } = bestOfWire(prepared, wire, objective)
+    if (springs > 0) feasibleWires++
+    if (found) insert(best, found, limit)
   }
-  best.sort(compareRanked)
   return {
-    designs: best.slice(0, request.limit ?? DEFAULT_LIMIT).map(ranked => describeDesign(request, travel, ranked)),
+    designs: best.map(ranked => describeDesign(kind, prepared, ranked) as SizedDesign<W>),
     searched: { wires: wires.length, feasibleWires },
   }
 }
 
-/** True where some wire gives a spring; stops at the first. */
-export function isFeasible<W extends SizingWire>(request: CompressionSizeRequest, wires: readonly W[]): boolean {
-  const travel = resolveTravel(request)
-  const state = createSearchState(travel)
-  return wires.some((wire) => {
-    const model = buildModel(request, wire)
-    return springsOf(request, travel, model, state, travel.kind === 'fixed' ? 'stress' : 'mass').length > 0
-  })
-}
-
-function buildModel(request: CompressionSizeRequest, wire: SizingWire): CompressionModel {
-  return buildCompressionModel(wire, request, { stocked: wire.stocked, surroundings: request.surroundings })
-}
-
-function springsOf(request: CompressionSizeRequest, travel: Travel, model: CompressionModel, state: CompressionState, goal: WireGoal): WireSpring[] {
-  const steps: Steps = { coilStep: request.coilStep ?? Number.NaN, diameterStepMm: request.diameterStepMm ?? Number.NaN }
-  if (travel.kind === 'free-rate') return searchFreeRate(model, state, travel, goal, steps)
-  const isContinuous = Number.isNaN(steps.coilStep) && Number.isNaN(steps.diameterStepMm)
-  return isContinuous ? searchFixedTravel(model, state, travel, goal) : searchStepped(model, state, travel, steps)
-}
-
-function candidatesOf<W extends SizingWire>(
-  request: CompressionSizeRequest, travel: Travel, wire: W, state: CompressionState, objective: SizingObjective<W>, most: number,
-): SizingCandidate<W>[] {
-  const model = buildModel(request, wire)
-  const goal = typeof objective === 'string' ? objective : 'spread'
-  const candidates = springsOf(request, travel, model, state, goal).map(spring => describeCandidate(wire, model, state, spring))
-  if (candidates.length <= 1 || goal !== 'spread') return candidates
-  return candidates.sort((a, b) => a.massG - b.massG || a.meanDiameterMm - b.meanDiameterMm).slice(0, most)
-}
-
-function fill(model: CompressionModel, state: CompressionState, spring: WireSpring): CompressionState {
-  return fillState(state, model, spring.meanDiameterMm, spring.activeCoils, spring.totalCoils, spring.freeLengthMm)
-}
-
-function describeCandidate<W extends SizingWire>(wire: W, model: CompressionModel, state: CompressionState, spring: WireSpring): SizingCandidate<W> {
-  fill(model, state, spring)
-  const wireLengthMm = stateWireLengthMm(model, state)
-  return {
-    wire,
-    ...spring,
-    rateNPerMm: state.rateNPerMm,
-    wireLengthMm,
-    massG: wireMassG(model.wireDiameterMm, wireLengthMm, model.densityKgPerM3),
-    solidLengthMm: state.solidLengthMm,
-    outerDiameterMm: spring.meanDiameterMm + model.wireDiameterMm,
+/** A number that no passing spring of a wire falls under. Bounds are widened by a hair, so that rounding leaves no tie out. */
+function lowerBoundOf<K extends SpringKind, W extends SizingWire>(
+  prepared: PreparedSearch<K>, objective: SizingObjective<W>, leastOfMass: SearchOptions<W>['leastOfMass'],
+): (wire: W) => number {
+  const hair = 1 - 1e-9
+  if (objective === 'mass') return wire => prepared.leastMassG(wire) * hair
+  if (typeof objective === 'function' && leastOfMass) {
+    return (wire) => {
+      const massG = prepared.leastMassG(wire)
+      return massG === Infinity ? Infinity : leastOfMass(wire, massG) * hair
+    }
   }
+  return () => -Infinity
 }
 
-// Stress: uncorrected, at the greatest asked load, or when solid where none is asked.
-function objectiveValue<W extends SizingWire>(objective: SizingObjective<W>, candidate: SizingCandidate<W>, travel: Travel): number {
-  if (objective === 'mass') return candidate.massG
-  if (objective === 'stress') {
-    const shortest = travel.points[travel.points.length - 1]?.lengthMm ?? candidate.solidLengthMm
-    const force = candidate.rateNPerMm * (candidate.freeLengthMm - shortest)
-    return shearStressMpa(force, candidate.meanDiameterMm, candidate.wire.wireDiameterMm)
+function bestOfWire<K extends SpringKind, W extends SizingWire>(prepared: PreparedSearch<K>, wire: W, objective: SizingObjective<W>): { springs: number, found: Ranked<W> | null } {
+  const goal: WireGoal = typeof objective === 'string' ? objective : 'every'
+  const springs = prepared.search(wire, goal)
+  let found: Ranked<W> | null = null
+  for (const spring of springs) {
+    const { meanDiameterMm, activeCoils, totalCoils, freeLengthMm, wireLengthMm, massG, outerDiameterMm, initialTensionN, stressMpa } = prepared.measure(wire, spring)
+    // Field by field: copies of objects by spreading take longer than the arithmetic.
+    const candidate = { wire, meanDiameterMm, activeCoils, totalCoils, freeLengthMm, wireLengthMm, massG, outerDiameterMm, initialTensionN }
+    const value = objective === 'mass' ? massG : objective === 'stress' ? stressMpa : objective(candidate)
+    if (!Number.isFinite(value)) continue
+    const ranked = { candidate, spring, value }
+    if (!found || compareRanked(ranked, found) < 0) found = ranked
   }
-  return objective(candidate)
+  return { springs: springs.length, found }
+}
+
+function insert<W extends SizingWire>(best: Ranked<W>[], found: Ranked<W>, limit: number): void {
+  const place = best.findIndex(other => compareRanked(found, other) < 0)
+  best.splice(place < 0 ? best.length : place, 0, found)
+  if (best.length > limit) best.pop()
 }
 
 const compareText = (a: string, b: string) => (a < b ? -1 : a > b ? 1 : 0)
@@ -134,27 +116,19 @@ function compareRanked<W extends SizingWire>(a: Ranked<W>, b: Ranked<W>): number
     || compareText(a.candidate.wire.id, b.candidate.wire.id)
 }
 
-function describeDesign<W extends SizingWire>(request: CompressionSizeRequest, travel: Travel, { candidate, value }: Ranked<W>): SizedDesign<W> {
-  const model = buildModel(request, candidate.wire)
-  const state = fill(model, createSearchState(travel), candidate)
-  const evaluation = describeSpring(model, state, travel.points.map(point => point.lengthMm))
-  const note = steppedNote(request, travel, greatestForceN(state))
-  return {
-    wireId: candidate.wire.id,
-    wire: candidate.wire,
-    material: candidate.wire.material,
-    wireDiameterMm: candidate.wire.wireDiameterMm,
-    meanDiameterMm: candidate.meanDiameterMm,
-    activeCoils: candidate.activeCoils,
-    totalCoils: candidate.totalCoils,
-    freeLengthMm: candidate.freeLengthMm,
-    objectiveValue: value,
-    evaluation: note ? { ...evaluation, assumptions: [...evaluation.assumptions, note] } : evaluation,
+/** True where some wire gives a spring; stops at the first. */
+export function isFeasible(request: SpringSizeRequest, wires: readonly SizingWire[]): boolean {
+  switch (request.kind) {
+    case 'compression': return wires.some(searchOf('compression').prepare(request).isFeasible)
+    case 'extension': return wires.some(searchOf('extension').prepare(request).isFeasible)
+    case 'torsion': return wires.some(searchOf('torsion').prepare(request).isFeasible)
   }
 }
 
-function steppedNote(request: CompressionSizeRequest, travel: Travel, greatestForce: number): string | null {
-  if (travel.kind !== 'fixed' || request.coilStep === undefined || request.diameterStepMm === undefined) return null
-  const asked = travel.points.length > 0 && Number.isFinite(greatestForce) ? 'Forces' : 'The rate'
-  return `Coils go in steps of ${request.coilStep} and the mean diameter in steps of ${request.diameterStepMm} mm. ${asked} may differ from those asked by up to ${STEP_TOLERANCE * 100} %.`
+function describeDesign<K extends SpringKind, W extends SizingWire>(kind: K, prepared: PreparedSearch<K>, { candidate, spring, value }: Ranked<W>): SizedDesignOf<K, W> {
+  const { wire, meanDiameterMm, activeCoils, totalCoils, freeLengthMm } = candidate
+  return {
+    kind, wireId: wire.id, wire, material: wire.material, wireDiameterMm: wire.wireDiameterMm, meanDiameterMm, activeCoils, totalCoils, freeLengthMm,
+    objectiveValue: value, ...prepared.describe(wire, spring),
+  }
 }

@@ -1,3 +1,4 @@
+import type { RequirementInput } from '#shared/schemas/enquiry'
 import type { JobView, LoadingView } from '#shared/schemas/shop'
 import { expect } from 'vitest'
 import { booksOf } from './database'
@@ -6,8 +7,8 @@ import { endSession } from './stripe'
 import type { Visitor } from './visitor'
 
 /** An order whose deposit is paid, and its job as Loading shows it. */
-export async function paidJob(name: string, supervisor: Visitor): Promise<{ order: AcceptedOrder, job: JobView }> {
-  const order = await orderReadyToPay(name)
+export async function paidJob(name: string, supervisor: Visitor, requirement?: RequirementInput): Promise<{ order: AcceptedOrder, job: JobView }> {
+  const order = await orderReadyToPay(name, undefined, requirement)
   await endSession(await openDeposit(order), 'paid')
   await expect.poll(async () => (await booksOf(order.ref)).jobs, { timeout: 20_000, interval: 200 }).toBe(1)
   return { order, job: await jobOf(order.ref, supervisor) }

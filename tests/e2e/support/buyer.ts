@@ -20,8 +20,8 @@ export class Buyer {
     return new Buyer(await request.newContext({ baseURL: services.baseUrl, extraHTTPHeaders: { 'x-wirewright': '1' } }), services, name)
   }
 
-  async sendEnquiry(title: string, requirement: Partial<EnquiryInput['requirement']> = {}): Promise<EnquiryOutcome> {
-    const data: EnquiryInput = { requirement: { ...REQUIREMENT, ...requirement }, contact: { name: this.name, firm: `${this.name} & Daughters`, email: this.email, countryCode: 'IE', title } }
+  async sendEnquiry(title: string, requirement: Partial<Extract<EnquiryInput['requirement'], { kind: 'compression' }>> = {}): Promise<EnquiryOutcome> {
+    const data: EnquiryInput = { requirement: { ...REQUIREMENT, ...requirement } as EnquiryInput['requirement'], contact: { name: this.name, firm: `${this.name} & Daughters`, email: this.email, countryCode: 'IE', title } }
     return this.post<EnquiryOutcome>('/api/enquiries', data, { 'idempotency-key': crypto.randomUUID() })
   }
 

@@ -93,6 +93,49 @@ describe('changing the units', () => {
   })
 })
 
+describe('springs that pull and twist', () => {
+  const pull = { kind: 'extension', firstForce: '20', firstLength: '60', secondForce: '50', secondLength: '80', hook: 'crossover-loop' } as const
+  const twist = { kind: 'torsion', firstMoment: '0.3 N·m', firstAngle: '30', secondMoment: '900', secondAngle: '90', firstLeg: '30', secondLeg: '25', load: 'opens' } as const
+
+  it('gives the server a spring that pulls, without what only pressed springs have', () => {
+    const { requirement, faults } = read({ ...pull, shortestRoom: 'nonsense' })
+    expect(faults).toEqual({})
+    expect(requirementSchema.parse(requirement)).toMatchObject({ kind: 'extension', hook: 'crossover-loop', need: { knows: 'two-loads', first: { forceN: 20, lengthMm: 60 }, second: { forceN: 50, lengthMm: 80 } } })
+  })
+
+  it('gives the server a spring that twists, whatever unit its moments are typed in', () => {
+    const { requirement, faults } = read(twist)
+    expect(faults).toEqual({})
+    expect(requirementSchema.parse(requirement)).toMatchObject({
+      kind: 'torsion', firstLegMm: 30, secondLegMm: 25, load: 'opens', legForm: 'tangential',
+      need: { knows: 'two-moments', first: { momentNmm: 300, angleDeg: 30 }, second: { momentNmm: 900, angleDeg: 90 } },
+    })
+  })
+
+  it.each([
+    [{ ...pull, secondLength: '50' }, 'secondLength'], [{ ...pull, secondForce: '10' }, 'secondForce'], [{ ...pull, knowsExtension: 'load-and-length', freeLength: '70' }, 'firstLength'],
+    [{ ...twist, secondAngle: '20' }, 'secondAngle'], [{ ...twist, secondMoment: '100' }, 'secondMoment'], [{ ...twist, firstLeg: '' }, 'firstLeg'], [{ ...twist, knowsTorsion: 'moment-and-rate', turnRate: '' }, 'turnRate'],
+  ] as const)('leads the schema’s complaint about %j to its field', (values, field) => {
+    const { requirement, fieldOfPath } = read(values as Partial<OrderDraft>)
+    const issues = requirementSchema.safeParse(requirement).error?.issues ?? []
+    expect(issues.map(issue => fieldOfPath[`requirement.${issue.path.join('.')}`])).toContain(field)
+  })
+
+  it('keeps what was typed for one kind while another is looked at', () => {
+    const draft = draftOf({ ...twist, rate: '6.03' })
+    expect(readDraft({ ...draft, kind: 'compression', knows: 'load-and-rate' }, { units: 'metric', today: '2026-12-01' }).valuesSi.rate).toBe(6.03)
+    expect(missingFields(draft)).not.toContain('firstForce')
+    expect(missingFields({ ...draft, firstMoment: '' })).toContain('firstMoment')
+  })
+
+  it.each([[pull, 'metric'], [pull, 'inch'], [twist, 'metric'], [twist, 'inch'], [{ ...twist, knowsTorsion: 'moment-and-rate', turnRate: '10' }, 'inch'], [{ ...pull, knowsExtension: 'load-and-rate', rate: '1.5' }, 'inch']] as const)(
+    'types a stored request back so that it is read as the same: %j in %s', (values, units) => {
+      const requirement = requirementSchema.parse(read(values as Partial<OrderDraft>).requirement)
+      const { draft, written } = draftOfRequirement(requirement, units)
+      expect(requirementSchema.parse(readDraft({ ...emptyDraft(), ...draft }, { units, today: '2026-12-01', written }).requirement)).toEqual(requirement)
+    })
+})
+
 describe('what is still open', () => {
   it('is named by section, each leading to its first field', () => {
     const items = openItems(missingFields({ ...emptyDraft(), name: 'Ilse' }))

@@ -153,7 +153,7 @@ describe('the words beside the drawing', () => {
   })
 
   it('gives the chart as rows, longest first', () => {
-    expect(chartRows(charted, 'metric').map(({ name, length, force, tolerance }) => [name, length, force, tolerance].join('|').replaceAll('\u202f', ' '))).toEqual([
+    expect(chartRows(charted, 'metric').map(({ name, place, load, tolerance }) => [name, place, load, tolerance].join('|').replaceAll('\u202f', ' '))).toEqual([
       'Free|60.0 mm|0.000 N|', 'Load F1|50.0 mm|60.3 N|±10.6 N', 'Load F2|35.0 mm|150.7 N|±11.9 N', 'Least working length|29.7 mm|182.7 N|', 'Solid, not for use|25.6 mm|207.3 N|',
     ])
     expect(forceAtN(charted, 25.625)).toBeCloseTo(207.27, 1)

@@ -8,7 +8,7 @@ export function aBook(rates: Partial<Record<RateCode, string>> = {}): PriceBook 
 /** The spring of the mocked quote: SH 2.50, 644 mm of wire, 24.8 g, closed and ground. */
 export function aDesign(changes: Partial<PricedDesign> = {}): PricedDesign {
   return {
-    material: 'EN10270-1-SH', wireDiameterMm: 2.5, meanDiameterMm: 20, activeCoils: 8.25, totalCoils: 10.25, freeLengthMm: 60, ends: 'closed-ground',
+    kind: 'compression', material: 'EN10270-1-SH', wireDiameterMm: 2.5, meanDiameterMm: 20, activeCoils: 8.25, totalCoils: 10.25, freeLengthMm: 60, ends: 'closed-ground', formed: null,
     wireLengthMm: 644, massG: 24.8, stressReliefMinutes: 30, stressReliefTempC: 230, ...changes,
   }
 }

@@ -8,7 +8,7 @@ const requirement = (changes: Partial<GateRequirement> = {}): GateRequirement =>
   couldHurt: false, coldestC: 5, hottestC: 40, strokes: 10_000, toleranceGrade: 2, surroundings: 'dry', ...changes,
 })
 const design = (changes: Partial<GateDesign> = {}): GateDesign => ({
-  material: 'EN10270-1-SH', wireDiameterMm: 2.5, springIndex: 8, slenderness: 3, checks: [], ...changes,
+  kind: 'compression', material: 'EN10270-1-SH', wireDiameterMm: 2.5, springIndex: 8, slenderness: 3, storedEnergyJ: 0, checks: [], ...changes,
 })
 const rung = (changes: Partial<GateRung> = {}): GateRung => ({ quantity: 500, netMinor: 48_000, currency: 'eur', dispatchOn: '2026-12-15', ...changes })
 const check = (changes: Partial<GateCheck> = {}): GateCheck => ({ code: 'buckling', ok: false, severity: 'caution', message: 'It may buckle.', ...changes })
@@ -38,6 +38,15 @@ describe('the gate', () => {
   it('stops a slender spring', () => {
     expect(codes({ found: { slenderness: 4 } })).toEqual([])
     expect(codes({ found: { slenderness: 4.2 } })).toEqual(['slenderness'])
+  })
+
+  it('stops a spring with hooks or legs that holds much energy, not one held between its seats', () => {
+    expect(codes({ found: { kind: 'extension', storedEnergyJ: 20 } })).toEqual([])
+    expect(judge({ found: { kind: 'extension', storedEnergyJ: 20.4 } })).toMatchObject([
+      { code: 'stored-energy', customerText: expect.stringContaining('if a hook gave way, it would fly'), estimatorText: expect.stringMatching(/^It holds 20\.4 J at its greatest load, over 20 J\./) },
+    ])
+    expect(judge({ found: { kind: 'torsion', storedEnergyJ: 35 } })[0]?.customerText).toContain('if a leg gave way')
+    expect(codes({ found: { kind: 'compression', storedEnergyJ: 400 } })).toEqual([])
   })
 
   it('stops tolerance grade 1', () => {
@@ -91,10 +100,10 @@ describe('the gate', () => {
 
   it('stops failed checks and cautions that need a person, not those the cheapest spring always has', () => {
     expect(codes({ found: { checks: [check({ severity: 'stop', code: 'bore' })] } })).toEqual(['check-failed'])
-    for (const code of ['buckling', 'resonance', 'fatigue', 'coils', 'temperature', 'a-new-check']) {
+    for (const code of ['buckling', 'resonance', 'fatigue', 'coils', 'temperature', 'initial-tension', 'hook-bend', 'winding', 'a-new-check']) {
       expect(codes({ found: { checks: [check({ code })] } }), code).toEqual(['caution'])
     }
-    for (const code of ['clearance', 'stress-solid', 'stress-working', 'bore', 'rod', 'wire-range']) {
+    for (const code of ['clearance', 'stress-solid', 'stress-working', 'stress-hook-bending', 'stress-hook-torsion', 'bore', 'rod', 'wire-range']) {
       expect(codes({ found: { checks: [check({ code })] } }), code).toEqual([])
     }
     expect(codes({ found: { checks: [check({ ok: true }), check({ severity: 'note' })] } })).toEqual([])
@@ -113,6 +122,9 @@ describe('the gate', () => {
     const strict = readGatePolicy(aBook({ 'gate.index-min': '6', 'gate.material.carbon-steel': '0', 'gate.caution.fit': '0', 'gate.value-max': '100' }))
     const reasons = judgeGate(requirement(), design({ springIndex: 5.5, checks: [check({ code: 'rod' })] }), [rung()], strict)
     expect(reasons.map((reason) => reason.code)).toEqual(['index', 'material', 'caution', 'order-value'])
+    const careful = readGatePolicy(aBook({ 'gate.caution.hook': '0', 'gate.energy-max-j': '2' }))
+    const hooked = design({ kind: 'extension', storedEnergyJ: 3, checks: [check({ code: 'stress-hook-bending' })] })
+    expect(judgeGate(requirement(), hooked, [rung()], careful).map(({ code }) => code)).toEqual(['stored-energy', 'caution'])
   })
 
   it('has no room for free text', () => {
@@ -122,10 +134,10 @@ describe('the gate', () => {
   it('gives both sides a sentence', () => {
     const reasons = judge({
       need: { couldHurt: true, toleranceGrade: 1, strokes: 1e9, hottestC: 300, surroundings: 'salt', finish: 'zinc', neededOn: '2020-01-01' },
-      found: { springIndex: 3, wireDiameterMm: 0.1, slenderness: 9, material: 'x', checks: [check(), check({ severity: 'stop' })] },
+      found: { kind: 'torsion', springIndex: 3, wireDiameterMm: 0.1, slenderness: 9, storedEnergyJ: 90, material: 'x', checks: [check(), check({ severity: 'stop' })] },
       rungs: [{ quantity: 1, netMinor: 9_000_000 }, { quantity: 1e6 }],
     })
-    expect(reasons).toHaveLength(16)
+    expect(reasons).toHaveLength(17)
     for (const reason of reasons) {
       expect(reason.customerText).toMatch(/^[A-Z].*\.$/)
       expect(reason.estimatorText).toMatch(/\.$/)

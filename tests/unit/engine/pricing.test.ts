@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import {
   createPriceObjective, priceLadder, priceQuantity, PriceError, RATE_CODES, readNumberRates, samplingPlanFor, wireBandOf,
-  type PriceBook, type PriceLineCode, type PricedQuantity, type RateCode,
+  type PriceBook, type PricedDesign, type PriceLineCode, type PricedQuantity, type RateCode,
 } from '#server/engine/pricing'
 import { MoneyError } from '#shared/money'
 import { aBook, aDesign, aRequest, aWireProduct } from './factories'
@@ -159,7 +159,12 @@ describe('properties of every price', () => {
     quantity: fc.integer({ min: 1, max: 5000 }),
     wireDiameterMm: fc.double({ min: 0.2, max: 10, noNaN: true }),
     wireLengthMm: fc.double({ min: 20, max: 3000, noNaN: true }),
-    ends: fc.constantFrom('closed-ground' as const, 'closed' as const, 'open' as const),
+    made: fc.constantFrom<Pick<PricedDesign, 'kind' | 'ends' | 'formed'>>(
+      { kind: 'compression', ends: 'closed-ground', formed: null }, { kind: 'compression', ends: 'closed', formed: null }, { kind: 'compression', ends: 'open', formed: null },
+      { kind: 'extension', ends: null, formed: 'full-loop' }, { kind: 'extension', ends: null, formed: 'extended-hook' },
+      { kind: 'torsion', ends: null, formed: 'straight' }, { kind: 'torsion', ends: null, formed: null },
+    ),
+    springIndex: fc.double({ min: 3, max: 15, noNaN: true }),
     stockKg: fc.constantFrom('0', '40'),
     grade: fc.constantFrom(1 as const, 2 as const, 3 as const),
     certificate: fc.constantFrom('none' as const, '2.1' as const, '3.1' as const),
@@ -174,7 +179,7 @@ describe('properties of every price', () => {
       request: aRequest({
         book,
         quantity: drawn.quantity,
-        design: aDesign({ wireDiameterMm: drawn.wireDiameterMm, wireLengthMm: drawn.wireLengthMm, massG, ends: drawn.ends }),
+        design: aDesign({ wireDiameterMm: drawn.wireDiameterMm, meanDiameterMm: drawn.springIndex * drawn.wireDiameterMm, wireLengthMm: drawn.wireLengthMm, massG, ...drawn.made }),
         wireProduct: aWireProduct({ stockKg: drawn.stockKg }),
         options: { toleranceGrade: drawn.grade, certificate: drawn.certificate },
       }),
@@ -210,6 +215,19 @@ describe('properties of every price', () => {
       const tolerance = (0.3 + priced.quantity * 0.001) / priced.quantity + objective * 0.0105
       expect(Math.abs(objective - priced.netMinor / 100 / priced.quantity)).toBeLessThanOrEqual(tolerance)
     }), { numRuns: 300 })
+  })
+
+  // Sizing by price leaves wires out by this: see priceSearchOf.
+  it('never falls with the wire in a spring, and never rises with its index, for one wire and one way of making', () => {
+    fc.assert(fc.property(anyRequest, fc.double({ min: 1, max: 3, noNaN: true }), fc.double({ min: 1, max: 3, noNaN: true }), ({ request }, longer, looser) => {
+      const price = createPriceObjective(request)
+      const { design } = request
+      const heavy = { ...design, wireLengthMm: design.wireLengthMm * longer, massG: design.massG * longer }
+      const loose = { ...design, meanDiameterMm: design.meanDiameterMm * looser }
+      const least = price(design, request.wireProduct)
+      expect(price(heavy, request.wireProduct)).toBeGreaterThanOrEqual(least * (1 - 1e-12))
+      expect(price(loose, request.wireProduct)).toBeLessThanOrEqual(least * (1 + 1e-12))
+    }), { numRuns: 500 })
   })
 
   it('gives the same answer twice', () => {

@@ -16,7 +16,7 @@ describe('evaluating a sound spring', () => {
   const result = evaluateCompression(makeSpring())
 
   it('passes every check and answers in the agreed shape', () => {
-    expect(result.checks.filter(c => !c.ok)).toEqual([])
+    expect(result.checks.filter(c => !c.ok && c.severity !== 'note')).toEqual([])
     expect(EvaluateResponseSchema.parse(result)).toEqual(result)
   })
 
@@ -87,7 +87,7 @@ describe('checks', () => {
   })
 
   it('has a broken spring for every check that can stop', () => {
-    const neverStop = ['resonance', 'peening', 'surroundings']
+    const neverStop = ['resonance', 'peening', 'tangling', 'surroundings']
     expect(Object.keys(BROKEN).sort()).toEqual(COMPRESSION_CHECKS.map(c => c.code).filter(c => !neverStop.includes(c)).sort())
   })
 
@@ -165,7 +165,7 @@ describe('any request the schema lets in', () => {
     let parsed = 0
     fc.assert(fc.property(request, (body) => {
       const input = EvaluateRequestSchema.safeParse(body)
-      if (!input.success) return
+      if (!input.success || input.data.kind !== 'compression') return
       parsed++
       const result = evaluateCompression(input.data)
       expect(EvaluateResponseSchema.safeParse(result).error).toBeUndefined()

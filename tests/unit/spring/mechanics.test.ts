@@ -132,12 +132,12 @@ describe('gaps, growth, buckling, surge, heat', () => {
 
 describe('limits and tolerances', () => {
   it('allows 0.56 of the strength by EN 13906-1 and Shigley\'s fractions otherwise', () => {
-    expect(staticLimit('en13906', 'stainless', false, wahlFactor).fractionOfStrength).toBe(0.56)
-    expect(staticLimit('en13906', 'stainless', false, wahlFactor).stressFactor(8)).toBe(1)
-    expect(staticLimit('wahl', 'cold-drawn-carbon', false, wahlFactor).fractionOfStrength).toBe(0.45)
-    expect(staticLimit('wahl', 'cold-drawn-carbon', false, wahlFactor).stressFactor(8)).toBe(wahlFactor(8))
-    expect(staticLimit('wahl', 'stainless', true, wahlFactor).fractionOfStrength).toBe(0.55)
-    expect(staticLimit('wahl', 'tempered-steel', true, wahlFactor).stressFactor(8)).toBe(directShearFactor(8))
+    expect(staticLimit('en13906', 'stainless', false).fractionOfStrength).toBe(0.56)
+    expect(staticLimit('en13906', 'stainless', false).stressFactor(8)).toBe(1)
+    expect(staticLimit('wahl', 'cold-drawn-carbon', false).fractionOfStrength).toBe(0.45)
+    expect(staticLimit('wahl', 'cold-drawn-carbon', false).stressFactor(8)).toBe(wahlFactor(8))
+    expect(staticLimit('wahl', 'stainless', true).fractionOfStrength).toBe(0.55)
+    expect(staticLimit('wahl', 'tempered-steel', true).stressFactor(8)).toBe(directShearFactor(8))
   })
 
   it('reads the life fractions at their decades and between them', () => {

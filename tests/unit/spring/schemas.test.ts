@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { EvaluateRequestSchema, SizeRequestSchema, SizeResponseSchema } from '#shared/schemas/spring'
-import { sizeCompression } from '#shared/spring'
+import { sizeSpring } from '#shared/spring'
 import { makeRequest, makeSpring, makeWires } from './springs'
 
 const issues = (schema: typeof EvaluateRequestSchema | typeof SizeRequestSchema, body: unknown) =>
@@ -20,10 +20,14 @@ describe('evaluate request', () => {
     expect(paths(EvaluateRequestSchema, { ...makeSpring(), toleranceGrade: 4 })).toEqual(['toleranceGrade'])
   })
 
-  it('says that other kinds are not yet offered', () => {
-    expect(issues(EvaluateRequestSchema, { ...makeSpring(), kind: 'extension' })).toEqual([['kind', 'Extension springs are not yet offered by the calculation.']])
-    expect(issues(SizeRequestSchema, { ...makeRequest(), kind: 'torsion' })).toEqual([['kind', 'Torsion springs are not yet offered by the calculation.']])
-    expect(issues(SizeRequestSchema, { ...makeRequest(), kind: 'leaf' })).toEqual([['kind', 'The kind must be compression.']])
+  it('names the kinds there are, and what each kind needs', () => {
+    expect(issues(SizeRequestSchema, { ...makeRequest(), kind: 'leaf' })).toEqual([['kind', 'The kind must be compression, extension or torsion.']])
+    const bare = { material: 'ASTM-A228', wireDiameterMm: 1, meanDiameterMm: 8 }
+    expect(issues(EvaluateRequestSchema, { ...bare, kind: 'extension', initialTensionN: 2 })).toEqual([['bodyCoils', 'Give the coils in the body (bodyCoils) or the active coils (activeCoils).']])
+    expect(issues(EvaluateRequestSchema, { ...bare, kind: 'extension', bodyCoils: 10 })).toEqual([['initialTensionN', 'The initial tension is missing.']])
+    expect(issues(EvaluateRequestSchema, { ...bare, kind: 'torsion', bodyCoils: 10, activeCoils: 9 })).toEqual([['activeCoils', 'The active coils (9) cannot be fewer than those in the body (10).']])
+    expect(issues(EvaluateRequestSchema, { ...bare, kind: 'torsion', bodyCoils: 10, mandrelMm: 5, fit: { rodMm: 6 } }).map(([path]) => path)).toEqual(['mandrelMm'])
+    expect(issues(EvaluateRequestSchema, { ...bare, kind: 'torsion', bodyCoils: 10, points: [{ forceN: 5 }] })).toEqual([['points.0', 'Each point is one of: an angle from free (angleDeg) or a moment (momentNmm).']])
   })
 
   it('refuses fields that contradict each other, at the field', () => {
@@ -59,7 +63,7 @@ describe('size request', () => {
 
   it('describes the answer of sizing, with and without a design', () => {
     for (const request of [makeRequest(), makeRequest({ temperatureC: 400 })]) {
-      const result = sizeCompression(request, makeWires('EN10270-1-SH', 'EN10270-3-1.4310'))
+      const result = sizeSpring(request, makeWires('EN10270-1-SH', 'EN10270-3-1.4310'))
       expect(SizeResponseSchema.safeParse(result).error).toBeUndefined()
     }
   })

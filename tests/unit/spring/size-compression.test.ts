@@ -1,10 +1,10 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import {
-  describeConflict, evaluateCompression, getMaterial, minimumTensileStrengthMpa, modulusMpa, sizeCompression,
-  type CompressionInput, type CompressionSizeRequest, type SizedDesign, type SizingWire,
+  describeConflict, evaluateCompression, getMaterial, minimumTensileStrengthMpa, modulusMpa, sizeSpring,
+  type CompressionInput, type CompressionSizeRequest, type SizedDesign, type SizedDesignOf, type SizingWire,
 } from '#shared/spring'
-import { uncoveredChecks } from '../../../shared/spring/sizing/compression/fixed-travel-search'
+import { uncoveredChecks } from '../../../shared/spring/sizing/compression/fixed-travel'
 import { EN_CODES, makeRequest, makeWires } from './springs'
 
 const catalogue = makeWires(...EN_CODES)
@@ -69,7 +69,7 @@ describe('what a design is', () => {
   it('meets the request and passes every stop check when it is evaluated again', () => {
     let found = 0
     fc.assert(fc.property(anyForm, (request) => {
-      const { designs } = sizeCompression(request, someWires, { explainConflict: false })
+      const { designs } = sizeSpring(request, someWires, { explainConflict: false })
       for (const design of designs) {
         found++
         const again = evaluateCompression(asInput(request, design))
@@ -87,13 +87,13 @@ describe('what a design is', () => {
     let found = 0
     fc.assert(fc.property(anyForm, (request) => {
       const steps = { ...request, coilStep: 0.25, diameterStepMm: 0.1 }
-      for (const design of sizeCompression(steps, someWires, { explainConflict: false }).designs) {
+      for (const design of sizeSpring(steps, someWires, { explainConflict: false }).designs) {
         found++
         expect(design.activeCoils * 4).toBeCloseTo(Math.round(design.activeCoils * 4), 9)
         expect(design.meanDiameterMm * 10).toBeCloseTo(Math.round(design.meanDiameterMm * 10), 9)
         expect(stops(asInput(request, design))).toEqual([])
         request.points.forEach((point, i) =>
-          expect(Math.abs((design.evaluation.points[i]?.forceN ?? 0) / point.forceN - 1)).toBeLessThan(0.010001))
+          expect(Math.abs(((design as SizedDesignOf<'compression'>).evaluation.points[i]?.forceN ?? 0) / point.forceN - 1)).toBeLessThan(0.010001))
       }
     }), { numRuns: 80 })
     expect(found).toBeGreaterThan(40)
@@ -101,8 +101,8 @@ describe('what a design is', () => {
 
   it('makes the rate exact where only coils or only the diameter go in steps', () => {
     for (const step of [{ coilStep: 0.25 }, { diameterStepMm: 0.1 }]) {
-      const [design] = sizeCompression(makeRequest(step), catalogue).designs
-      expect(design?.evaluation.rateNPerMm).toBeCloseTo(5, 9)
+      const [design] = sizeSpring(makeRequest(step), catalogue).designs
+      expect((design as SizedDesignOf<'compression'>).evaluation.rateNPerMm).toBeCloseTo(5, 9)
     }
   })
 })
@@ -112,7 +112,7 @@ describe('what is best', () => {
     let compared = 0
     fc.assert(fc.property(twoPoints, (request) => {
       const wires = catalogue.filter((_, i) => i % 12 === 0)
-      const { designs, searched } = sizeCompression(request, wires, { explainConflict: false })
+      const { designs, searched } = sizeSpring(request, wires, { explainConflict: false })
       const [p1, p2] = request.points
       if (!p1 || !p2) return
       const rate = (p2.forceN - p1.forceN) / (p1.lengthMm - p2.lengthMm)
@@ -149,7 +149,7 @@ describe('what is best', () => {
   it('finds no lighter spring for one free load on a grid of diameters and coils', () => {
     const request: CompressionSizeRequest = { kind: 'compression', points: [{ lengthMm: 40, forceN: 50 }], fit: { boreMm: 18 } }
     const wires = makeWires('EN10270-1-SH').filter(w => w.wireDiameterMm >= 0.8 && w.wireDiameterMm <= 3)
-    const best = sizeCompression(request, wires).designs[0]?.objectiveValue ?? Number.NaN
+    const best = sizeSpring(request, wires).designs[0]?.objectiveValue ?? Number.NaN
     let lightest = Infinity
     for (const wire of wires) {
       const d = wire.wireDiameterMm
@@ -174,18 +174,18 @@ describe('what is best', () => {
 
   it('orders designs by the objective and returns as many as asked', () => {
     for (const objective of ['mass', 'stress'] as const) {
-      const { designs } = sizeCompression(makeRequest({ limit: 20 }), catalogue, { objective })
+      const { designs } = sizeSpring(makeRequest({ limit: 20 }), catalogue, { objective })
       expect(designs).toHaveLength(20)
       const values = designs.map(d => d.objectiveValue)
       expect([...values].sort((a, b) => a - b)).toEqual(values)
     }
-    const stress = sizeCompression(makeRequest(), catalogue, { objective: 'stress' }).designs[0]
+    const stress = sizeSpring(makeRequest(), catalogue, { objective: 'stress' }).designs[0] as SizedDesignOf<'compression'> | undefined
     expect(stress?.evaluation.points[1]?.stressMpa).toBeCloseTo(stress?.objectiveValue ?? Number.NaN, 9)
   })
 
   it('serves a caller\'s objective, hands back the caller\'s wire and skips candidates without a price', () => {
     const priced = catalogue.map(wire => ({ ...wire, pricePerKg: wire.material === 'EN10270-1-SL' ? '1.00' : '50.00' }))
-    const { designs } = sizeCompression(makeRequest({ limit: 20 }), priced, {
+    const { designs } = sizeSpring(makeRequest({ limit: 20 }), priced, {
       objective: c => (c.wire.material === 'EN10270-1-SH' ? Number.NaN : (c.massG / 1000) * Number(c.wire.pricePerKg)),
     })
     expect(designs[0]?.wire.pricePerKg).toBe('1.00')
@@ -194,8 +194,8 @@ describe('what is best', () => {
 
   it('gives the same answer whatever the order of the wires', () => {
     const request = makeRequest({ fit: { boreMm: 25 } })
-    const forward = sizeCompression(request, catalogue)
-    const backward = sizeCompression(request, [...catalogue].reverse())
+    const forward = sizeSpring(request, catalogue)
+    const backward = sizeSpring(request, [...catalogue].reverse())
     expect(backward).toEqual(forward)
   })
 
@@ -206,19 +206,19 @@ describe('what is best', () => {
   it('searches no wire outside its material\'s data', () => {
     const outside: SizingWire[] = [{ id: 'x', material: 'EN10270-1-SL', wireDiameterMm: 0.9 }]
     expect(minimumTensileStrengthMpa(getMaterial('EN10270-1-SL'), 0.9).known).toBe(false)
-    expect(sizeCompression(makeRequest(), outside, { explainConflict: false }).designs).toEqual([])
+    expect(sizeSpring(makeRequest(), outside, { explainConflict: false }).designs).toEqual([])
   })
 })
 
 describe('when nothing fits', () => {
   it('names bore and rod alone where no wire goes between them', () => {
-    const { conflict } = sizeCompression(makeRequest({ fit: { boreMm: 10.3, rodMm: 10 } }), catalogue)
+    const { conflict } = sizeSpring(makeRequest({ fit: { boreMm: 10.3, rodMm: 10 } }), catalogue)
     expect(conflict?.requirements).toEqual(['fit.boreMm', 'fit.rodMm'])
   })
 
   it('names a set that clashes although every smaller part of it gives a spring, and changes that work', () => {
     const request = makeRequest({ fit: { boreMm: 14, rodMm: 12, maxFreeLengthMm: 90 }, temperatureC: 60 })
-    const { designs, conflict } = sizeCompression(request, catalogue)
+    const { designs, conflict } = sizeSpring(request, catalogue)
     expect(designs).toEqual([])
     expect(conflict?.requirements).toContain('fit.boreMm')
     expect(conflict?.requirements).toContain('fit.rodMm')
@@ -228,8 +228,8 @@ describe('when nothing fits', () => {
     expect(bore?.to).toBeGreaterThan(14)
     // The change is the least: a little less gives nothing.
     const fit = { ...request.fit }
-    expect(sizeCompression({ ...request, fit: { ...fit, boreMm: bore?.to } }, catalogue).designs.length).toBeGreaterThan(0)
-    expect(sizeCompression({ ...request, fit: { ...fit, boreMm: (bore?.to ?? 0) * 0.98 } }, catalogue, { explainConflict: false }).designs).toEqual([])
+    expect(sizeSpring({ ...request, fit: { ...fit, boreMm: bore?.to } }, catalogue).designs.length).toBeGreaterThan(0)
+    expect(sizeSpring({ ...request, fit: { ...fit, boreMm: (bore?.to ?? 0) * 0.98 } }, catalogue, { explainConflict: false }).designs).toEqual([])
     for (const change of conflict?.changes ?? []) {
       expect(change.design.evaluation.checks.filter(c => !c.ok && c.severity === 'stop')).toEqual([])
     }
@@ -240,20 +240,20 @@ describe('when nothing fits', () => {
   })
 
   it('says that heat or life is too much and what would do', () => {
-    const hot = sizeCompression(makeRequest({ temperatureC: 400 }), catalogue)
+    const hot = sizeSpring(makeRequest({ temperatureC: 400 }), catalogue)
     expect(hot.conflict?.requirements).toContain('temperatureC')
     expect(hot.conflict?.changes.find(c => c.path === 'temperatureC')?.to).toBe(250)
-    const long = sizeCompression(makeRequest({ duty: { cycles: 1e7 }, fit: { boreMm: 9 } }), catalogue)
+    const long = sizeSpring(makeRequest({ duty: { cycles: 1e7 }, fit: { boreMm: 9 } }), catalogue)
     expect(long.conflict?.requirements).toContain('duty.cycles')
     expect(long.conflict?.requirements).toContain('fit.boreMm')
     expect(long.conflict?.changes.find(c => c.path === 'duty.cycles')?.to).toBe(99_999)
   })
 
   it('blames the wire where there is none', () => {
-    expect(sizeCompression(makeRequest(), []).conflict).toEqual({ requirements: ['materials'], changes: [] })
+    expect(sizeSpring(makeRequest(), []).conflict).toEqual({ requirements: ['materials'], changes: [] })
   })
 
   it('leaves the explanation out when told', () => {
-    expect(sizeCompression(makeRequest({ temperatureC: 400 }), catalogue, { explainConflict: false }).conflict).toBeNull()
+    expect(sizeSpring(makeRequest({ temperatureC: 400 }), catalogue, { explainConflict: false }).conflict).toBeNull()
   })
 })

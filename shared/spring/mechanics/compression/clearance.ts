@@ -1,6 +1,3 @@
-/** Strokes in a life over which the duty counts as dynamic. */
-export const DYNAMIC_CYCLES = 1e4
-
 /**
  * Sum of the least gaps between coils at the shortest working length, mm: Sa = n (0.0015 D^2/d + 0.1 d) for static duty,
  * 1.5 times that for dynamic duty (EN 13906-1, cold coiled, from memory).

@@ -6,7 +6,8 @@ import {
 } from './checks/life'
 import { listTolerances } from './tolerances'
 import { totalCoilsFor } from './end-geometry'
-import { buildCompressionModel, type CompressionModel, type EvaluationContext } from './model'
+import type { EvaluationContext } from '../wire-model'
+import { buildCompressionModel, type CompressionModel } from './model'
 import { rateNPerMm } from '../rate'
 import {
   comparedStressMpa, createState, fillState, outerDiameterAtSolidMm, stateMassG, statePitchMm, stateWireLengthMm,
@@ -15,7 +16,9 @@ import {
 import { shearStressMpa } from '../stress'
 import { stressCorrectionFactor } from '../stress-factors'
 import { modulusAtTemperatureMpa } from '../temperature'
-import type { CompressionEvaluation, CompressionInput, FatigueResult, PointInput, PointResult } from '../types'
+import { hasFatigueData } from '../fatigue-data'
+import type { FatigueResult, PointInput, PointResult } from '../types'
+import type { CompressionEvaluation, CompressionInput } from './types'
 
 const orNull = (value: number): number | null => (Number.isFinite(value) ? value : null)
 
@@ -38,6 +41,7 @@ export function describeSpring(model: CompressionModel, state: CompressionState,
   const points = lengths.map(lengthMm => describePoint(model, state, factor, lengthMm))
   const solidStress = shearStressMpa(state.solidForceN, state.meanDiameterMm, model.wireDiameterMm)
   return {
+    kind: 'compression',
     springIndex: state.springIndex,
     stressCorrectionFactor: factor,
     rateNPerMm: state.rateNPerMm,
@@ -104,11 +108,12 @@ function describePoint(model: CompressionModel, state: CompressionState, factor:
 }
 
 function describeFatigue(model: CompressionModel, state: CompressionState): FatigueResult | null {
-  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa)) return null
+  if (model.cycles <= 0 || Number.isNaN(model.tensileStrengthMpa) || !hasFatigueData(model)) return null
   const high = greatestCorrectedStressMpa(model, state)
   const low = leastCorrectedStressMpa(model, state)
   const amplitudeMpa = (high - low) / 2
-  if (!(amplitudeMpa > 0)) return null
+  // Drawn out beyond its free length it is no compression spring: the check of order stops it.
+  if (!(amplitudeMpa > 0) || low < 0) return null
   const safetyFactor = stateFatigueFactor(model, state)
   return {
     method: `Goodman line through Zimmerli's data, ${model.shotPeened ? 'shot peened' : 'not peened'}`,

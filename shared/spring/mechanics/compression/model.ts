@@ -1,54 +1,22 @@
-import type { CompressionEnds, MaterialCode, StressMethod, Surroundings, ToleranceGrade } from '../../codes'
-import { getMaterial, greatestWireDiameterMm, minimumTensileStrengthMpa, modulusMpa, type Material } from '../../materials'
-import { DYNAMIC_CYCLES } from './clearance'
-import type { SolidLengthConvention } from './end-geometry'
+import type { CompressionEnds, MaterialCode } from '../../codes'
+import { greatestWireDiameterMm } from '../../materials'
 import { staticLimit, type StaticLimit } from '../static-limits'
-import { stressCorrectionFactor } from '../stress-factors'
-import type { CompressionConditions, MaterialValues } from '../types'
-
-/** What the caller knows beyond the spring itself. */
-export interface EvaluationContext {
-  /** Whether the wire lies in stock; leave out where that means nothing. */
-  readonly stocked?: boolean | undefined
-  readonly surroundings?: Surroundings | undefined
-}
+import type { MaterialValues } from '../types'
+import { buildWireModel, type EvaluationContext, type WireModel } from '../wire-model'
+import type { SolidLengthConvention } from './end-geometry'
+import type { CompressionConditions } from './types'
 
 /** Everything about material, wire, making and use that does not change with mean diameter, coils and free length. */
-export interface CompressionModel {
-  readonly material: Material
-  readonly wireDiameterMm: number
-  readonly shearModulusMpa: number
-  readonly youngsModulusMpa: number
-  /** G/E. */
-  readonly moduli: number
-  readonly densityKgPerM3: number
-  /** NaN where the standard does not cover the diameter and the caller gave none. */
-  readonly tensileStrengthMpa: number
+export interface CompressionModel extends WireModel {
   readonly allowableStressMpa: number
   readonly staticLimit: StaticLimit
-  readonly wireProblem: string | null
-  readonly method: StressMethod
   readonly ends: CompressionEnds
   readonly convention: SolidLengthConvention
   /** The wire the solid length is counted in: greatest or nominal. */
   readonly solidWireMm: number
   readonly seating: number
-  readonly grade: ToleranceGrade
-  readonly cycles: number
-  readonly dynamic: boolean
-  readonly strokesPerMinute: number
-  readonly shotPeened: boolean
-  readonly preset: boolean
   readonly solidSafe: boolean
   readonly guided: boolean
-  /** NaN where not given; the same for the other limits of the fit. */
-  readonly boreMm: number
-  readonly rodMm: number
-  readonly maxFreeLengthMm: number
-  readonly maxSolidLengthMm: number
-  /** NaN where not given. */
-  readonly temperatureC: number
-  readonly context: EvaluationContext
 }
 
 /** Resolves defaults and material values once for a wire. */
@@ -57,48 +25,20 @@ export function buildCompressionModel(
   conditions: CompressionConditions,
   context: EvaluationContext = {},
 ): CompressionModel {
-  const material = getMaterial(spring.material)
-  const d = spring.wireDiameterMm
-  const own = spring.materialValues ?? {}
-  const method = conditions.method ?? 'en13906'
-  const preset = conditions.preset ?? false
-  const strength = minimumTensileStrengthMpa(material, d)
-  const tensile = own.tensileStrengthMpa ?? (strength.known ? strength.minimumMpa : Number.NaN)
-  const limit = staticLimit(method, material.family, preset, w => stressCorrectionFactor(method, w))
-  const G = own.shearModulusMpa ?? modulusMpa(material.shearModulus, d)
-  const E = own.youngsModulusMpa ?? modulusMpa(material.youngsModulus, d)
-  const cycles = conditions.duty?.cycles ?? 0
-  const fit = conditions.fit ?? {}
+  const wire = buildWireModel(spring, conditions, context)
+  const { method, wireDiameterMm: d, boreMm, rodMm } = wire
+  const limit = staticLimit(method, wire.material.family, wire.preset)
   const convention = method === 'en13906' ? 'en' : 'textbook'
-  return {
-    material,
-    wireDiameterMm: d,
-    shearModulusMpa: G,
-    youngsModulusMpa: E,
-    moduli: G / E,
-    densityKgPerM3: own.densityKgPerM3 ?? material.densityKgPerM3.value,
-    tensileStrengthMpa: tensile,
-    allowableStressMpa: limit.fractionOfStrength * tensile,
+  // Onto the wire's own object: a copy of so many fields costs more than all the rest, and sizing makes one for each wire.
+  const own: Omit<CompressionModel, keyof WireModel> = {
+    allowableStressMpa: limit.fractionOfStrength * wire.tensileStrengthMpa,
     staticLimit: limit,
-    wireProblem: strength.known ? null : strength.reason,
-    method,
     ends: conditions.ends ?? 'closed-ground',
     convention,
     solidWireMm: convention === 'en' ? greatestWireDiameterMm(d) : d,
     seating: conditions.seatingCoefficient ?? 0.5,
-    grade: conditions.toleranceGrade ?? 2,
-    cycles,
-    dynamic: cycles > DYNAMIC_CYCLES,
-    strokesPerMinute: conditions.duty?.strokesPerMinute ?? 0,
-    shotPeened: conditions.shotPeened ?? false,
-    preset,
     solidSafe: conditions.solidSafe ?? true,
-    guided: (conditions.guided ?? false) || fit.boreMm !== undefined || fit.rodMm !== undefined,
-    boreMm: fit.boreMm ?? Number.NaN,
-    rodMm: fit.rodMm ?? Number.NaN,
-    maxFreeLengthMm: fit.maxFreeLengthMm ?? Number.NaN,
-    maxSolidLengthMm: fit.maxSolidLengthMm ?? Number.NaN,
-    temperatureC: conditions.temperatureC ?? Number.NaN,
-    context,
+    guided: (conditions.guided ?? false) || !Number.isNaN(boreMm) || !Number.isNaN(rodMm),
   }
+  return Object.assign(wire, own)
 }

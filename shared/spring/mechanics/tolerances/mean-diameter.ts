@@ -25,8 +25,10 @@ const ROWS: readonly (readonly [number, number, number, number, number, number, 
 const LEAST_MEAN_DIAMETER_MM = 0.63
 /** Index at which the tolerance steps up, and the ends of the table. */
 export const INDEX_STEPS = [4, 8, 14, 20] as const
-/** Mean diameters at which the tolerance steps up, mm. */
-export const MEAN_DIAMETER_STEPS_MM: readonly number[] = ROWS.map(row => row[0])
+/** Mean diameters at which the tolerance steps up, mm; it begins at the first and ends, and so is counted as none, beyond the last. */
+export const MEAN_DIAMETER_STEPS_MM: readonly number[] = [LEAST_MEAN_DIAMETER_MM, ...ROWS.map(row => row[0])]
+/** Beyond this no tolerance is published. */
+export const MOST_MEAN_DIAMETER_MM = 200
 
 /**
  * Tolerance of the mean diameter (and so of the outside and inside), plus or minus mm, EN 15800; NaN outside the table

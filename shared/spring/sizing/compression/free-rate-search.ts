@@ -1,111 +1,120 @@
 import { passesStopChecks } from '../../mechanics/compression/checks'
-import type { CompressionCheck } from '../../mechanics/compression/checks/check'
-import { boreCheck, freeLengthCheck, rodCheck, solidLengthCheck } from '../../mechanics/compression/checks/fit'
-import { fatigueCheck, temperatureCheck } from '../../mechanics/compression/checks/life'
-import { coilsCheck, wireRangeCheck } from '../../mechanics/compression/checks/proportion'
-import { bucklingCheck } from '../../mechanics/compression/checks/stability'
-import { stressSolidCheck, stressWorkingCheck } from '../../mechanics/compression/checks/stress'
-import { clearanceCheck, orderCheck } from '../../mechanics/compression/checks/travel'
 import type { CompressionModel } from '../../mechanics/compression/model'
-import { rateNPerMm } from '../../mechanics/rate'
-import { fillState, stateMassG, type CompressionState } from '../../mechanics/compression/state'
-import { greatestThatHolds, leastThatHolds, placeOfLeast } from '../numeric-search'
+import { stateMassG, type CompressionState } from '../../mechanics/compression/state'
+import { minimiseBounded } from '../bounded-minimum'
+import type { WireGoal, WireSpring } from '../kind-search'
+import { forEachStep, isContinuous, stepped, type Steps } from '../steps'
+import { coilRange, couldPass, fewestCoilsBetween, fillFreeRate, massBoundG, mostCoils, possibleDiameters } from './free-rate'
+import { LEAST_ACTIVE_COILS } from './search-state'
 import type { FreeRateTravel } from './travel'
-import { LEAST_ACTIVE_COILS, LEAST_INDEX, MOST_INDEX, allHold, stepped, totalCoils, type Steps, type WireGoal, type WireSpring } from './wire-search'
 
-/*
- * One load at one length leaves rate and free length open: L0 = L + F/R. At a given mean diameter the coils have a least
- * number (the stress when solid, the bore) and a greatest (room, length, buckling); mass grows with the coils, so the
- * least number is taken and the diameter is searched.
+/** Of the range of diameters, far below what can be wound. */
+const LEAST_WIDTH = 1e-7
+
+/** What each wire is searched for: the best for a goal, all, or whichever passes first. */
+type Goal = WireGoal | 'any'
+
+interface Diameters {
+  readonly low: number
+  readonly high: number
+}
+
+/**
+ * Springs of the wire that serve the goal when only one load is asked for; every one passes every stop check. Mass rises with
+ * the coils, so each diameter gives its spring of fewest coils; in steps of diameter `every` gives all of those.
  */
-const CONSTANT_CHECKS: readonly CompressionCheck[] = [wireRangeCheck, temperatureCheck, stressWorkingCheck, fatigueCheck, rodCheck]
-const LEAST_COIL_CHECKS: readonly CompressionCheck[] = [coilsCheck, stressSolidCheck, boreCheck]
-const MOST_COIL_CHECKS: readonly CompressionCheck[] = [orderCheck, clearanceCheck, solidLengthCheck, freeLengthCheck, bucklingCheck]
-
-const GRID = 24
-const STEPPED_NEIGHBOURS = 20
-
-interface CoilRange {
-  readonly least: number
-  readonly most: number
-}
-
-function fillAt(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number, n: number): CompressionState {
-  const rate = rateNPerMm({
-    shearModulusMpa: model.shearModulusMpa, wireDiameterMm: model.wireDiameterMm, meanDiameterMm: D, activeCoils: n,
-  })
-  return fillState(state, model, D, n, totalCoils(model, n), travel.point.lengthMm + travel.point.forceN / rate)
-}
-
-/** Coils that pass every stop check at a mean diameter; null where none do. */
-function coilRange(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number): CoilRange | null {
-  let least = LEAST_ACTIVE_COILS
-  let most = travel.point.lengthMm / model.wireDiameterMm
-  if (!(least <= most)) return null
-  fillAt(model, state, travel, D, least)
-  if (!allHold(CONSTANT_CHECKS, model, state)) return null
-  most = greatestThatHolds(n => allHold(MOST_COIL_CHECKS, model, fillAt(model, state, travel, D, n)), least, most)
-  if (Number.isNaN(most)) return null
-  least = leastThatHolds(n => allHold(LEAST_COIL_CHECKS, model, fillAt(model, state, travel, D, n)), least, most)
-  return Number.isNaN(least) ? null : { least, most }
-}
-
-/** Springs of the wire that serve the goal when only one load is asked for; every one passes every stop check. */
-export function searchFreeRate(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: WireGoal, steps: Steps): WireSpring[] {
-  const d = model.wireDiameterMm
-  const low = LEAST_INDEX * d
-  const high = MOST_INDEX * d
-  const massAt = (D: number) => {
-    const range = coilRange(model, state, travel, D)
-    return range ? stateMassG(model, fillAt(model, state, travel, D, range.least)) : Infinity
-  }
-  const grid = Array.from({ length: GRID + 1 }, (_, i) => low * (high / low) ** (i / GRID))
-  const masses = grid.map(massAt)
-  const isStepped = !Number.isNaN(steps.coilStep) || !Number.isNaN(steps.diameterStepMm)
-  const places: number[] = []
-  grid.forEach((D, i) => {
-    const mass = masses[i] ?? Infinity
-    if (!Number.isFinite(mass)) return
-    const left = grid[i - 1] ?? D
-    const right = grid[i + 1] ?? D
-    const feasible = (x: number) => Number.isFinite(massAt(x))
-    const from = Number.isFinite(masses[i - 1] ?? mass) ? left : leastThatHolds(feasible, left, D)
-    const to = Number.isFinite(masses[i + 1] ?? mass) ? right : greatestThatHolds(feasible, D, right)
-    const isFirst = !Number.isFinite(masses[i - 1] ?? Infinity)
-    if (goal === 'stress') {
-      if (isFirst) places.push(from)
-    } else if (mass <= (masses[i - 1] ?? Infinity) && mass <= (masses[i + 1] ?? Infinity)) {
-      places.push(placeOfLeast(massAt, from, to))
-    }
-    if (goal === 'spread' && !isStepped) places.push(D)
-  })
-  const springs = places.flatMap(D => (isStepped ? steppedNear(model, state, travel, D, steps) : springsAt(model, state, travel, D, goal)))
-  return springs.sort((a, b) => a.meanDiameterMm - b.meanDiameterMm)
-}
-
-function springsAt(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number, goal: WireGoal): WireSpring[] {
-  const range = coilRange(model, state, travel, D)
+export function searchFreeRate(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: Goal, steps: Steps): WireSpring[] {
+  const range = possibleDiameters(model, state, travel)
   if (!range) return []
-  const coils = goal === 'spread' ? [range.least, (range.least + range.most) / 2, range.most] : [range.least]
-  return coils.flatMap(n => passing(model, state, travel, D, n))
+  if (isContinuous(steps)) return searchContinuous(model, state, travel, goal, range)
+  return Number.isNaN(steps.diameterStepMm)
+    ? searchCoilSteps(model, state, travel, goal, steps.coilStep, range)
+    : searchDiameterSteps(model, state, travel, goal, steps, range)
 }
 
-function steppedNear(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, place: number, steps: Steps): WireSpring[] {
-  const { coilStep, diameterStepMm } = steps
-  const diameters = Number.isNaN(diameterStepMm)
-    ? [place]
-    : Array.from({ length: 2 * STEPPED_NEIGHBOURS + 1 }, (_, i) => stepped(Math.round(place / diameterStepMm) + i - STEPPED_NEIGHBOURS, diameterStepMm))
-  return diameters.flatMap((D) => {
-    if (D < LEAST_INDEX * model.wireDiameterMm || D > MOST_INDEX * model.wireDiameterMm) return []
+/** True where the wire gives some spring. */
+export function isFreeRateFeasible(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, steps: Steps): boolean {
+  return searchFreeRate(model, state, travel, 'any', steps).length > 0
+}
+
+const springOf = (state: CompressionState): WireSpring =>
+  ({ meanDiameterMm: state.meanDiameterMm, activeCoils: state.activeCoils, totalCoils: state.totalCoils, freeLengthMm: state.freeLengthMm })
+
+function searchContinuous(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: Goal, { low, high }: Diameters): WireSpring[] {
+  const byStress = goal === 'stress'
+  const { point } = minimiseBounded({
+    low: [low], high: [high],
+    bound: ([a = 0], [b = 0]) => {
+      const bound = massBoundG(model, state, travel, a, b)
+      // The working stress of the one load rises with D alone.
+      return byStress && bound < Infinity ? a : bound
+    },
+    value: ([D = 0]) => {
+      const range = coilRange(model, state, travel, D)
+      if (!range) return Infinity
+      return byStress ? D : stateMassG(model, fillFreeRate(model, state, travel, D, range.least))
+    },
+  }, { leastWidth: LEAST_WIDTH, anyPoint: goal === 'any' })
+  const D = point?.[0]
+  const n = D === undefined ? undefined : coilRange(model, state, travel, D)?.least
+  if (D === undefined || n === undefined) return []
+  fillFreeRate(model, state, travel, D, n)
+  return passesStopChecks(model, state) ? [springOf(state)] : []
+}
+
+// At each stepped diameter the fewest coils that pass, in steps too where asked; the best is kept, or all.
+function searchDiameterSteps(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: Goal, { coilStep, diameterStepMm }: Steps, { low, high }: Diameters): WireSpring[] {
+  const keep = createKeeper(model, state, goal)
+  forEachStep(low, high, diameterStepMm, (D) => {
+    if (keep.isDone()) return
+    // No spring of this diameter is lighter than one of two coils.
+    if (goal === 'mass' && stateMassG(model, fillFreeRate(model, state, travel, D, LEAST_ACTIVE_COILS)) >= keep.least()) return
     const range = coilRange(model, state, travel, D)
-    if (!range) return []
+    if (!range) return
     const n = Number.isNaN(coilStep) ? range.least : stepped(Math.ceil(range.least / coilStep - 1e-9), coilStep)
-    return n <= range.most ? passing(model, state, travel, D, n) : []
+    if (n > range.most) return
+    fillFreeRate(model, state, travel, D, n)
+    if (passesStopChecks(model, state)) keep.take()
   })
+  return keep.kept()
 }
 
-function passing(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, D: number, n: number): WireSpring[] {
-  fillAt(model, state, travel, D, n)
-  if (!passesStopChecks(model, state)) return []
-  return [{ meanDiameterMm: D, activeCoils: n, totalCoils: state.totalCoils, freeLengthMm: state.freeLengthMm }]
+// With the coils given, mass and stress rise with D: the least diameter that passes is both the lightest and the least stressed.
+function searchCoilSteps(model: CompressionModel, state: CompressionState, travel: FreeRateTravel, goal: Goal, coilStep: number, { low, high }: Diameters): WireSpring[] {
+  const keep = createKeeper(model, state, goal)
+  forEachStep(LEAST_ACTIVE_COILS, mostCoils(model, travel), coilStep, (n) => {
+    if (keep.isDone() || !couldPass(model, state, travel, n, low, high)) return
+    if (goal === 'mass' && stateMassG(model, fillFreeRate(model, state, travel, low, n)) >= keep.least()) return
+    const { point } = minimiseBounded({
+      low: [low], high: [high],
+      bound: ([a = 0], [b = 0]) => (couldPass(model, state, travel, n, a, b) && fewestCoilsBetween(model, state, travel, a, b) <= n * (1 + 1e-9) ? a : Infinity),
+      value: ([D = 0]) => (passesStopChecks(model, fillFreeRate(model, state, travel, D, n)) ? D : Infinity),
+    }, { leastWidth: LEAST_WIDTH })
+    const D = point?.[0]
+    if (D === undefined) return
+    fillFreeRate(model, state, travel, D, n)
+    keep.take()
+  })
+  return keep.kept()
+}
+
+// Keeps of the springs that the state is filled with what the goal asks for.
+function createKeeper(model: CompressionModel, state: CompressionState, goal: Goal) {
+  const kept: WireSpring[] = []
+  let least = Infinity
+  return {
+    least: () => least,
+    isDone: () => goal === 'any' && kept.length > 0,
+    kept: () => kept,
+    take: () => {
+      if (goal === 'every') {
+        kept.push(springOf(state))
+        return
+      }
+      const value = goal === 'stress' ? state.meanDiameterMm : stateMassG(model, state)
+      if (value >= least) return
+      least = value
+      kept[0] = springOf(state)
+    },
+  }
 }

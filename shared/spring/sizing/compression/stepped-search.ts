@@ -1,67 +1,117 @@
+import { totalCoilsFor } from '../../mechanics/compression/end-geometry'
 import { passesStopChecks } from '../../mechanics/compression/checks'
 import type { CompressionModel } from '../../mechanics/compression/model'
-import { rateNPerMm } from '../../mechanics/rate'
-import { fillState, type CompressionState } from '../../mechanics/compression/state'
-import { feasibleDiameters } from './fixed-travel-search'
-import { STEP_TOLERANCE, freeLengthForRate, type FixedTravel } from './travel'
-import { LEAST_ACTIVE_COILS, LEAST_INDEX, MOST_INDEX, stepped, totalCoils, type Steps, type WireSpring } from './wire-search'
+import { fillState, greatestForceN, stateMassG, type CompressionState } from '../../mechanics/compression/state'
+import type { WireGoal, WireSpring } from '../kind-search'
+import { greatestThatHolds, leastThatHolds } from '../numeric-search'
+import { LEAST_INDEX, MOST_INDEX, isContinuous, stepped, type Steps } from '../steps'
+import { CONSTANT_CHECKS, LEAST_DIAMETER_CHECKS, MOST_DIAMETER_CHECKS, feasibleDiameters, fillAtDiameter } from './fixed-travel'
+import { boreCheck } from '../../mechanics/compression/checks/fit'
+import { LEAST_ACTIVE_COILS, allHold } from './search-state'
+import { freeLengthForRateMm, rateTolerance, withRate, type FixedTravel } from './travel'
 
-// A guard against absurd steps; a real wire has some hundred steps of diameter and coils.
-const MOST_STEPS = 4000
+/** `any`: the first that passes, whichever it is. */
+export type SteppedGoal = WireGoal | 'any'
+
+const EDGE = 1e-9
 
 /**
- * Every spring of the wire whose coils and diameter are whole steps and that passes every stop check. With one of the two
- * in steps the other makes the rate exact; with both, the asked forces are met within STEP_TOLERANCE.
+ * Springs of the wire whose coils and diameter are whole steps and that pass every stop check: all of them, or the best for
+ * the goal. With one of the two in steps the other makes the rate exact. With both, every pair is looked at whose rate is
+ * within the tolerance of the steps (see `rateTolerance`), so the best is the best.
  */
-export function searchStepped(model: CompressionModel, state: CompressionState, travel: FixedTravel, steps: Steps): WireSpring[] {
-  const intervals = feasibleDiameters(model, state, travel)
-  const [first] = intervals
-  const last = intervals[intervals.length - 1]
-  if (!first || !last) return []
+export function searchStepped(model: CompressionModel, state: CompressionState, travel: FixedTravel, goal: SteppedGoal, steps: Steps): WireSpring[] {
   const { coilStep, diameterStepMm } = steps
   const d = model.wireDiameterMm
-  const stiffness = (model.shearModulusMpa * d ** 4) / 8
-  const coilsAt = (D: number) => stiffness / (D * D * D * travel.rateNPerMm)
-  const found: WireSpring[] = []
-  const take = (D: number, n: number) => {
-    const spring = passing(model, state, travel, D, n)
-    if (spring) found.push(spring)
+  const stiffness = (model.shearModulusMpa * d * d * d * d) / 8
+  const every: WireSpring[] = []
+  let best: WireSpring | null = null
+  let least = Infinity
+  // True where the search may end.
+  const take = (D: number, n: number): boolean => {
+    const rate = stiffness / (D * D * D * n)
+    fillState(state, model, D, n, totalCoilsFor(model.ends, n), freeLengthForRateMm(travel, rate))
+    const value = goal === 'mass' ? stateMassG(model, state) : goal === 'stress' ? loadedForceN(travel, state) * D : 0
+    if ((goal === 'mass' || goal === 'stress') && !(value < least)) return false
+    if (!passesStopChecks(model, state)) return false
+    const spring = { meanDiameterMm: D, activeCoils: n, totalCoils: state.totalCoils, freeLengthMm: state.freeLengthMm }
+    if (goal === 'every') every.push(spring)
+    else best = spring
+    least = value
+    return goal === 'any'
   }
-
-  if (Number.isNaN(diameterStepMm)) {
-    const from = Math.ceil(coilsAt(last.highMm) / coilStep - 1e-9)
-    const to = Math.min(Math.floor(coilsAt(first.lowMm) / coilStep + 1e-9), from + MOST_STEPS)
-    for (let i = from; i <= to; i++) {
-      const n = stepped(i, coilStep)
-      take(Math.cbrt(stiffness / (n * travel.rateNPerMm)), n)
-    }
-    return found
-  }
-
-  // One step beyond the exact range on either side: within the tolerance a neighbour may pass where the exact one does not.
-  const from = Math.max(Math.floor(first.lowMm / diameterStepMm), Math.ceil((LEAST_INDEX * d) / diameterStepMm - 1e-9))
-  const to = Math.min(Math.ceil(last.highMm / diameterStepMm), Math.floor((MOST_INDEX * d) / diameterStepMm + 1e-9), from + MOST_STEPS)
-  for (let i = from; i <= to; i++) {
-    const D = stepped(i, diameterStepMm)
-    const exact = coilsAt(D)
-    if (Number.isNaN(coilStep)) {
-      take(D, exact)
-      continue
-    }
-    const below = Math.floor(exact / coilStep)
-    for (const n of [stepped(below, coilStep), stepped(below + 1, coilStep)]) take(D, n)
-  }
-  return found
+  forEachSpring(model, state, travel, steps, take, { stiffness, coilStep, diameterStepMm })
+  return best ? [best] : every
 }
 
-function passing(model: CompressionModel, state: CompressionState, travel: FixedTravel, D: number, n: number): WireSpring | null {
-  if (n < LEAST_ACTIVE_COILS) return null
-  const rate = rateNPerMm({
-    shearModulusMpa: model.shearModulusMpa, wireDiameterMm: model.wireDiameterMm, meanDiameterMm: D, activeCoils: n,
-  })
-  const { freeLengthMm, error } = freeLengthForRate(travel, rate)
-  if (error > STEP_TOLERANCE) return null
-  fillState(state, model, D, n, totalCoils(model, n), freeLengthMm)
-  if (!passesStopChecks(model, state)) return null
-  return { meanDiameterMm: D, activeCoils: n, totalCoils: state.totalCoils, freeLengthMm }
+/** True where some stepped spring of the wire passes every stop check. */
+export function hasSteppedSpring(model: CompressionModel, state: CompressionState, travel: FixedTravel, steps: Steps): boolean {
+  return searchStepped(model, state, travel, 'any', steps).length > 0
+}
+
+/** The load a spring is judged by: the greatest asked, or when solid where none is. */
+const loadedForceN = (travel: FixedTravel, state: CompressionState) => (travel.points.length > 0 ? greatestForceN(state) : state.solidForceN)
+
+interface Grid extends Steps {
+  readonly stiffness: number
+}
+
+function forEachSpring(
+  model: CompressionModel, state: CompressionState, travel: FixedTravel, steps: Steps, take: (D: number, n: number) => boolean, { stiffness, coilStep, diameterStepMm }: Grid,
+): void {
+  const bothStepped = !Number.isNaN(coilStep) && !Number.isNaN(diameterStepMm)
+  if (isContinuous(steps)) return
+  if (bothStepped) {
+    const tolerance = rateTolerance(travel)
+    const range = steppedDiameters(model, state, travel, tolerance)
+    if (!range) return
+    for (let i = Math.ceil(range.low / diameterStepMm - EDGE); i <= range.high / diameterStepMm + EDGE; i++) {
+      const D = stepped(i, diameterStepMm)
+      const exact = stiffness / (D * D * D * travel.rateNPerMm)
+      const most = exact / (1 - tolerance) / coilStep + EDGE
+      for (let j = Math.ceil(Math.max(LEAST_ACTIVE_COILS, exact / (1 + tolerance)) / coilStep - EDGE); j <= most; j++) {
+        if (take(D, stepped(j, coilStep))) return
+      }
+    }
+    return
+  }
+  for (const { lowMm, highMm } of feasibleDiameters(model, state, travel)) {
+    if (Number.isNaN(diameterStepMm)) {
+      const most = stiffness / (lowMm * lowMm * lowMm * travel.rateNPerMm) / coilStep + EDGE
+      for (let j = Math.ceil(stiffness / (highMm * highMm * highMm * travel.rateNPerMm) / coilStep - EDGE); j <= most; j++) {
+        const n = stepped(j, coilStep)
+        if (take(Math.cbrt(stiffness / (n * travel.rateNPerMm)), n)) return
+      }
+    } else {
+      for (let i = Math.ceil(lowMm / diameterStepMm - EDGE); i <= highMm / diameterStepMm + EDGE; i++) {
+        const D = stepped(i, diameterStepMm)
+        if (take(D, stiffness / (D * D * D * travel.rateNPerMm))) return
+      }
+    }
+  }
+}
+
+const LARGE_FAILS = MOST_DIAMETER_CHECKS.filter(check => check !== boreCheck)
+
+/**
+ * Mean diameters outside which no stepped spring passes. At a diameter the springs differ in coils, n_exact/(1 + t) to
+ * n_exact/(1 - t). With more coils the rate falls and the free length does not, F1 (1 - e) rises and F2 (1 + e) falls; so order,
+ * gaps, lengths and buckling are easiest with the fewest coils (the stiffest rate, its free length), while coils, both
+ * stresses (when solid F2 + R (L2 - Lc), each part falls) and the life are easiest with the most. Each of these two travels is
+ * a fixed one, for which the claims of fixed-travel.ts hold. Of bore and rod only the bare wire is asked here.
+ */
+function steppedDiameters(model: CompressionModel, state: CompressionState, travel: FixedTravel, tolerance: number): { low: number, high: number } | null {
+  const d = model.wireDiameterMm
+  const stiffest = withRate(travel, travel.rateNPerMm * (1 + tolerance))
+  const softest = withRate(travel, travel.rateNPerMm * (1 - tolerance))
+  const from = Math.max(LEAST_INDEX * d, Number.isNaN(model.rodMm) ? 0 : model.rodMm + d)
+  const to = Math.min(MOST_INDEX * d, Number.isNaN(model.boreMm) ? Infinity : model.boreMm - d)
+  if (!(from <= to)) return null
+  if (!allHold(CONSTANT_CHECKS, model, fillAtDiameter(model, state, stiffest, from))) return null
+  const isSmallEnough = (D: number) => allHold(LARGE_FAILS, model, fillAtDiameter(model, state, softest, D))
+  if (!isSmallEnough(from)) return null
+  const low = leastThatHolds(D => allHold(LEAST_DIAMETER_CHECKS, model, fillAtDiameter(model, state, stiffest, D)), from, to)
+  if (Number.isNaN(low)) return null
+  const high = greatestThatHolds(isSmallEnough, low, to)
+  return Number.isNaN(high) ? null : { low: low * (1 - EDGE), high: high * (1 + EDGE) }
 }

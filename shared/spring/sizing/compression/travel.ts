@@ -1,3 +1,4 @@
+import { STEP_TOLERANCE } from '../steps'
 import type { CompressionSizeRequest, LoadPoint } from '../types'
 
 /** Rate and free length follow from the request. `anchor` says what stays exact when coils or diameter go in steps. */
@@ -39,22 +40,29 @@ export function resolveTravel(request: CompressionSizeRequest): Travel {
   throw new Error('A size request needs points, or a rate and a free length')
 }
 
-/** Greatest relative error of an asked force (or rate, where no force is asked) that steps of coil and diameter may cause. */
-export const STEP_TOLERANCE = 0.01
+/** Between two loads close together the rate may be far off before either load is: never more than this (common practice, no source). */
+const MOST_RATE_ERROR = 0.1
+
+/** By how much of itself the rate may be off for the asked loads to be met within STEP_TOLERANCE: (F1 + F2)/(F2 - F1) of it between two. */
+export function rateTolerance(travel: FixedTravel): number {
+  const [first, second] = travel.points
+  const spread = travel.anchor === 'two-points' && first && second ? (first.forceN + second.forceN) / (second.forceN - first.forceN) : 1
+  return Math.min(STEP_TOLERANCE * spread, MOST_RATE_ERROR)
+}
 
 /**
- * Free length for a rate that steps have moved off the asked one, and the relative error of the asked forces that comes
- * with it. Between two points the error is shared out evenly; one point is held exactly.
+ * Free length for a rate that steps have moved off the asked one, mm. Between two points the error of the loads is shared out
+ * evenly, F1 (1 - e) and F2 (1 + e); one point is held exactly; a free length is kept.
  */
-export function freeLengthForRate(travel: FixedTravel, rateNPerMm: number): { readonly freeLengthMm: number, readonly error: number } {
-  const ratio = rateNPerMm / travel.rateNPerMm - 1
+export function freeLengthForRateMm(travel: FixedTravel, rateNPerMm: number): number {
   const [first, second] = travel.points
-  if (travel.anchor === 'two-points' && first && second) {
-    const error = (ratio * (second.forceN - first.forceN)) / (first.forceN + second.forceN)
-    return { freeLengthMm: first.lengthMm + (first.forceN * (1 - error)) / rateNPerMm, error: Math.abs(error) }
-  }
-  if (travel.anchor === 'one-point' && first) {
-    return { freeLengthMm: first.lengthMm + first.forceN / rateNPerMm, error: Math.abs(ratio) }
-  }
-  return { freeLengthMm: travel.freeLengthMm, error: Math.abs(ratio) }
+  if (travel.anchor === 'free-length' || !first) return travel.freeLengthMm
+  if (travel.anchor === 'one-point' || !second) return first.lengthMm + first.forceN / rateNPerMm
+  const error = ((rateNPerMm / travel.rateNPerMm - 1) * (second.forceN - first.forceN)) / (first.forceN + second.forceN)
+  return first.lengthMm + (first.forceN * (1 - error)) / rateNPerMm
+}
+
+/** The same travel with another rate, and the free length that goes with it. */
+export function withRate(travel: FixedTravel, rateNPerMm: number): FixedTravel {
+  return { ...travel, rateNPerMm, freeLengthMm: freeLengthForRateMm(travel, rateNPerMm) }
 }

@@ -1,46 +1,6 @@
+import type { SpringCheck } from '../../checks/check'
 import type { CompressionModel } from '../model'
 import type { CompressionState } from '../state'
-import type { Check, CheckSeverity } from '../../types'
 
-/** One check of a compression spring. Sizing uses `stops`, evaluating uses `describe`; both read the same measure. */
-export interface CompressionCheck {
-  readonly code: string
-  /** False where the request gives nothing to check. */
-  readonly applies: (model: CompressionModel, state: CompressionState) => boolean
-  /** True where the spring must not be made. Numbers only: it runs in the search's inner loop. */
-  readonly stops: (model: CompressionModel, state: CompressionState) => boolean
-  readonly describe: (model: CompressionModel, state: CompressionState) => Check
-}
-
-// Springs found on a limit pass it: rounding in the last figures must not turn them away.
-const SLACK = 1e-9
-
-/** value > limit beyond rounding. */
-export function exceeds(value: number, limit: number): boolean {
-  return value > limit + SLACK * Math.abs(limit)
-}
-
-/** value < limit beyond rounding. */
-export function fallsShort(value: number, limit: number): boolean {
-  return value < limit - SLACK * Math.abs(limit)
-}
-
-/** The finished check: failed as a stop, failed as a caution, or passed. */
-export function finishCheck(
-  code: string,
-  verdict: { readonly stop: boolean, readonly caution: boolean },
-  value: number,
-  limit: number,
-  words: { readonly stop: string, readonly caution: string, readonly pass: string },
-  gravest: CheckSeverity = 'stop',
-): Check {
-  const state = verdict.stop ? 'stop' : verdict.caution ? 'caution' : 'pass'
-  return {
-    code,
-    ok: state === 'pass',
-    severity: state === 'caution' && gravest === 'stop' ? 'caution' : gravest,
-    value: Number.isFinite(value) ? value : null,
-    limit: Number.isFinite(limit) ? limit : null,
-    message: words[state],
-  }
-}
+/** One check of a compression spring. */
+export type CompressionCheck = SpringCheck<CompressionModel, CompressionState>

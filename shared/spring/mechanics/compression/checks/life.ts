@@ -1,12 +1,12 @@
-import {
-  FATIGUE_CYCLES, ZIMMERLI_THICKEST_WIRE_MM, goodmanZimmerliFactor, lifeFractionFactor,
-} from '../../fatigue'
+import { FATIGUE_CYCLES, goodmanZimmerliFactor, lifeFractionFactor } from '../../fatigue'
+import { fatigueDataProblem, hasFatigueData, hasLifeFractions, lifeFractionWords } from '../../fatigue-data'
 import { figure } from '../../figure'
 import type { CompressionModel } from '../model'
 import { greatestForceN, leastForceN, statePitchMm, type CompressionState } from '../state'
 import { shearStressMpa } from '../../stress'
 import { stressCorrectionFactor } from '../../stress-factors'
-import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
+import { fallsShort, finishCheck } from '../../checks/check'
+import type { CompressionCheck } from './check'
 
 /** Corrected stress at the greatest working load and at the least (zero where there is one point), MPa. */
 export function greatestCorrectedStressMpa(model: CompressionModel, state: CompressionState): number {
@@ -26,8 +26,9 @@ export function stateFatigueFactor(model: CompressionModel, state: CompressionSt
   return goodmanZimmerliFactor((high - low) / 2, (high + low) / 2, model.tensileStrengthMpa, model.shotPeened)
 }
 
-/** Safety factor by published fractions of tensile strength; null outside their lives. */
+/** Safety factor by published fractions of tensile strength; null for lives and wire they are not published for. */
 export function stateLifeFractionFactor(model: CompressionModel, state: CompressionState): number | null {
+  if (!hasLifeFractions(model)) return null
   const high = greatestCorrectedStressMpa(model, state)
   const low = leastCorrectedStressMpa(model, state)
   return lifeFractionFactor((high - low) / 2, (high + low) / 2, model.tensileStrengthMpa, model.cycles, model.shotPeened)
@@ -40,52 +41,22 @@ export const fatigueCheck: CompressionCheck = {
   applies: (model, state) =>
     model.cycles >= FATIGUE_CYCLES && !Number.isNaN(state.shortestLengthMm) && !Number.isNaN(model.tensileStrengthMpa),
   stops: (model, state) =>
-    model.wireDiameterMm > ZIMMERLI_THICKEST_WIRE_MM || fallsShort(stateFatigueFactor(model, state), 1),
+    !hasFatigueData(model) || fallsShort(stateFatigueFactor(model, state), 1),
   describe: (model, state) => {
     const factor = stateFatigueFactor(model, state)
     const second = stateLifeFractionFactor(model, state)
     const differs = second !== null && (second >= 1) !== (factor >= 1)
-    const tooThick = model.wireDiameterMm > ZIMMERLI_THICKEST_WIRE_MM
     const says = `Fatigue safety factor ${figure(factor)} (Goodman through Zimmerli's data, ${model.shotPeened ? 'shot peened' : 'not peened'}, unlimited life)`
-    const other = second === null ? '' : ` By published fractions of tensile strength at ${figure(model.cycles)} strokes it is ${figure(second)}.`
+    const other = lifeFractionWords(second, model.cycles)
     return finishCheck(
       'fatigue',
       { stop: fatigueCheck.stops(model, state), caution: factor < FATIGUE_CAUTION || differs },
       factor,
       1,
       {
-        stop: tooThick
-          ? `Zimmerli's fatigue data end at ${ZIMMERLI_THICKEST_WIRE_MM} mm wire; a life of ${figure(model.cycles)} strokes cannot be shown for ${model.wireDiameterMm} mm.`
-          : `${says}: under 1, it may break within the life asked for.${other}`,
+        stop: fatigueDataProblem(model) ?? `${says}: under 1, it may break within the life asked for.${other}`,
         caution: `${says}.${other}`,
         pass: `${says}.${other}`,
-      },
-    )
-  },
-}
-
-const TEMPERATURE_CAUTION = 0.8
-
-export const temperatureCheck: CompressionCheck = {
-  code: 'temperature',
-  applies: model => !Number.isNaN(model.temperatureC),
-  stops: model => exceeds(model.temperatureC, model.material.temperatureLimitC.value),
-  describe: (model, state) => {
-    const t = model.temperatureC
-    const limit = model.material.temperatureLimitC.value
-    // Music and hard-drawn wire are not for service below freezing (Shigley, Table 10-3).
-    const cold = t < 0 && model.material.family === 'cold-drawn-carbon'
-    return finishCheck(
-      'temperature',
-      { stop: temperatureCheck.stops(model, state), caution: cold || t > TEMPERATURE_CAUTION * limit },
-      t,
-      limit,
-      {
-        stop: `${figure(t)} °C is above the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}).`,
-        caution: cold
-          ? `Cold-drawn carbon wire is not for service below freezing (Shigley, Table 10-3); ${figure(t)} °C is asked for.`
-          : `${figure(t)} °C is over 80 % of the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}): some force will be lost by relaxation.`,
-        pass: `${figure(t)} °C is within the limit of ${model.material.name}, ${limit} °C (${model.material.temperatureLimitC.source}).`,
       },
     )
   },
@@ -115,29 +86,6 @@ export const peeningCheck: CompressionCheck = {
           : `Not shot peened; peening would not be workable here: it needs ${rule}.`,
       },
       'note',
-    )
-  },
-}
-
-/** Corrosion where the spring lives. */
-export const surroundingsCheck: CompressionCheck = {
-  code: 'surroundings',
-  applies: model => model.context.surroundings !== undefined && model.context.surroundings !== 'dry',
-  stops: () => false,
-  describe: (model) => {
-    const place = model.context.surroundings ?? 'dry'
-    const harsh = place === 'salt' || place === 'chemical'
-    return finishCheck(
-      'surroundings',
-      { stop: false, caution: !model.material.resistsCorrosion || harsh },
-      Number.NaN,
-      Number.NaN,
-      {
-        stop: '',
-        caution: `Surroundings: ${place}. ${model.material.corrosionNote}`,
-        pass: `Surroundings: ${place}. ${model.material.corrosionNote}`,
-      },
-      'caution',
     )
   },
 }

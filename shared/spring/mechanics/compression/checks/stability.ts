@@ -3,7 +3,8 @@ import { figure } from '../../figure'
 import type { CompressionModel } from '../model'
 import { naturalFrequencyHz, SURGE_RATIO } from '../natural-frequency'
 import type { CompressionState } from '../state'
-import { exceeds, finishCheck, type CompressionCheck } from './check'
+import { exceeds, finishCheck } from '../../checks/check'
+import type { CompressionCheck } from './check'
 
 /** Deflection at which it would buckle, mm; Infinity where it cannot. */
 export function stateBucklingDeflectionMm(model: CompressionModel, state: CompressionState): number {

@@ -1,6 +1,7 @@
 import { figure } from '../../figure'
 import { comparedStressMpa, greatestForceN } from '../state'
-import { exceeds, finishCheck, type CompressionCheck } from './check'
+import { exceeds, finishCheck } from '../../checks/check'
+import type { CompressionCheck } from './check'
 
 const SOLID_CAUTION = 0.95
 const WORKING_CAUTION = 0.9

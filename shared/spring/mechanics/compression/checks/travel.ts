@@ -1,6 +1,7 @@
 import { figure } from '../../figure'
 import type { CompressionState } from '../state'
-import { exceeds, fallsShort, finishCheck, type CompressionCheck } from './check'
+import { exceeds, fallsShort, finishCheck } from '../../checks/check'
+import type { CompressionCheck } from './check'
 
 const greatestLengthMm = (state: CompressionState) => (Number.isNaN(state.longestLengthMm) ? state.shortestLengthMm : state.longestLengthMm)
 

@@ -1,0 +1,9 @@
+// Preferred range 231/exp(0.105 C) +/- 6.9 (4 - (C - 3)/6.5) MPa (Shigley, from memory).
+const middleMpa = (springIndex: number) => 231 / Math.exp(0.105 * springIndex)
+const spreadMpa = (springIndex: number) => 6.9 * (4 - (springIndex - 3) / 6.5)
+
+/** Greatest initial stress, uncorrected, that winding gives in a sensible way, MPa. */
+export const greatestInitialStressMpa = (springIndex: number): number => middleMpa(springIndex) + spreadMpa(springIndex)
+
+/** Least initial stress that is wound with ease, MPa. */
+export const leastInitialStressMpa = (springIndex: number): number => middleMpa(springIndex) - spreadMpa(springIndex)
