@@ -6,7 +6,7 @@ const PULL = { firstForce: '20', firstLength: '60', secondForce: '50', secondLen
 const TWIST = { firstMoment: '300', firstAngle: '30', secondMoment: '900', secondAngle: '90', firstLeg: '30', secondLeg: '30', rod: '10' } as const
 const ASKER = { name: 'Orla Fenwick', firm: 'Brackwater Fillers', email: 'orla.pulls@brackwater.example' } as const
 
-test('a spring that pulls is described, drawn, priced and quoted or passed to a person', async ({ page }) => {
+test('a spring that pulls is described, drawn, priced and quoted or passed to a person', async ({ page, watch }) => {
   const form = new OrderForm(page)
   await form.open()
   await form.choose('It pulls')
@@ -20,6 +20,7 @@ test('a spring that pulls is described, drawn, priced and quoted or passed to a 
   await expect(form.drawing).toHaveAccessibleName(/half loops/)
   await look(page, 'order-pulls')
 
+  watch.expect(422, /\/api\/order\/preview/)
   // A wrong length is said beside its field, and nothing that was typed is lost.
   await form.fill({ secondLength: '40' })
   await expect(form.view).toContainText('must be longer than the first')
