@@ -31,6 +31,7 @@ const CHECKS: Readonly<Record<string, CheckWords>> = {
   'free-length': { name: 'Free length', unit: 'length' },
   'temperature': { name: 'Temperature', unit: 'temperature' },
   'resonance': { name: 'Resonance', unit: 'frequency' },
+  'impact': { name: 'Stress of quick strokes', unit: 'stress' },
   'peening': { name: 'Shot peening', unit: 'length' },
   'tangling': { name: 'Tangling in bulk', unit: 'length' },
   'surroundings': { name: 'Surroundings', unit: null },

@@ -1,10 +1,11 @@
 import { passesAll } from '../../checks/check'
-import { surroundingsCheck, temperatureCheck } from '../../checks/place'
+import { surroundingsCheck } from '../../checks/place'
 import { indexCheck, wireRangeCheck } from '../../checks/wire'
 import type { TorsionModel } from '../model'
 import type { TorsionState } from '../state'
 import type { TorsionCheck } from './check'
 import { boreCheck, freeLengthCheck, rodCheck, solidLengthCheck } from './fit'
+import { temperatureCheck } from './place'
 import { fatigueCheck, stressWorkingCheck } from './stress'
 import { coilsCheck, orderCheck, windingCheck } from './travel'
 
