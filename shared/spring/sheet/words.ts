@@ -35,6 +35,7 @@ const CHECKS: Readonly<Record<string, CheckWords>> = {
   'peening': { name: 'Shot peening', unit: 'length' },
   'tangling': { name: 'Tangling in bulk', unit: 'length' },
   'surroundings': { name: 'Surroundings', unit: null },
+  'method': { name: 'Limits and strengths of one set', unit: null },
   'winding': { name: 'Direction of the load', unit: null },
 }
 

@@ -96,7 +96,7 @@ describe('checks', () => {
   })
 
   it('has such a pair for every check that can stop', () => {
-    const neverStop = ['resonance', 'impact', 'peening', 'tangling', 'surroundings']
+    const neverStop = ['resonance', 'impact', 'peening', 'tangling', 'surroundings', 'method']
     expect(Object.keys(EDGES).sort()).toEqual(COMPRESSION_CHECKS.map(c => c.code).filter(c => !neverStop.includes(c)).sort())
   })
 
@@ -193,6 +193,15 @@ describe('checks', () => {
     const thin = { wireDiameterMm: 0.8, meanDiameterMm: 6.4, freeLengthMm: 22, points: [{ lengthMm: 20 }, { lengthMm: 15 }], shotPeened: true } as const
     expect(verdict(makeSpring({ ...thin, duty: { cycles: 1e5 } }), 'peening')).toBe('caution')
     expect(verdict(makeSpring(thin), 'peening')).toBe('note')
+  })
+
+  it('cautions where EN limits are used with inch-system or copper wire, unless its strength is given', () => {
+    const at = (change: Partial<CompressionInput>) => verdict(makeSpring(change), 'method')
+    expect(at({})).toBe('absent')
+    expect(at({ material: 'ASTM-A228' })).toBe('caution')
+    expect(at({ material: 'ASTM-A228', method: 'wahl' })).toBe('absent')
+    expect(at({ material: 'ASTM-A228', materialValues: { tensileStrengthMpa: 1900 } })).toBe('absent')
+    expect(at({ material: 'ASTM-B197', materialValues: { tensileStrengthMpa: 1200 } })).toBe('caution')
   })
 
   it('counts surroundings against plain steel and not against stainless', () => {

@@ -1,6 +1,6 @@
 import { describeAll, passesAll } from '../../checks/check'
 import { surroundingsCheck } from '../../checks/place'
-import { indexCheck, wireRangeCheck } from '../../checks/wire'
+import { indexCheck, methodCheck, wireRangeCheck } from '../../checks/wire'
 import type { Check } from '../../types'
 import type { CompressionModel } from '../model'
 import type { CompressionState } from '../state'
@@ -19,7 +19,7 @@ import { clearanceCheck, orderCheck } from './travel'
 export const COMPRESSION_CHECKS: readonly CompressionCheck[] = [
   wireRangeCheck, indexCheck, coilsCheck, orderCheck, clearanceCheck, stressSolidCheck, stressWorkingCheck, fatigueCheck,
   boreCheck, rodCheck, bucklingCheck, solidLengthCheck, freeLengthCheck, temperatureCheck, resonanceCheck, impactCheck, peeningCheck,
-  tanglingCheck, surroundingsCheck,
+  tanglingCheck, surroundingsCheck, methodCheck,
 ]
 
 /** True where no check of severity stop fails: the constraint of sizing. */

@@ -1,6 +1,6 @@
 import { passesAll } from '../../checks/check'
 import { surroundingsCheck } from '../../checks/place'
-import { indexCheck, wireRangeCheck } from '../../checks/wire'
+import { indexCheck, methodCheck, wireRangeCheck } from '../../checks/wire'
 import type { ExtensionModel } from '../model'
 import type { ExtensionState } from '../state'
 import type { ExtensionCheck } from './check'
@@ -14,7 +14,7 @@ import { initialTensionCheck, orderCheck } from './travel'
 /** All checks of an extension spring, in the order they are shown. */
 export const EXTENSION_CHECKS: readonly ExtensionCheck[] = [
   wireRangeCheck, indexCheck, coilsCheck, orderCheck, initialTensionCheck, stressWorkingCheck, hookBendingCheck, hookTorsionCheck,
-  hookBendCheck, fatigueCheck, boreCheck, rodCheck, freeLengthCheck, solidLengthCheck, temperatureCheck, surroundingsCheck,
+  hookBendCheck, fatigueCheck, boreCheck, rodCheck, freeLengthCheck, solidLengthCheck, temperatureCheck, surroundingsCheck, methodCheck,
 ]
 
 /** True where no check of severity stop fails: the constraint of sizing. */
