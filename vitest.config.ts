@@ -15,7 +15,7 @@ const alias = {
 export default defineConfig({
   test: {
     projects: [
-      { plugins: [compileMailComponents()], resolve: { alias }, test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node' } },
+      { plugins: [compileMailComponents()], resolve: { alias }, test: { name: 'unit', include: ['tests/unit/**/*.test.ts'], environment: 'node', testTimeout: 30_000 } },
       { resolve: { alias }, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], environment: 'node', testTimeout: 120_000 } },
       {
         resolve: { alias },

@@ -20,15 +20,16 @@ const IRREGULAR_SHARE = 0.4
 
 /**
  * Rate of a spring from a known mass that bounces on it, N/mm: k = (2 pi f)^2 (m + ms/3), a third of the spring's own mass
- * moving with it (Rayleigh; common practice, no source). `tapTimesS` are the moments of the same point of each swing, seconds.
+ * moving with it (Rayleigh; common practice, no source). `tapTimesS` are the moments of the same point of each swing, seconds; `periodsS`
+ * the times between them, one fewer.
  * The frequency is the slope of the straight line through taps and their numbers (least squares), so that the error of one tap
  * weighs little; the error of the rate is twice that of the slope.
  */
-export function rateFromOscillation({ tapTimesS, massG, springMassG = 0 }: {
-  readonly tapTimesS: readonly number[]
+export function rateFromOscillation({ massG, springMassG = 0, ...measured }: ({ readonly tapTimesS: readonly number[] } | { readonly periodsS: readonly number[] }) & {
   readonly massG: number
   readonly springMassG?: number | undefined
 }): OscillationResult {
+  const tapTimesS = 'tapTimesS' in measured ? measured.tapTimesS : momentsOf(measured.periodsS)
   const n = tapTimesS.length
   if (n < LEAST_TAPS) return { ok: false, reason: 'too-few-taps' }
   if (!(massG > 0) || !(springMassG >= 0)) return { ok: false, reason: 'no-mass' }
@@ -55,4 +56,11 @@ export function rateFromOscillation({ tapTimesS, massG, springMassG = 0 }: {
     ok: true, rateNPerMm, frequencyHz: 1 / periodS, standardErrorNPerMm: relativeError * rateNPerMm, relativeError, taps: n,
     isIrregular: periods.some(period => Math.abs(period / middle - 1) > IRREGULAR_SHARE),
   }
+}
+
+/** The moments that follow from the times between them, from nought. */
+function momentsOf(periodsS: readonly number[]): number[] {
+  const moments = [0]
+  for (const period of periodsS) moments.push((moments[moments.length - 1] as number) + period)
+  return moments
 }

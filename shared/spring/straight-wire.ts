@@ -25,7 +25,7 @@ export function straightWireRadiusMm({ youngsModulusMpa, rateNPerMm, lengthMm }:
   return Math.sqrt((rateNPerMm * lengthMm) / (Math.PI * youngsModulusMpa))
 }
 
-/** Twist of one coil of a helical spring under a load, turns: 8 F D^2/(G d^4), by which each active coil turns about its own wire. */
+/** Twist of one coil of a helical spring under a load, turns: 8 F D^2/(pi G d^4), by which each active coil turns about its own wire. */
 export function twistOfOneCoilTurns({ forceN, meanDiameterMm, shearModulusMpa, wireDiameterMm }: {
   readonly forceN: number
   readonly meanDiameterMm: number

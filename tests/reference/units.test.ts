@@ -2,6 +2,7 @@ import { spawnSync } from 'node:child_process'
 import { describe, expect, it } from 'vitest'
 import { DISPLAY_UNITS, fromSi, toSi, type Quantity } from '#shared/units/convert'
 import { parseQuantity } from '#shared/units/parse'
+import { writeSheetValue } from '#shared/spring/sheet'
 
 /*
  * Every unit that can be typed and every unit that is shown, against GNU units (Debian package `units`). It fails, and does not
@@ -46,6 +47,11 @@ describe('units against GNU units', () => {
     const factor = gnuUnits(INSIDE[quantity], SHOWN[symbol] ?? symbol)
     expect(fromSi(12.5, quantity, system) / (12.5 * factor)).toBeCloseTo(1, 12)
     expect(toSi(fromSi(12.5, quantity, system), quantity, system)).toBeCloseTo(12.5, 12)
+  })
+
+  it.each([['density', 7850, 'kg/m^3', 'lb/inch^3', 3], ['speed', 2.5, 'm/s', 'ft/s', 2]] as const)('the data sheet writes a %s in inch units as GNU units would', (quantity, value, inside, shown, decimals) => {
+    const written = Number.parseFloat(writeSheetValue(value, quantity, 'inch'))
+    expect(written).toBeCloseTo(value * gnuUnits(inside, shown), decimals)
   })
 
   it.each([-40, 0, 20, 37.5, 250])('%d degrees Celsius is the Fahrenheit and the kelvin of GNU units', (celsius) => {

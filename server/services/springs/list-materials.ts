@@ -1,5 +1,5 @@
 import type { MaterialsResponse } from '#shared/schemas/spring'
-import { listMaterials } from '#shared/spring/materials'
+import { listMaterials, standardDiametersMm } from '#shared/spring/materials'
 import type { Material, SteppedModulus, SourcedValue } from '#shared/spring/materials'
 import { listCatalogueWires } from '../catalogue/list-wires'
 import type { ServiceContext } from '../context'
@@ -15,8 +15,10 @@ function describe(material: Material, catalogueDiametersMm: number[]): Materials
     code: material.code, name: material.name, standard: material.standard, family: material.family,
     wireDiameterFromMm: material.strength.rangeMm.min, wireDiameterToMm: material.strength.rangeMm.max,
     youngsModulusMpa: modulus(material.youngsModulus), shearModulusMpa: modulus(material.shearModulus), densityKgPerM3: { ...material.densityKgPerM3 },
-    temperatureLimitC: { ...material.temperatureLimitC }, stressReliefTempC: material.stressRelief.temperatureC, stressReliefMinutes: material.stressRelief.minutes,
-    resistsCorrosion: material.resistsCorrosion, corrosionNote: material.corrosionNote, strengthSource: material.strength.source, catalogueDiametersMm,
+    temperatureLimitC: { ...material.temperatureLimitC }, modulusLossPerKelvin: { ...material.modulusLossPerKelvin }, stressReliefTempC: material.stressRelief.temperatureC, stressReliefMinutes: material.stressRelief.minutes,
+    stressReliefOrigin: material.stressRelief.origin, stressReliefSource: material.stressRelief.source,
+    resistsCorrosion: material.resistsCorrosion, corrosionNote: material.corrosionNote, strengthSource: material.strength.source, strengthOrigin: material.strength.origin,
+    standardWires: standardDiametersMm(material.code).map(d => ({ wireDiameterMm: d, tensileStrengthMpa: material.strength.minimumMpa(d) })), catalogueDiametersMm,
   }
 }
 

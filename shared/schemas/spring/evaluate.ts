@@ -173,6 +173,7 @@ export const EvaluateResponseSchema = z.discriminatedUnion('kind', [
     outerDiameterAtSolidMm: number,
     pitchMm: number,
     naturalFrequencyHz: number,
+    impact: z.object({ speedMPerS: number, stressMpa: number }).nullable(),
     buckling: z.object({ slenderness: number, criticalDeflectionMm: number.nullable(), ok: z.boolean() }),
     rateAtTemperatureNPerMm: number.nullable(),
   }),

@@ -1,10 +1,11 @@
 import { z } from 'zod'
 import { MaterialCodeSchema } from './common'
 
-const sourced = z.object({ value: z.number(), origin: z.enum(['published', 'from memory', 'computed']), source: z.string() })
+const origin = z.enum(['published', 'from memory', 'computed'])
+const sourced = z.object({ value: z.number(), origin, source: z.string() })
 const modulus = z.union([
   sourced,
-  z.object({ steps: z.array(z.object({ upToMm: z.number().nullable(), valueMpa: z.number() })), origin: z.enum(['published', 'from memory', 'computed']), source: z.string() }),
+  z.object({ steps: z.array(z.object({ upToMm: z.number().nullable(), valueMpa: z.number() })), origin, source: z.string() }),
 ])
 
 /** A wire material with the values that calculations use and where each comes from. `upToMm: null` is any thicker wire. */
@@ -19,11 +20,18 @@ export const MaterialSchema = z.object({
   shearModulusMpa: modulus,
   densityKgPerM3: sourced,
   temperatureLimitC: sourced,
+  /** Loss of both moduli for each kelvin over 20 °C, as a share. */
+  modulusLossPerKelvin: sourced,
   stressReliefTempC: z.number(),
   stressReliefMinutes: z.number(),
+  stressReliefOrigin: origin,
+  stressReliefSource: z.string(),
   resistsCorrosion: z.boolean(),
   corrosionNote: z.string(),
   strengthSource: z.string(),
+  strengthOrigin: origin,
+  /** Diameters the wire is usually sold in, each with its least tensile strength. */
+  standardWires: z.array(z.object({ wireDiameterMm: z.number(), tensileStrengthMpa: z.number() })),
   /** Diameters that can be bought now. */
   catalogueDiametersMm: z.array(z.number()),
 })

@@ -76,19 +76,55 @@ export function dimensionUpright({ y1Px, y2Px, xPx, label, partPx }: UprightDime
   return shapes
 }
 
+interface AlongDimension {
+  readonly fromPx: readonly [x: number, y: number]
+  readonly toPx: readonly [x: number, y: number]
+  /** Unit vector at right angles to the line, away from the part. */
+  readonly outward: readonly [x: number, y: number]
+  /** From the line to the part's edge, and to the dimension line. */
+  readonly partPx: number
+  readonly offPx: number
+  readonly label: string
+  /** Lettering is kept between these. */
+  readonly betweenPx: readonly [left: number, right: number]
+}
+
+/** A dimension along a slanting line, its lettering level beside the middle; arrows turn outward in a gap under 26 px. */
+export function dimensionAlong({ fromPx: [x1, y1], toPx: [x2, y2], outward: [ox, oy], partPx, offPx, label, betweenPx: [left, right] }: AlongDimension): Shape[] {
+  const gap = Math.hypot(x2 - x1, y2 - y1) || 1
+  const [dx, dy] = [(x2 - x1) / gap, (y2 - y1) / gap]
+  const at = (x: number, y: number, off: number, along = 0) => `${px(x + ox * off + dx * along)} ${px(y + oy * off + dy * along)}`
+  const isTight = gap < TIGHT_GAP_PX
+  const tail = isTight ? TAIL_PX : 0
+  const ends = [[x1, y1], [x2, y2]] as const
+  const widthPx = textWidthPx(label)
+  const anchor = ox > 0.35 ? 'start' : ox < -0.35 ? 'end' : 'middle'
+  const before = anchor === 'start' ? 0 : anchor === 'end' ? widthPx : widthPx / 2
+  const [middleX, middleY] = [(x1 + x2) / 2 + ox * (offPx + 7), (y1 + y2) / 2 + oy * (offPx + 7)]
+  return [
+    path('dim-line', ends.map(([x, y]) => `M${at(x, y, partPx + OFF_PART_PX)}L${at(x, y, offPx + PAST_ARROW_PX)}`).join('')),
+    path('dim-line', `M${at(x1, y1, offPx, -tail)}L${at(x2, y2, offPx, tail)}`),
+    arrow(x1 + ox * offPx, y1 + oy * offPx, isTight ? dx : -dx, isTight ? dy : -dy), arrow(x2 + ox * offPx, y2 + oy * offPx, isTight ? -dx : dx, isTight ? -dy : dy),
+    text('dim-text halo', Math.min(right - widthPx + before, Math.max(left + before, middleX)), middleY + 5 + 5 * oy, anchor, label),
+  ]
+}
+
 interface Leader {
   readonly fromPx: readonly [x: number, y: number]
   readonly elbowPx: readonly [x: number, y: number]
   readonly label: string | readonly TextRun[]
+  /** True where the lettering stands to the left of the elbow. */
+  readonly isLeft?: boolean
 }
 
-/** A leader from a place on the part to an elbow, and lettering to the right of it. */
-export function leader({ fromPx: [xPx, yPx], elbowPx: [elbowX, elbowY], label }: Leader): Shape[] {
-  const length = Math.hypot(xPx - elbowX, yPx - elbowY)
+/** A leader from a place on the part to an elbow, and lettering beside it, to the right unless told otherwise. */
+export function leader({ fromPx: [xPx, yPx], elbowPx: [elbowX, elbowY], label, isLeft = false }: Leader): Shape[] {
+  const length = Math.hypot(xPx - elbowX, yPx - elbowY) || 1
+  const side = isLeft ? -1 : 1
   return [
-    path('dim-line', `M${px(xPx)} ${px(yPx)}L${px(elbowX)} ${px(elbowY)}H${px(elbowX + 12)}`),
+    path('dim-line', `M${px(xPx)} ${px(yPx)}L${px(elbowX)} ${px(elbowY)}H${px(elbowX + side * 12)}`),
     arrow(xPx, yPx, (xPx - elbowX) / length, (yPx - elbowY) / length),
-    text('dim-text', elbowX + 16, elbowY + 4.5, 'start', label),
+    text('dim-text', elbowX + side * 16, elbowY + 4.5, isLeft ? 'end' : 'start', label),
   ]
 }
 

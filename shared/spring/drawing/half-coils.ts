@@ -17,7 +17,7 @@ export interface HalfCoils {
   readonly crowns: string
 }
 
-interface HelixPart {
+export interface HelixPart {
   readonly centre: CentreLine
   readonly meanDiameterMm: number
   readonly fromTurn: number

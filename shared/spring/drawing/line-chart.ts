@@ -1,7 +1,8 @@
 import { hatchBox } from './hatch'
 import { niceStep, stepDecimals, ticksTo } from './scale'
 import { formatNumber } from '../../units/format'
-import { lineH, lineV, path, px, symbol, text, textWidthPx, type Shape } from './shapes'
+import { bestPlace, boxesMeet, labelBox, lineMeetsBox, type LabelPlace } from './label-place'
+import { lineH, lineV, path, px, symbol, text, textWidthPx, type Box, type PathShape, type Shape } from './shapes'
 
 /** A point that is asked for, in the units shown; the tolerance is plus or minus. */
 export interface ChartPoint {
@@ -67,20 +68,42 @@ function axes(charted: LineCharted, frame: LineFrame): Shape[] {
   return shapes
 }
 
+/** Where the words of the zone stand, up the page. */
+function zoneWords(fromPx: number, words: string, frame: LineFrame): { readonly xPx: number, readonly yPx: number, readonly box: Box } {
+  const lengthPx = textWidthPx(words)
+  // Low, where the line has risen past
+  const [xPx, yPx] = [fromPx + (lineX(frame, frame.mostX) - fromPx) / 2 + 4.5, frame.topPx + frame.heightPx - lengthPx / 2 - 4]
+  return { xPx, yPx, box: { xPx: xPx - 12, yPx: yPx - lengthPx / 2, widthPx: 16, heightPx: lengthPx } }
+}
+
 function limitZone({ limitX, limitWords }: LineCharted, frame: LineFrame): Shape[] {
   if (limitX === null || limitX >= frame.mostX) return []
   const fromPx = lineX(frame, limitX)
   const widthPx = lineX(frame, frame.mostX) - fromPx
   const shapes: Shape[] = [hatchBox({ xPx: fromPx, yPx: frame.topPx, widthPx, heightPx: frame.heightPx }), lineV('solid-edge', fromPx, frame.topPx, frame.topPx + frame.heightPx)]
-  if (widthPx > 20) shapes.push(text('tick halo', fromPx + widthPx / 2 + 4.5, frame.topPx + frame.heightPx / 2, 'middle', limitWords, true))
+  const { xPx, yPx } = zoneWords(fromPx, limitWords, frame)
+  if (widthPx > 20) shapes.push(text('tick halo', xPx, yPx, 'middle', limitWords, true))
   return shapes
 }
 
-function workingPoints({ points, letter }: LineCharted, frame: LineFrame): Shape[] {
+/** A working point: its tolerance as a bar, its circle, and its name where it lies on nothing else. */
+function workingPoints({ points, letter, from, to, limitX, limitWords }: LineCharted, frame: LineFrame): Shape[] {
   const shapes: Shape[] = []
-  points.forEach(({ x, y, tolerance, label }, i) => {
-    const xPx = lineX(frame, x)
-    const yPx = lineY(frame, y)
+  const shown = points.map((point, i) => ({ ...point, i, xPx: lineX(frame, point.x), yPx: lineY(frame, point.y) })).filter(({ x }) => x >= from.x - 1e-9 && x <= frame.mostX)
+  const taken: Box[] = shown.map(({ xPx, yPx, y, tolerance }) => {
+    const halfPx = Math.max(8, yPx - lineY(frame, y + (tolerance ?? 0)))
+    return { xPx: xPx - 8, yPx: yPx - halfPx, widthPx: 16, heightPx: 2 * halfPx }
+  })
+  if (limitX !== null && limitX < frame.mostX) taken.push(zoneWords(lineX(frame, limitX), limitWords, frame).box)
+  const [bottomPx, endPx] = [frame.topPx + frame.heightPx, lineX(frame, frame.mostX)]
+  const against = (box: Box): number => {
+    const isBeside = box.xPx < frame.x0Px + 2 || box.xPx + box.widthPx > endPx + 14
+    const isOff = box.yPx < frame.topPx - 4 || box.yPx + box.heightPx > bottomPx - 1
+    const isOnLine = lineMeetsBox(lineX(frame, from.x), lineY(frame, from.y), lineX(frame, to.x), lineY(frame, to.y), box)
+    const isInZone = limitX !== null && box.xPx + box.widthPx > lineX(frame, limitX)
+    return (isBeside ? 20 : 0) + (isOff ? 8 : 0) + 6 * taken.filter(other => boxesMeet(box, other)).length + (isOnLine ? 3 : 0) + (isInZone ? 1 : 0)
+  }
+  for (const { y, tolerance, label, i, xPx, yPx } of shown) {
     if (tolerance) {
       const upperPx = lineY(frame, y + tolerance)
       const lowerPx = lineY(frame, Math.max(0, y - tolerance))
@@ -88,10 +111,14 @@ function workingPoints({ points, letter }: LineCharted, frame: LineFrame): Shape
     }
     shapes.push({ kind: 'circle', look: 'wanted', xPx, yPx, radiusPx: 5 })
     const lettering = symbol(letter, String(i + 1), label)
-    // The line rises to the right: above left is free, and below right where there is no room.
-    if (xPx - 12 - textWidthPx(lettering) > frame.x0Px + 2) shapes.push(text('dim-text halo', xPx - 11, yPx - 8, 'end', lettering))
-    else shapes.push(text('dim-text halo', xPx + 12, yPx + 17, 'start', lettering))
-  })
+    const widthPx = textWidthPx(lettering)
+    // The line rises to the right: above left and below right are free of it
+    const left = (dy: number): LabelPlace => ({ xPx: xPx - 11, yPx: yPx + dy, anchor: 'end' })
+    const right = (dy: number): LabelPlace => ({ xPx: xPx + 12, yPx: yPx + dy, anchor: 'start' })
+    const place = bestPlace([left(-8), right(17), left(-24), right(32), left(5), right(13), right(-30), right(-48)], widthPx, against)
+    taken.push(labelBox(place, widthPx))
+    shapes.push(text('dim-text halo', place.xPx, place.yPx, place.anchor, lettering))
+  }
   return shapes
 }
 
@@ -105,13 +132,20 @@ export function lineChartShapes(charted: LineCharted, frame: LineFrame): Shape[]
   ]
 }
 
-/** The point that moves, with its plumb lines. */
-export function movingPointShapes(frame: LineFrame, x: number, y: number, plumbFromPx: number | null): Shape[] {
+/** The plumb lines of the point that moves; they lie under the lettering. */
+export function plumbShapes(frame: LineFrame, x: number, y: number, plumbFromPx: number | null): Shape[] {
   const xPx = lineX(frame, x)
   const yPx = lineY(frame, y)
   return [
-    ...(plumbFromPx === null ? [lineV('plumb', xPx, yPx, frame.topPx + frame.heightPx)] : [lineV('plumb', xPx, plumbFromPx, yPx)]),
+    plumbFromPx === null ? lineV('plumb', xPx, yPx, frame.topPx + frame.heightPx) : lineV('plumb', xPx, plumbFromPx, yPx),
     lineH('plumb', frame.x0Px, xPx, yPx),
-    path('now', `M${px(xPx - 7)} ${px(yPx)}L${px(xPx)} ${px(yPx - 7)}L${px(xPx + 7)} ${px(yPx)}L${px(xPx)} ${px(yPx + 7)}Z`),
   ]
 }
+
+/** The mark of the point that moves. */
+export function nowShape(xPx: number, yPx: number): PathShape {
+  return path('now', `M${px(xPx - 7)} ${px(yPx)}L${px(xPx)} ${px(yPx - 7)}L${px(xPx + 7)} ${px(yPx)}L${px(xPx)} ${px(yPx + 7)}Z`)
+}
+
+/** Room on the page that the zone over the limit takes at least, so that its words can be read. */
+export const ZONE_PX = 28

@@ -16,7 +16,8 @@ export const GRAPHITE = '#474E58'
 export const STEEL = '#1D4A76'
 export const SHEET = '#FDFDFB'
 
-const PENS: Readonly<Record<string, Pen>> = {
+/** Pens by look, the one table for files and paper; the style sheet says the same for pages. */
+export const PENS: Readonly<Record<string, Pen>> = {
   'w-edge near': { stroke: INK },
   'w-edge far': { stroke: '#7C848B' },
   'w-body near': { stroke: '#F8F9F9' },
@@ -31,6 +32,7 @@ const PENS: Readonly<Record<string, Pen>> = {
   'axis': { stroke: STEEL, widthPx: 0.9, dashPx: [16, 3.5, 2.5, 3.5] },
   'hatch': { stroke: GRAPHITE, widthPx: 0.9, opacity: 0.55 },
   'plate': { stroke: INK, widthPx: 2.4 },
+  'pin': { fill: INK },
   'ghost': { stroke: GRAPHITE, widthPx: 0.9, dashPx: [5, 4] },
   'plumb': { stroke: STEEL, widthPx: 1, dashPx: [2, 3] },
   'gridline': { stroke: '#C9CDC8', widthPx: 0.8 },

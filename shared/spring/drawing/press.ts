@@ -6,7 +6,8 @@ import { centreLine, drawnSolidLengthMm, type DrawnSpring } from './drawn-spring
 import type { Placement } from './half-coils'
 import { fixedPlate } from './hatch'
 import { chartX, chartY, forceAtN, forceTicks, loadChartShapes, type ChartFrame, type LoadCharted, type LoadPoint } from './load-chart'
-import { lineH, lineV, path, px, symbol, textWidthPx, type Shape } from './shapes'
+import { nowShape } from './line-chart'
+import { lineH, lineV, symbol, textWidthPx, type Shape } from './shapes'
 
 /** A spring that can be pressed on the page, with what its chart shows. */
 export interface PressedSpring {
@@ -121,7 +122,7 @@ function lengthChainShapes(charted: LoadCharted, frame: ChartFrame, fromPx: numb
 export const clampLength = ({ solidLengthMm, freeLengthMm }: Pick<LoadCharted, 'solidLengthMm' | 'freeLengthMm'>, lengthMm: number): number =>
   Math.min(freeLengthMm, Math.max(solidLengthMm, lengthMm))
 
-/** What moves with the plate, at `lengthMm`: the spring below the still parts, the plumb line and the point above them. */
+/** What moves with the plate, at `lengthMm`: spring and plumb lines below the still parts, the point above them. */
 export function pressMoving(layout: PressLayout, lengthMm: number): { under: Shape[], over: Shape[] } {
   const { spring, place, frame, charted } = layout
   const { axisYPx, x0Px, pxPerMm } = place
@@ -136,13 +137,10 @@ export function pressMoving(layout: PressLayout, lengthMm: number): { under: Sha
     lineV('plate', xPx + 1, topPx - 10, bottomPx + 10),
   ]
   if (spring.freeLengthMm - lengthMm > spring.freeLengthMm * 1e-3) under.push(lineV('ghost', chartX(place, spring.freeLengthMm), topPx - 6, bottomPx + 6))
+  // Plumb lines lie under the chart's lettering
+  under.push(lineV('plumb', xPx + 1, bottomPx + 12, yPx), lineH('plumb', x0Px, xPx, yPx))
   if (layout.hasAllDimensions) under.push(...furtherDimensions(layout, lengthMm))
-  const over: Shape[] = [
-    lineV('plumb', xPx + 1, bottomPx + 12, yPx),
-    lineH('plumb', x0Px, xPx, yPx),
-    path('now', `M${px(xPx - 7)} ${px(yPx)}L${px(xPx)} ${px(yPx - 7)}L${px(xPx + 7)} ${px(yPx)}L${px(xPx)} ${px(yPx + 7)}Z`),
-  ]
-  return { under, over }
+  return { under, over: [nowShape(xPx, yPx)] }
 }
 
 function furtherDimensions({ spring, place, frame: { units } }: PressLayout, lengthMm: number): Shape[] {

@@ -1,32 +1,20 @@
 import { fromSi, toSi, unitSymbol } from '../../units/convert'
-import { formatForce, formatLength, formatNumber, formatShare, formatWireDiameter, THIN_SPACE } from '../../units/format'
-import type { HookForm } from '../codes'
+import { formatForce, formatLength, formatNumber, formatShare, THIN_SPACE } from '../../units/format'
 import { axisAcross, dimensionAcross, dimensionUpright } from './dimensions'
 import { extensionShapes } from './extension'
 import type { Placement } from './half-coils'
-import { lineChartShapes, movingPointShapes, uprightTicks, type LineCharted, type LineFrame } from './line-chart'
-import { drawnExtension, isDrawableExtension, type DrawnExtension, type MovedExtension } from './moved'
+import { lineChartShapes, lineX, lineY, nowShape, plumbShapes, uprightTicks, ZONE_PX, type LineCharted, type LineFrame } from './line-chart'
+import { drawnExtension, isDrawableExtension, type MovedExtension } from './moved'
 import type { Motion, MotionOptions, Reading } from './motion'
 import { diameterSign, lengthLabel } from './press'
-import { lineV, textWidthPx, type Shape } from './shapes'
+import { textWidthPx, type CircleShape, type Shape } from './shapes'
 import { sliderStops } from './stops'
+import { extensionSentence } from './words'
 
 const WIDE_PX = 430
 const LEAST_WIDTH_PX = 280
 const TALLEST_PX = 200
 const THUMB_PX = 28
-
-export const HOOK_WORDS: Readonly<Record<HookForm, string>> = {
-  'full-loop': 'full loops', 'half-loop': 'half loops', 'crossover-loop': 'crossed loops', 'extended-hook': 'extended hooks',
-}
-
-const coils = (count: number): string => formatNumber(count, 2).replace(/\.?0+$/, '')
-
-/** One sentence that names the drawing of an extension spring for those who do not see it. */
-export function extensionSentence(spring: DrawnExtension, lengthMm: number, units: MotionOptions['units']): string {
-  const { wireDiameterMm: d, meanDiameterMm: D } = spring
-  return `Extension spring in side view, ${formatLength(lengthMm, units)} long inside its ${HOOK_WORDS[spring.hookForm]}, outside diameter ${formatLength(D + d, units)}, wire ${formatWireDiameter(d, units)}, ${coils(spring.bodyCoils)} coils in the body, ${spring.hand}-hand.`
-}
 
 /** The length it may be pulled to as it is drawn: past the limit or, where none is known, the last point. */
 function drawnReachMm({ insideHooksFreeLengthMm: L0, greatestLengthMm, points }: MovedExtension['evaluation']): number {
@@ -59,22 +47,27 @@ export function layoutPulling(design: MovedExtension, options: MotionOptions): M
   const leftPx = Math.max(isWide ? 78 : 56, textWidthPx(formatNumber(ticks.yTicks.at(-1) ?? 0, ticks.yDecimals)) + 14)
   const rightPx = isWide ? 40 : 22
   const outerMm = drawn.meanDiameterMm + drawn.wireDiameterMm
-  const shownMm = reachMm * 1.06
-  const pxPerMm = Math.min((widthPx - leftPx - rightPx) / (shownMm + drawn.wireDiameterMm), Math.max(TALLEST_PX / outerMm, 140 / shownMm))
+  const roomPx = widthPx - leftPx - rightPx
+  // The axis goes on past the reach by the zone over the limit, or by the wire of the right hook
+  const pxPerMm = Math.min((roomPx - ZONE_PX) / reachMm, roomPx / (reachMm + drawn.wireDiameterMm), Math.max(TALLEST_PX / outerMm, 140 / reachMm))
+  const shownMm = reachMm + ZONE_PX / pxPerMm
   const outerPx = outerMm * pxPerMm
   const place: Placement = { pxPerMm, x0Px: leftPx, axisYPx: 48 + outerPx / 2 }
   const bottomPx = place.axisYPx + outerPx / 2
+  const diameter = diameterSign + formatLength(outerMm, units, { unit: false })
   const frame: LineFrame = {
-    x0Px: place.x0Px, pxPerX: pxPerMm * toSi(1, 'length', units), topPx: bottomPx + 62, heightPx: options.chartHeightPx ?? (isWide ? 190 : 160), mostX: length(shownMm), ...ticks,
+    x0Px: place.x0Px, pxPerX: pxPerMm * toSi(1, 'length', units), topPx: Math.max(bottomPx + 62, place.axisYPx + textWidthPx(diameter) / 2 + 52), heightPx: options.chartHeightPx ?? (isWide ? 190 : 160), mostX: length(shownMm), ...ticks,
     titleXPx: 2,
   }
   const bodyFromPx = place.x0Px + pxPerMm * drawn.hookLengthMm
   const still: Shape[] = [
-    lineV('plate', place.x0Px, place.axisYPx - outerPx / 2 - 10, place.axisYPx + outerPx / 2 + 10),
-    ...dimensionUpright({ y1Px: place.axisYPx - outerPx / 2, y2Px: bottomPx, xPx: place.x0Px - (isWide ? 40 : 30), partPx: [bodyFromPx, bodyFromPx], label: diameterSign + formatLength(outerMm, units, { unit: false }) }),
+    ...dimensionUpright({ y1Px: place.axisYPx - outerPx / 2, y2Px: bottomPx, xPx: place.x0Px - (isWide ? 40 : 30), partPx: [bodyFromPx, bodyFromPx], label: diameter }),
     ...dimensionAcross({ x1Px: place.x0Px, x2Px: place.x0Px + pxPerMm * L0, yPx: 24, partPx: [place.axisYPx - outerPx / 2, place.axisYPx - outerPx / 2], label: lengthLabel('0', L0, units) }),
     ...lineChartShapes(charted, frame),
   ]
+  // The pins that hold the hooks: they touch the insides, from which lengths are measured
+  const pinPx = Math.min(7, Math.max(1.5, 0.3 * drawn.hookLengthMm * pxPerMm), 0.35 * (drawn.meanDiameterMm - drawn.wireDiameterMm) * pxPerMm)
+  const pin = (xPx: number, side: 1 | -1): CircleShape => ({ kind: 'circle', look: 'pin', xPx: xPx + side * pinPx, yPx: place.axisYPx, radiusPx: pinPx })
   const reading = (at: number): Reading => {
     const share = greatestForceN === null ? null : forceAt(at) / greatestForceN
     const isFree = at <= L0 * 1.0005
@@ -92,9 +85,10 @@ export function layoutPulling(design: MovedExtension, options: MotionOptions): M
       under: [
         axisAcross(place.x0Px - 18, place.x0Px + pxPerMm * at + 22, place.axisYPx),
         ...extensionShapes(drawn, at, place),
-        lineV('plate', place.x0Px + pxPerMm * at, place.axisYPx - outerPx / 2 - 10, place.axisYPx + outerPx / 2 + 10),
+        pin(place.x0Px, 1), pin(place.x0Px + pxPerMm * at, -1),
+        ...plumbShapes(frame, length(at), force(forceAt(at)), bottomPx + 6),
       ],
-      over: movingPointShapes(frame, length(at), force(forceAt(at)), bottomPx + 12),
+      over: [nowShape(lineX(frame, length(at)), lineY(frame, force(forceAt(at))))],
     }),
     low: L0,
     high: reachMm,

@@ -1,10 +1,8 @@
-import { turnedMeanDiameterMm } from '../mechanics/torsion/bending'
 import { halfCoils, type Placement } from './half-coils'
+import { fixedLegMm, loadedLegMm, meanDiameterAtMm, type LegLine } from './legs'
 import type { DrawnTorsion } from './moved'
 import { path, px, type Shape } from './shapes'
 import { crownShapes, edgePx, wireShapes } from './wire'
-
-const RAD = Math.PI / 180
 
 /** Where a torsion spring stands in end view: its axis, and the scale. */
 export interface EndPlacement {
@@ -13,75 +11,87 @@ export interface EndPlacement {
   readonly yPx: number
 }
 
-/** Mean diameter of the body at an angle from free, mm. */
-export function meanDiameterAtMm({ meanDiameterMm, bodyCoils, bodyShare, loadOpens }: DrawnTorsion, angleDeg: number): number {
-  const turns = (angleDeg / 360) * bodyShare
-  return turnedMeanDiameterMm(meanDiameterMm, bodyCoils, loadOpens ? -Math.min(turns, bodyCoils / 2) : turns)
-}
-
-/**
- * Direction in which the loaded leg leaves the ring, degrees, turned from the first leg's place: the wire runs along the ring from
- * the bottom to the right and up, Nb turns and as much more as it is wound up. Left-hand springs are the mirror image.
- */
-export function legTurnDeg({ bodyCoils, loadOpens }: DrawnTorsion, angleDeg: number): number {
-  return 360 * bodyCoils + (loadOpens ? -angleDeg : angleDeg)
-}
-
-interface LegLine {
-  readonly fromX: number
-  readonly fromY: number
-  readonly toX: number
-  readonly toY: number
-}
-
-/** The loaded leg in end view, or where it would point if it were bent out: from the ring along the tangent, mm about the axis. */
-export function loadedLegMm(spring: DrawnTorsion, angleDeg: number, lengthMm: number): LegLine {
-  const radius = meanDiameterAtMm(spring, angleDeg) / 2
-  const beta = (90 - legTurnDeg(spring, angleDeg)) * RAD
-  const mirror = spring.hand === 'left' ? -1 : 1
-  const x = radius * Math.cos(beta)
-  const y = radius * Math.sin(beta)
-  return { fromX: mirror * x, fromY: y, toX: mirror * (x + lengthMm * Math.sin(beta)), toY: y - lengthMm * Math.cos(beta) }
-}
-
-/** A torsion spring seen from its end, turned by an angle from free: the ring, the fixed leg, the loaded leg. */
-export function torsionEndShapes(spring: DrawnTorsion, angleDeg: number, place: EndPlacement): Shape[] {
-  const { pxPerMm, xPx, yPx } = place
-  const wirePx = spring.wireDiameterMm * pxPerMm
-  const radiusPx = (meanDiameterAtMm(spring, angleDeg) / 2) * pxPerMm
-  const mirror = spring.hand === 'left' ? -1 : 1
-  const [first, second] = spring.legs
-  const ring = `M${px(xPx + radiusPx)} ${px(yPx)}A${px(radiusPx)} ${px(radiusPx)} 0 1 0 ${px(xPx - radiusPx)} ${px(yPx)}A${px(radiusPx)} ${px(radiusPx)} 0 1 0 ${px(xPx + radiusPx)} ${px(yPx)}`
-  let legs = ''
-  let balls = ''
-  let joints = ''
-  const add = (line: LegLine, isAlongAxis: boolean) => {
-    const at = (x: number, y: number) => `${px(xPx + x * pxPerMm)} ${px(yPx + y * pxPerMm)}`
-    if (isAlongAxis) {
-      balls += `M${at(line.fromX, line.fromY)}h0`
-      return
-    }
-    legs += `M${at(line.fromX, line.fromY)}L${at(line.toX, line.toY)}`
-    const share = Math.min(1, (1.2 * spring.wireDiameterMm) / Math.max(1e-9, Math.hypot(line.toX - line.fromX, line.toY - line.fromY)))
-    joints += `M${at(line.fromX, line.fromY)}L${at(line.fromX + share * (line.toX - line.fromX), line.fromY + share * (line.toY - line.fromY))}`
-  }
-  if (first) {
-    const radius = meanDiameterAtMm(spring, angleDeg) / 2
-    add({ fromX: 0, fromY: radius, toX: -mirror * first.lengthMm, toY: radius }, first.form === 'straight')
-  }
-  if (second) add(loadedLegMm(spring, angleDeg, second.lengthMm), second.form === 'straight')
+/** A straight piece of wire with its end cut across. */
+function cutWire(x1: number, y1: number, x2: number, y2: number, wirePx: number, near: boolean): Shape[] {
+  const length = Math.hypot(x2 - x1, y2 - y1)
+  if (!(length > 0)) return []
+  const [acrossX, acrossY] = [(-(y2 - y1) / length) * (wirePx / 2), ((x2 - x1) / length) * (wirePx / 2)]
   return [
-    ...wireShapes(legs, wirePx, true),
-    ...wireShapes(ring, wirePx, true),
-    // The body goes over the joints, so that leg and ring read as one wire.
-    ...(joints ? [path('w-body near', joints, Math.max(0.6, wirePx - edgePx(wirePx)))] : []),
-    ...wireShapes(balls, wirePx, true, true),
+    ...wireShapes(`M${px(x1)} ${px(y1)}L${px(x2)} ${px(y2)}`, wirePx, near),
+    path('w-cut', `M${px(x2 + acrossX)} ${px(y2 + acrossY)}L${px(x2 - acrossX)} ${px(y2 - acrossY)}`),
   ]
 }
 
-/** A torsion spring in side view, unloaded: the closed body, its left face at the place's x0. */
-export function torsionSideShapes({ wireDiameterMm: d, meanDiameterMm, bodyCoils, hand }: DrawnTorsion, place: Placement): Shape[] {
-  const strands = halfCoils({ centre: turns => d / 2 + d * turns, meanDiameterMm, fromTurn: 0, toTurn: bodyCoils, hand }, place)
-  const wirePx = d * place.pxPerMm
-  return [...wireShapes(strands.far, wirePx, false), ...wireShapes(strands.near, wirePx, true), ...crownShapes(strands.crowns, wirePx, true)]
+/**
+ * A torsion spring seen from its end, turned by an angle from free: the fixed leg behind the ring, the loaded leg in front of it.
+ * A leg along the axis is seen end-on; the fixed one lies hidden.
+ */
+export function torsionEndShapes(spring: DrawnTorsion, angleDeg: number, { pxPerMm, xPx, yPx }: EndPlacement): Shape[] {
+  const wirePx = spring.wireDiameterMm * pxPerMm
+  const radiusPx = (meanDiameterAtMm(spring, angleDeg) / 2) * pxPerMm
+  const [first, second] = spring.legs
+  const leg = ({ fromX, fromY, toX, toY }: LegLine, near: boolean) =>
+    cutWire(xPx + fromX * pxPerMm, yPx + fromY * pxPerMm, xPx + toX * pxPerMm, yPx + toY * pxPerMm, wirePx, near)
+  const ring = `M${px(xPx + radiusPx)} ${px(yPx)}A${px(radiusPx)} ${px(radiusPx)} 0 1 0 ${px(xPx - radiusPx)} ${px(yPx)}A${px(radiusPx)} ${px(radiusPx)} 0 1 0 ${px(xPx + radiusPx)} ${px(yPx)}`
+  const shapes: Shape[] = []
+  if (first?.form === 'tangential') shapes.push(...leg(fixedLegMm(spring, angleDeg, first.lengthMm), false))
+  shapes.push(...wireShapes(ring, wirePx, true))
+  if (second) {
+    const loaded = loadedLegMm(spring, angleDeg, second.lengthMm)
+    if (second.form === 'tangential') shapes.push(...leg(loaded, true))
+    else shapes.push(...wireShapes(`M${px(xPx + loaded.fromX * pxPerMm)} ${px(yPx + loaded.fromY * pxPerMm)}h0`, wirePx, true, true))
+  }
+  return shapes
+}
+
+/** Room in side view, mm: along the axis from the body's left face, and above and below the axis, y down. */
+export function sideExtentMm(spring: DrawnTorsion): { readonly left: number, readonly right: number, readonly top: number, readonly bottom: number } {
+  const { wireDiameterMm: d, meanDiameterMm: D, bodyCoils, legs: [first, second] } = spring
+  const radius = (D + d) / 2
+  const tipY = second?.form === 'tangential' ? loadedLegMm(spring, 0, second.lengthMm).toY : 0
+  return {
+    left: second?.form === 'straight' ? -second.lengthMm : 0,
+    right: (bodyCoils + 1) * d + (first?.form === 'straight' ? first.lengthMm : 0),
+    top: Math.min(-radius, tipY - d / 2), bottom: Math.max(radius, tipY + d / 2),
+  }
+}
+
+/**
+ * A torsion spring in side view, unloaded: the closed body with its left face at the place's x0. It is the end view seen from the
+ * right, its front to the left: the loaded leg leaves at the left end, the fixed leg at the right end, at the bottom.
+ */
+export function torsionSideShapes(spring: DrawnTorsion, place: Placement): Shape[] {
+  const { wireDiameterMm: d, meanDiameterMm, bodyCoils, hand, legs: [first, second] } = spring
+  const { pxPerMm, x0Px, axisYPx } = place
+  const wirePx = d * pxPerMm
+  // From the top of a coil; the last turn ends at the bottom, where the fixed leg is
+  const fromTurn = (((0.5 - bodyCoils) % 1) + 1) % 1
+  const strands = halfCoils({ centre: turns => d / 2 + d * (turns - fromTurn), meanDiameterMm, fromTurn, toTurn: fromTurn + bodyCoils, hand }, place)
+  const loaded = loadedLegMm(spring, 0, second?.lengthMm ?? 0)
+  const isNear = loaded.fromX + 1e-6 * (loaded.toX - loaded.fromX) >= 0
+  const [startX, startY] = [x0Px + (d / 2) * pxPerMm, axisYPx + loaded.fromY * pxPerMm]
+  const [endX, endY] = [x0Px + (d / 2 + d * bodyCoils) * pxPerMm, axisYPx + (meanDiameterMm / 2) * pxPerMm]
+  const ball = (x: number, y: number) => `M${px(x)} ${px(y)}h0`
+
+  const leg: Shape[] = []
+  if (second?.form === 'tangential') {
+    const downPx = (loaded.toY - loaded.fromY) * pxPerMm
+    leg.push(...(Math.abs(downPx) > wirePx / 2 ? cutWire(startX, startY, startX, startY + downPx, wirePx, isNear) : wireShapes(ball(startX, startY), wirePx, isNear, true)))
+  }
+  else if (second) {
+    // A bend from the coil into the axis' direction, drawn as a round corner over the wire
+    leg.push(...wireShapes(ball(startX, startY), wirePx, isNear, true), ...cutWire(startX, startY, startX - second.lengthMm * pxPerMm, startY, wirePx, isNear), ...crownShapes(ball(startX, startY), wirePx, isNear))
+  }
+  const fixed: Shape[] = []
+  if (first?.form === 'straight') fixed.push(...cutWire(endX - 0.3, endY, endX + first.lengthMm * pxPerMm, endY, wirePx, hand === 'right'))
+  // A tangential one of a left-hand spring comes towards the viewer
+  else if (first && hand === 'left') fixed.push(...wireShapes(ball(endX, endY), wirePx, true, true))
+  const nearJoint = isNear && second?.form === 'tangential' ? [path('w-body near', `M${px(startX)} ${px(startY - 1.5)}V${px(startY + 1.5)}`, Math.max(0.6, wirePx - edgePx(wirePx)))] : []
+  return [
+    ...(isNear ? [] : leg),
+    ...wireShapes(strands.far, wirePx, false),
+    ...wireShapes(strands.near, wirePx, true), ...crownShapes(strands.crowns, wirePx, true),
+    ...(isNear ? leg : []), ...nearJoint,
+    ...fixed,
+  ]
 }

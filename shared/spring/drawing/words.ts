@@ -1,9 +1,11 @@
 import { fromSi, type UnitSystem } from '../../units/convert'
-import { decimalsFor, formatForce, formatLength, formatNumber, formatShare, formatWireDiameter } from '../../units/format'
-import type { CompressionEnds } from '../codes'
+import { decimalsFor, formatAngle, formatForce, formatLength, formatNumber, formatShare, formatWireDiameter } from '../../units/format'
+import type { CompressionEnds, HookForm } from '../codes'
 import { shearStressMpa } from '../mechanics/stress'
 import type { ChartRow } from './chart-rows'
 import type { DrawnSpring } from './drawn-spring'
+import { freeAngleDeg } from './legs'
+import type { DrawnExtension, DrawnTorsion } from './moved'
 import { forceAtN, type LoadCharted } from './load-chart'
 
 const ENDS_WORDS: Record<CompressionEnds, string> = {
@@ -17,6 +19,24 @@ const coils = (count: number): string => formatNumber(count, 2).replace(/\.?0+$/
 export function figureSentence(spring: DrawnSpring, lengthMm: number, units: UnitSystem): string {
   const { wireDiameterMm: d, meanDiameterMm: D } = spring
   return `Compression spring in side view, ${formatLength(lengthMm, units)} long, outside diameter ${formatLength(D + d, units)}, inside diameter ${formatLength(D - d, units)}, wire ${formatWireDiameter(d, units)}, ${coils(spring.activeCoils)} active of ${coils(spring.totalCoils)} coils, ends ${ENDS_WORDS[spring.ends]}, ${spring.hand}-hand.`
+}
+
+const HOOK_WORDS: Readonly<Record<HookForm, string>> = {
+  'full-loop': 'full loops', 'half-loop': 'half loops', 'crossover-loop': 'crossed loops', 'extended-hook': 'extended hooks',
+}
+
+/** One sentence that names the drawing of an extension spring for those who do not see it. */
+export function extensionSentence(spring: DrawnExtension, lengthMm: number, units: UnitSystem): string {
+  const { wireDiameterMm: d, meanDiameterMm: D } = spring
+  return `Extension spring in side view, ${formatLength(lengthMm, units)} long inside its ${HOOK_WORDS[spring.hookForm]}, outside diameter ${formatLength(D + d, units)}, wire ${formatWireDiameter(d, units)}, ${coils(spring.bodyCoils)} coils in the body, ${spring.hand}-hand.`
+}
+
+/** One sentence that names the drawing of a torsion spring for those who do not see it. */
+export function torsionSentence(spring: DrawnTorsion, units: UnitSystem, view: string): string {
+  const { wireDiameterMm: d, meanDiameterMm: D, legs: [first, second] } = spring
+  const form = first?.form === 'straight' ? 'along the axis' : `off the coil, ${formatAngle(freeAngleDeg(spring))} apart`
+  const legWords = first && second ? `legs ${formatLength(first.lengthMm, units)} and ${formatLength(second.lengthMm, units)} ${form}` : 'no legs'
+  return `Torsion spring ${view}, outside diameter ${formatLength(D + d, units)}, inside diameter ${formatLength(D - d, units)}, wire ${formatWireDiameter(d, units)}, ${coils(spring.bodyCoils)} coils in the body, ${legWords}, ${spring.hand}-hand.`
 }
 
 /** What the pressed length means: solid, too close, over the stress allowed, free, or within the working range. */

@@ -24,7 +24,6 @@ function stepped(...valuesMpa: readonly [number, number, number, number]): Stepp
 
 // EN 13906-1 gives the loss for EN wire; the same steel classes are taken for ASTM wire, from memory.
 const STEEL_LOSS = { value: 0.25e-3, origin: 'from memory', source: 'EN 13906-1 for like steel, from memory' } as const
-const STAINLESS_LOSS = { value: 0.4e-3, origin: 'from memory', source: 'EN 13906-1 for like steel, from memory' } as const
 const STEEL_DENSITY = { value: 7860, origin: 'published', source: ROUND_WIRE } as const
 
 /** Music wire. A and m: solutions manuals to Shigley, 8th and 10th ed.; range from memory. */
@@ -110,30 +109,4 @@ export const ASTM_A401: Material = {
   stressRelief: { temperatureC: 427, minutes: 30, origin: 'published', source: CHART },
   corrosionNote: CARBON_NOTE,
   resistsCorrosion: false,
-}
-
-/** Stainless 302 wire. Bands: solutions manual to Shigley, 8th ed. (kpsi form); SI form and last band from memory. */
-export const ASTM_A313_302: Material = {
-  code: 'ASTM-A313-302',
-  name: 'Stainless wire 302',
-  standard: 'ASTM A313',
-  family: 'stainless',
-  youngsModulus: { value: 193_000, origin: 'published', source: SUPPLIER },
-  shearModulus: { value: 69_000, origin: 'published', source: SUPPLIER },
-  densityKgPerM3: { value: 7920, origin: 'published', source: ROUND_WIRE },
-  temperatureLimitC: { value: 288, origin: 'published', source: SUPPLIER },
-  modulusLossPerKelvin: STAINLESS_LOSS,
-  strength: powerStrength(
-    [
-      { upToMm: 2.5, aMpa: 1867, m: 0.146 },
-      { upToMm: 5, aMpa: 2065, m: 0.263 },
-      { upToMm: 10, aMpa: 2911, m: 0.478 },
-    ],
-    0.3,
-    'from memory',
-    'solutions manual to Shigley, 8th ed. (kpsi form); SI form and the band over 5 mm from memory',
-  ),
-  stressRelief: { temperatureC: 330, minutes: 30, origin: 'published', source: CHART },
-  corrosionNote: 'Stainless: good in damp air, food and fresh water; salt and chlorides pit it in time.',
-  resistsCorrosion: true,
 }

@@ -23,6 +23,8 @@ export interface WireModel {
   readonly densityKgPerM3: number
   /** NaN where the standard does not cover the diameter and the caller gave none. */
   readonly tensileStrengthMpa: number
+  /** True where the caller gave it in place of the table's. */
+  readonly isStrengthGiven: boolean
   readonly wireProblem: string | null
   readonly method: StressMethod
   readonly grade: ToleranceGrade
@@ -63,6 +65,7 @@ export function buildWireModel(
     moduli: G / E,
     densityKgPerM3: own.densityKgPerM3 ?? material.densityKgPerM3.value,
     tensileStrengthMpa: own.tensileStrengthMpa ?? (strength.known ? strength.minimumMpa : Number.NaN),
+    isStrengthGiven: own.tensileStrengthMpa !== undefined,
     wireProblem: strength.known ? null : strength.reason,
     method: conditions.method ?? 'en13906',
     grade: conditions.toleranceGrade ?? 2,

@@ -89,6 +89,10 @@ export function compressionGroups(spring: CompressionInput, evaluation: Compress
         ),
         { field: 'buckling.ok', symbol: '', name: 'Safe from buckling as it works', value: buckling.ok ? 'yes' : 'no', quantity: 'coils', formula: '', basis: 'its greatest travel against that deflection' },
         computed('naturalFrequencyHz', 'f_e', 'Natural frequency', evaluation.naturalFrequencyHz, 'frequency', 'f_e = d/(2 π n D^2) sqrt(G/(2 ρ))', `${MEMORY}; both ends seated`),
+        ...evaluation.impact === null ? [] : [
+          computed('impact.speedMPerS', 'v', 'Greatest speed of the moving end', evaluation.impact.speedMPerS, 'speed', 'v = π f s_h', 'moved to and fro evenly (harmonic motion), s_h the stroke'),
+          computed('impact.stressMpa', 'τ_v', 'Stress that this speed adds', evaluation.impact.stressMpa, 'stress', 'τ_v = v sqrt(2 ρ G)', MEMORY),
+        ],
         computed('outerDiameterAtSolidMm', '', 'Outside diameter when solid', evaluation.outerDiameterAtSolidMm, 'length', `D_e + 0.1 (m_p^2 − 0.8 m_p d − 0.2 d^2)/D, ${growth}`, `${MEMORY}; ends free to turn`),
         ...fatigueRows(evaluation, { symbol: 'τ', basis: 'Goodman, S_u = 0.67 R_m, S_e through Zimmerli’s point (Shigley ch. 10)' }),
       ],

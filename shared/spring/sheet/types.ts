@@ -4,7 +4,7 @@ import type { Check, Tolerance } from '../mechanics/types'
 /** How a number of the sheet is written: its quantity, and how finely. Lengths come in three degrees of fineness. */
 export type SheetQuantity =
   | 'wire' | 'length' | 'fineLength' | 'force' | 'rate' | 'moment' | 'momentRate' | 'angle' | 'stress' | 'mass' | 'temperature'
-  | 'coils' | 'ratio' | 'share' | 'cycles' | 'perMinute' | 'frequency' | 'density' | 'perKelvin'
+  | 'coils' | 'ratio' | 'share' | 'cycles' | 'perMinute' | 'frequency' | 'speed' | 'density' | 'perKelvin'
 
 /**
  * One value with everything that is needed to trust it. Symbols and formulas are written with `_` before an index and `^` before

@@ -31,9 +31,11 @@ const CHECKS: Readonly<Record<string, CheckWords>> = {
   'free-length': { name: 'Free length', unit: 'length' },
   'temperature': { name: 'Temperature', unit: 'temperature' },
   'resonance': { name: 'Resonance', unit: 'frequency' },
+  'impact': { name: 'Stress of quick strokes', unit: 'stress' },
   'peening': { name: 'Shot peening', unit: 'length' },
   'tangling': { name: 'Tangling in bulk', unit: 'length' },
   'surroundings': { name: 'Surroundings', unit: null },
+  'method': { name: 'Limits and strengths of one set', unit: null },
   'winding': { name: 'Direction of the load', unit: null },
 }
 

@@ -34,6 +34,8 @@ const WRITERS: Readonly<Record<SheetQuantity, (value: number, units: UnitSystem)
   cycles: value => formatNumber(value, 0),
   perMinute: value => withUnit(trimmed(value, 2), 'per minute'),
   frequency: value => withUnit(fewFigures(value), 'Hz'),
+  // a foot is 0.3048 m
+  speed: (value, units) => (units === 'inch' ? withUnit(fewFigures(value / 0.3048), 'ft/s') : withUnit(fewFigures(value), 'm/s')),
   // lb/in3: one is 27 679.9 kg/m3, from the pound and the inch
   density: (value, units) => (units === 'inch' ? withUnit(formatNumber(value * 0.0254 ** 3 / 0.45359237, 4), 'lb/in³') : withUnit(formatNumber(value, 0), 'kg/m³')),
   perKelvin: value => withUnit(`${formatNumber(value * 100, 3)}${THIN_SPACE}%`, 'per kelvin'),

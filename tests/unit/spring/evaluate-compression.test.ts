@@ -63,32 +63,53 @@ describe('evaluating a sound spring', () => {
   })
 })
 
-/** One change to the sound spring that each stop check must refuse. */
-const BROKEN: Record<string, Partial<CompressionInput>> = {
-  'wire-range': { wireDiameterMm: 25, meanDiameterMm: 200, freeLengthMm: 600, points: [] },
-  'index': { meanDiameterMm: 7.9, freeLengthMm: 27, points: [] },
-  'coils': { activeCoils: 1.9, freeLengthMm: 14, points: [] },
-  'order': { points: [{ lengthMm: 40 }, { lengthMm: 50 }] },
-  'clearance': { points: [{ lengthMm: 22 }] },
-  'stress-solid': { freeLengthMm: 66, points: [] },
-  'stress-working': { freeLengthMm: 80, points: [{ lengthMm: 30 }], solidSafe: false },
-  'fatigue': { duty: { cycles: 1e6 }, points: [{ lengthMm: 55 }, { lengthMm: 28 }] },
-  'bore': { fit: { boreMm: 18.4 } },
-  'rod': { fit: { rodMm: 13.8 } },
-  'buckling': { seatingCoefficient: 2, points: [{ lengthMm: 35 }] },
-  'solid-length': { fit: { maxSolidLengthMm: 20 } },
-  'free-length': { fit: { maxFreeLengthMm: 59 } },
-  'temperature': { temperatureC: 101 },
+/*
+ * For each check that can stop: a change to the sound spring just beyond its limit, and one beside it that passes. The numbers follow from
+ * 2 mm wire on 16 mm, rate 4.974 N/mm, 5.093 MPa a newton, solid at 20.21 mm, Rm 1980 MPa.
+ */
+const EDGES: Record<string, readonly [Partial<CompressionInput>, Partial<CompressionInput>]> = {
+  'wire-range': [{ wireDiameterMm: 20.001, meanDiameterMm: 160, freeLengthMm: 430, points: [] }, { wireDiameterMm: 20, meanDiameterMm: 160, freeLengthMm: 430, points: [] }],
+  'index': [{ meanDiameterMm: 7.99, freeLengthMm: 27, points: [] }, { meanDiameterMm: 8, freeLengthMm: 27, points: [] }],
+  'coils': [{ activeCoils: 1.999, freeLengthMm: 14, points: [] }, { activeCoils: 2, freeLengthMm: 14, points: [] }],
+  'order': [{ points: [{ lengthMm: 40 }, { lengthMm: 40.01 }] }, { points: [{ lengthMm: 40.01 }, { lengthMm: 40 }] }],
+  // 20.21 + 8 (0.0015 16^2/2 + 0.1 2) = 23.346 mm.
+  'clearance': [{ points: [{ lengthMm: 23.34 }] }, { points: [{ lengthMm: 23.35 }] }],
+  // 0.56 * 1980 = 1108.8 MPa, 43.77 mm of travel.
+  'stress-solid': [{ freeLengthMm: 64, points: [] }, { freeLengthMm: 63.97, points: [] }],
+  'stress-working': [{ freeLengthMm: 80, points: [{ lengthMm: 36.22 }], solidSafe: false }, { freeLengthMm: 80, points: [{ lengthMm: 36.24 }], solidSafe: false }],
+  // Goodman through Zimmerli: Ssu 1326.6, Se 337.4 MPa; from 148.5 MPa at 55 mm to 626 MPa, corrected by 1.1724.
+  'fatigue': [{ duty: { cycles: 1e6 }, points: [{ lengthMm: 55 }, { lengthMm: 38.9 }] }, { duty: { cycles: 1e6 }, points: [{ lengthMm: 55 }, { lengthMm: 38.94 }] }],
+  // 18 + 0.251 of growth + 0.3 of EN 15800 grade 2.
+  'bore': [{ fit: { boreMm: 18.55 } }, { fit: { boreMm: 18.56 } }],
+  'rod': [{ fit: { rodMm: 13.71 } }, { fit: { rodMm: 13.69 } }],
+  // EN 13906-1 for L0/D 3.75, seating 2: 3.031 mm.
+  'buckling': [{ seatingCoefficient: 2, points: [{ deflectionMm: 3.04 }] }, { seatingCoefficient: 2, points: [{ deflectionMm: 3.03 }] }],
+  'solid-length': [{ fit: { maxSolidLengthMm: 20.2 } }, { fit: { maxSolidLengthMm: 20.22 } }],
+  'free-length': [{ fit: { maxFreeLengthMm: 59.99 } }, { fit: { maxFreeLengthMm: 60 } }],
+  'temperature': [{ temperatureC: 100.1 }, { temperatureC: 100 }],
 }
 
 describe('checks', () => {
-  it.each(Object.entries(BROKEN))('%s stops a spring that breaks it, and nothing else does', (code, change) => {
-    expect(stopsOf(makeSpring(change))).toEqual([code])
+  it.each(Object.entries(EDGES))('%s stops a spring just beyond its limit, and nothing else does; the one beside it passes', (code, [beyond, within]) => {
+    expect(stopsOf(makeSpring(beyond))).toEqual([code])
+    expect(stopsOf(makeSpring(within))).toEqual([])
   })
 
-  it('has a broken spring for every check that can stop', () => {
-    const neverStop = ['resonance', 'peening', 'tangling', 'surroundings']
-    expect(Object.keys(BROKEN).sort()).toEqual(COMPRESSION_CHECKS.map(c => c.code).filter(c => !neverStop.includes(c)).sort())
+  it('has such a pair for every check that can stop', () => {
+    const neverStop = ['resonance', 'impact', 'peening', 'tangling', 'surroundings', 'method']
+    expect(Object.keys(EDGES).sort()).toEqual(COMPRESSION_CHECKS.map(c => c.code).filter(c => !neverStop.includes(c)).sort())
+  })
+
+  it('names what each rests on, whatever the verdict', () => {
+    // A standard, a book, practice, what was asked for, or the plain geometry of a spring between free and solid.
+    const basis = /EN \d|DIN|ASTM|Shigley|Zimmerli|common practice|asked for|from memory|table|free and the solid|Plain|Surroundings/
+    for (const change of [{}, ...Object.values(EDGES).flat()]) {
+      for (const { code, message } of evaluateCompression(makeSpring({ shotPeened: true, ...change }), { surroundings: 'damp' }).checks) {
+        if (code === 'order') continue
+        expect(message, code).toMatch(basis)
+        expect(message).toMatch(/^[A-Z0-9-].*\.$/)
+      }
+    }
   })
 
   it('stops points beyond the free length or below solid, and a free length without travel', () => {
@@ -129,6 +150,58 @@ describe('checks', () => {
     expect(factor(evaluateCompression(makeSpring({ points, duty: { cycles: 1e5 }, shotPeened: true })))).toBeGreaterThan(factor(two))
     const thick = makeSpring({ wireDiameterMm: 12, meanDiameterMm: 96, freeLengthMm: 240, points: [{ lengthMm: 230 }, { lengthMm: 225 }], duty: { cycles: 1e6 } })
     expect(stopsOf(thick)).toEqual(['fatigue'])
+  })
+
+  it('shows no life where the data end: copper alloys, wire over 10 mm, a spring drawn out; nor fractions for wire they are not published for', () => {
+    const worked = { duty: { cycles: 1e6 }, points: [{ lengthMm: 55 }, { lengthMm: 45 }] } as const
+    expect(evaluateCompression(makeSpring({ ...worked, material: 'ASTM-B159' })).fatigue).toBeNull()
+    expect(stopsOf(makeSpring({ ...worked, material: 'ASTM-B159' }))).toContain('fatigue')
+    expect(evaluateCompression(makeSpring({ ...worked, wireDiameterMm: 10.5, meanDiameterMm: 84, freeLengthMm: 240, points: [{ lengthMm: 230 }, { lengthMm: 225 }] })).fatigue).toBeNull()
+    expect(evaluateCompression(makeSpring({ ...worked, points: [{ lengthMm: 65 }, { lengthMm: 60 }] })).fatigue).toBeNull()
+    const fraction = (material: CompressionInput['material']) => evaluateCompression(makeSpring({ ...worked, material })).fatigue?.lifeFractionSafetyFactor
+    expect(fraction('EN10270-1-SH')).toBeGreaterThan(1)
+    expect(fraction('EN10270-3-1.4310')).toBeGreaterThan(1)
+    expect(fraction('EN10270-2-FDSiCr')).toBeNull()
+    const long = evaluateCompression(makeSpring({ ...worked, duty: { cycles: 1e9 } })).checks.find(c => c.code === 'fatigue')?.message
+    expect(long).toContain('at 1.00e+7 strokes, the longest life published')
+  })
+
+  it('cautions of relaxation where it is warm and much stressed, not where it is only one of them', () => {
+    const pressed = { freeLengthMm: 63.9, points: [{ lengthMm: 27 }] } as const
+    expect(verdict(makeSpring({ ...pressed, temperatureC: 65 }), 'temperature')).toBe('caution')
+    expect(verdict(makeSpring({ ...pressed, temperatureC: 59 }), 'temperature')).toBe('pass')
+    expect(verdict(makeSpring({ temperatureC: 65 }), 'temperature')).toBe('pass')
+    expect(verdict(makeSpring({ ...pressed, points: [], temperatureC: 65 }), 'temperature')).toBe('pass')
+  })
+
+  it('adds the stress of quick strokes: 35.8 MPa for each metre a second in steel (v sqrt(2 rho G))', () => {
+    expect(evaluateCompression(makeSpring()).impact).toBeNull()
+    expect(evaluateCompression(makeSpring({ duty: { strokesPerMinute: 60 }, points: [] })).impact).toBeNull()
+    // 10 mm to and fro 3000 times a minute: pi * 50 * 0.01 = 1.571 m/s.
+    const { impact } = evaluateCompression(makeSpring({ duty: { strokesPerMinute: 3000 } }))
+    expect(impact?.speedMPerS).toBeCloseTo(1.5708, 4)
+    expect(impact?.stressMpa).toBeCloseTo(1.5708 * 35.77, 1)
+    const near = { freeLengthMm: 63.9, points: [{ lengthMm: 45 }, { lengthMm: 24 }] } as const
+    expect(verdict(makeSpring({ ...near, duty: { strokesPerMinute: 60 } }), 'impact')).toBe('pass')
+    expect(verdict(makeSpring({ ...near, duty: { strokesPerMinute: 3000 } }), 'impact')).toBe('caution')
+  })
+
+  it('says why the stress at solid counts under changing load, and cautions of peening that shot cannot do', () => {
+    const solid = (change: Partial<CompressionInput>) => evaluateCompression(makeSpring({ freeLengthMm: 66, points: [], solidSafe: false, ...change })).checks.find(c => c.code === 'stress-solid')?.message
+    expect(solid({ duty: { cycles: 1e6 } })).toContain('surge may close the coils')
+    expect(solid({})).not.toContain('surge')
+    const thin = { wireDiameterMm: 0.8, meanDiameterMm: 6.4, freeLengthMm: 22, points: [{ lengthMm: 20 }, { lengthMm: 15 }], shotPeened: true } as const
+    expect(verdict(makeSpring({ ...thin, duty: { cycles: 1e5 } }), 'peening')).toBe('caution')
+    expect(verdict(makeSpring(thin), 'peening')).toBe('note')
+  })
+
+  it('cautions where EN limits are used with inch-system or copper wire, unless its strength is given', () => {
+    const at = (change: Partial<CompressionInput>) => verdict(makeSpring(change), 'method')
+    expect(at({})).toBe('absent')
+    expect(at({ material: 'ASTM-A228' })).toBe('caution')
+    expect(at({ material: 'ASTM-A228', method: 'wahl' })).toBe('absent')
+    expect(at({ material: 'ASTM-A228', materialValues: { tensileStrengthMpa: 1900 } })).toBe('absent')
+    expect(at({ material: 'ASTM-B197', materialValues: { tensileStrengthMpa: 1200 } })).toBe('caution')
   })
 
   it('counts surroundings against plain steel and not against stainless', () => {

@@ -11,6 +11,18 @@ describe('rate from a bouncing mass', () => {
     expect(result.ok && result.relativeError).toBeLessThan(1e-9)
   })
 
+  it('takes the times between taps as well as the taps', () => {
+    const tapTimesS = taps(3, 15, i => 0.01 * Math.sin(5 * i))
+    const periodsS = tapTimesS.slice(1).map((time, i) => time - (tapTimesS[i] ?? 0))
+    const byTaps = rateFromOscillation({ tapTimesS, massG: 300, springMassG: 20 })
+    const byPeriods = rateFromOscillation({ periodsS, massG: 300, springMassG: 20 })
+    expect(byPeriods).toMatchObject({ ok: true, taps: 15 })
+    expect(byPeriods.ok && byTaps.ok && byPeriods.rateNPerMm / byTaps.rateNPerMm).toBeCloseTo(1, 12)
+    expect(byPeriods.ok && byTaps.ok && byPeriods.relativeError / byTaps.relativeError).toBeCloseTo(1, 9)
+    expect(rateFromOscillation({ periodsS: [0.2, 0.2, -0.1, 0.2, 0.2, 0.2, 0.2], massG: 300 })).toEqual({ ok: false, reason: 'not-in-order' })
+    expect(rateFromOscillation({ periodsS: [], massG: 300 })).toEqual({ ok: false, reason: 'too-few-taps' })
+  })
+
   it('counts a third of the spring\'s own mass: (2 pi f)^2 (m + ms/3)', () => {
     const result = rateFromOscillation({ tapTimesS: taps(2, 12), massG: 1000, springMassG: 90 })
     expect(result.ok && result.rateNPerMm).toBeCloseTo(((2 * Math.PI * 2) ** 2 * 1.03) / 1000, 9)

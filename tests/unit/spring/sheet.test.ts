@@ -15,7 +15,7 @@ const example = (kind: SpringKind, more: Record<string, string> = {}): SpringInp
 }
 /** Everything stated, so that no value is null. */
 const FULL: Record<SpringKind, Record<string, string>> = {
-  compression: { cycles: '200000', temperature: '60C' }, extension: { cycles: '200000', temperature: '60C' }, torsion: { cycles: '200000', temperature: '60C' },
+  compression: { cycles: '200000', temperature: '60C', strokes: '30' }, extension: { cycles: '200000', temperature: '60C' }, torsion: { cycles: '200000', temperature: '60C' },
 }
 
 /** The paths of all plain values in an object: `points.0.forceN`. */

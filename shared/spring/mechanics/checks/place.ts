@@ -29,6 +29,30 @@ export const temperatureCheck: SpringCheck<WireModel, unknown> = {
   },
 }
 
+// EN 13906-1 states relaxation as curves of force lost in 48 hours by wire, heat and stress, which are not held here. Common practice, no source.
+const RELAXATION_HEAT = 0.6
+const RELAXATION_STRESS = 0.8
+
+/**
+ * The check of temperature for a kind of spring, which also cautions where force will be lost by relaxation: warm, and held under much
+ * stress. `stressShare` is the greatest working stress over the static limit; NaN where none is known.
+ */
+export function withRelaxation<Model extends WireModel, State>(stressShare: (model: Model, state: State) => number): SpringCheck<Model, State> {
+  return {
+    ...temperatureCheck,
+    describe: (model, state) => {
+      const found = temperatureCheck.describe(model, state)
+      const share = stressShare(model, state)
+      const t = model.temperatureC
+      if (!found.ok || !(t > RELAXATION_HEAT * model.material.temperatureLimitC.value && share > RELAXATION_STRESS)) return found
+      return {
+        ...found, ok: false, severity: 'caution',
+        message: `${figure(t)} °C is over 60 % of the limit of ${model.material.name}, ${model.material.temperatureLimitC.value} °C (${model.material.temperatureLimitC.source}), at ${figure(100 * share)} % of the stress allowed: some force will be lost by relaxation (common practice; EN 13906-1 has curves for it, which are not held here).`,
+      }
+    },
+  }
+}
+
 /** Corrosion where the spring lives. */
 export const surroundingsCheck: SpringCheck<WireModel, unknown> = {
   code: 'surroundings',

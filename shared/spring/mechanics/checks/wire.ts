@@ -50,3 +50,18 @@ export const indexCheck: SpringCheck<WireModel, { readonly springIndex: number }
     )
   },
 }
+
+/**
+ * Limits and strengths from one set: EN 13906 states its limits with the least strengths of EN 10270 steel wire, while A/d^m of the inch-system
+ * wires is of the level of a mean, and copper alloys are no steel. Shown only where the two are mixed.
+ */
+export const methodCheck: SpringCheck<WireModel, unknown> = {
+  code: 'method',
+  applies: ({ method, material, isStrengthGiven }) => method === 'en13906' && !material.standard.startsWith('EN') && (!isStrengthGiven || material.family === 'copper-alloy'),
+  stops: () => false,
+  describe: ({ material }) => finishCheck('method', { stop: false, caution: true }, Number.NaN, Number.NaN, {
+    stop: '',
+    caution: `The limits of EN 13906 are stated with the least strengths of EN 10270 steel wire and are used here with ${material.standard}: the method of published fractions (Shigley) has the limits that go with it.`,
+    pass: '',
+  }, 'caution'),
+}

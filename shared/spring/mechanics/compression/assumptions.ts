@@ -13,6 +13,7 @@ export function describeAssumptions(model: CompressionModel, state: CompressionS
     model.method === 'en13906'
       ? `Solid length by EN 13906-1: coils at the thickest wire its tolerance allows (${figure(model.solidWireMm)} mm).`
       : 'Solid length as in the textbooks: coils at the nominal wire diameter.',
+    `Each end seated as the coefficient ${model.seating} says (EN 13906-1); the natural frequency is that with both ends seated.`,
     `Tensile strength is the least of ${model.material.standard} (${model.material.strength.source}), or the value given.`,
   ]
   if (model.method === 'en13906' && !model.preset) {

@@ -4,6 +4,7 @@ import { buckles, stateBucklingDeflectionMm, stateNaturalFrequencyHz } from './c
 import {
   greatestCorrectedStressMpa, leastCorrectedStressMpa, stateFatigueFactor, stateLifeFractionFactor,
 } from './checks/life'
+import { stateImpactStressMpa, stateSpeedMPerS } from './checks/impact'
 import { listTolerances } from './tolerances'
 import { totalCoilsFor } from './end-geometry'
 import type { EvaluationContext } from '../wire-model'
@@ -63,6 +64,7 @@ export function describeSpring(model: CompressionModel, state: CompressionState,
     outerDiameterAtSolidMm: outerDiameterAtSolidMm(model, state),
     pitchMm: statePitchMm(model, state),
     naturalFrequencyHz: stateNaturalFrequencyHz(model, state),
+    impact: describeImpact(model, state),
     buckling: {
       slenderness: state.freeLengthMm / state.meanDiameterMm,
       criticalDeflectionMm: orNull(stateBucklingDeflectionMm(model, state)),
@@ -105,6 +107,11 @@ function describePoint(model: CompressionModel, state: CompressionState, factor:
     correctedStressMpa: factor * stressMpa,
     utilisation: orNull(comparedStressMpa(model, state, forceN) / model.allowableStressMpa),
   }
+}
+
+function describeImpact(model: CompressionModel, state: CompressionState): CompressionEvaluation['impact'] {
+  const speedMPerS = stateSpeedMPerS(model, state)
+  return speedMPerS >= 0 ? { speedMPerS, stressMpa: stateImpactStressMpa(model, state) } : null
 }
 
 function describeFatigue(model: CompressionModel, state: CompressionState): FatigueResult | null {

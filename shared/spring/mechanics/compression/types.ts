@@ -37,6 +37,8 @@ export interface CompressionEvaluation extends WoundEvaluation {
   readonly outerDiameterAtSolidMm: number
   readonly pitchMm: number
   readonly naturalFrequencyHz: number
+  /** Greatest speed of the moving end and the stress its wave adds; null without strokes a minute and a point. */
+  readonly impact: { readonly speedMPerS: number, readonly stressMpa: number } | null
   readonly buckling: { readonly slenderness: number, readonly criticalDeflectionMm: number | null, readonly ok: boolean }
   /** Rate at the working temperature; null where none is given. */
   readonly rateAtTemperatureNPerMm: number | null

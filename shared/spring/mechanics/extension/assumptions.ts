@@ -2,7 +2,7 @@ import { figure } from '../figure'
 import { ZIMMERLI_THICKEST_WIRE_MM } from '../fatigue'
 import { hookOrigin } from './hooks'
 import type { ExtensionModel } from './model'
-import type { ExtensionState } from './state'
+import { greatestExtensionForceN, type ExtensionState } from './state'
 import { listExtensionTolerances } from './tolerances'
 
 // Angle between the planes of the two hooks by coils (Machinery's Handbook, Table 9, degrees either way).
@@ -13,6 +13,11 @@ function hookAngleWords(bodyCoils: number): string {
   return row
     ? `The planes of the two hooks may be up to ${row[1]} degrees apart unless agreed (Machinery's Handbook, Table 9).`
     : 'The planes of the two hooks lie at random unless agreed (Machinery\'s Handbook, Table 9).'
+}
+
+/** Work in the spring at its greatest working length, J: the mean of initial tension and load, times the pull. NaN without a point. */
+function storedWorkJ(state: ExtensionState): number {
+  return ((state.initialTensionN + greatestExtensionForceN(state)) / 2) * (state.longestLengthMm - state.freeLengthMm) / 1000
 }
 
 /** What the result takes for granted, in sentences. */
@@ -29,8 +34,11 @@ export function describeExtensionAssumptions(model: ExtensionModel, state: Exten
       : `They leave the body in a bend of ${figure(model.sideBendRadiusMm)} mm mean radius.`,
     hookAngleWords(state.bodyCoils),
     `Tensile strength is the least of ${model.material.standard} (${model.material.strength.source}), or the value given.`,
+    'The limits of the hooks are those of Shigley, Table 10-7, by either method: EN 13906-2 leaves hooks to the maker (from memory).',
     'An extension spring has no stop of its own: something else must keep it from being pulled too far.',
   ]
+  const stored = storedWorkJ(state)
+  if (stored > 0) said.push(`At the greatest load the spring holds ${figure(stored)} J. A hook that breaks lets go of it at once: whoever fits the spring decides whether hands near it need a guard.`)
   if (model.preset) said.push('Presetting is not counted: closed coils cannot be pressed solid.')
   if (model.shotPeened) said.push('Shot peening is not counted: shot does not reach between closed coils.')
   if (Number.isNaN(model.temperatureC)) said.push('Room temperature.')

@@ -7,3 +7,6 @@ export const greatestInitialStressMpa = (springIndex: number): number => middleM
 
 /** Least initial stress that is wound with ease, MPa. */
 export const leastInitialStressMpa = (springIndex: number): number => middleMpa(springIndex) - spreadMpa(springIndex)
+
+/** The middle of the sensible range, MPa: what a spring is wound with where nothing asks for more or less. */
+export const usualInitialStressMpa = middleMpa

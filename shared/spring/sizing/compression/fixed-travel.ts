@@ -139,6 +139,6 @@ export function hasFeasibleDiameter(model: CompressionModel, state: CompressionS
 export function uncoveredChecks(): string[] {
   const covered = new Set([...CONSTANT_CHECKS, ...LEAST_DIAMETER_CHECKS, ...MOST_DIAMETER_CHECKS, rodCheck].map(c => c.code))
   covered.add('index')
-  const neverStop = new Set(['resonance', 'peening', 'tangling', 'surroundings'])
+  const neverStop = new Set(['resonance', 'impact', 'peening', 'tangling', 'surroundings', 'method'])
   return COMPRESSION_CHECKS.map(c => c.code).filter(code => !covered.has(code) && !neverStop.has(code))
 }

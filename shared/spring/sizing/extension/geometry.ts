@@ -1,7 +1,9 @@
 import { bodyLengthMm, hookLengthMm } from '../../mechanics/extension/hooks'
+import { greatestInitialStressMpa, usualInitialStressMpa } from '../../mechanics/extension/initial-tension'
 import type { ExtensionModel } from '../../mechanics/extension/model'
 import { fillExtensionState, type ExtensionState } from '../../mechanics/extension/state'
-import type { ExtensionSizeRequest, LoadPoint } from '../types'
+import { forceAtStressN } from '../../mechanics/stress'
+import { firstForceN, type ExtensionTravel } from './travel'
 
 export const LEAST_BODY_COILS = 3
 
@@ -16,46 +18,77 @@ export function stiffness(model: ExtensionModel): number {
   return (model.shearModulusMpa * d * d * d * d) / 8
 }
 
-/** What the request fixes. `anchor` is the load the initial tension is counted from. */
-export type ExtensionTravel =
-  | { readonly kind: 'rate', readonly anchor: LoadPoint, readonly rateNPerMm: number, readonly points: readonly LoadPoint[] }
-  | { readonly kind: 'free-length', readonly anchor: LoadPoint, readonly freeLengthMm: number, readonly points: readonly LoadPoint[] }
-  | { readonly kind: 'one-load', readonly anchor: LoadPoint, readonly points: readonly LoadPoint[] }
-
-/** What the request fixes. Throws for a request that was not checked. */
-export function resolveExtensionTravel({ points, rateNPerMm, freeLengthMm }: ExtensionSizeRequest): ExtensionTravel {
-  const [first, second] = points
-  if (!first) throw new Error('A size request for an extension spring needs a load')
-  if (second) return { kind: 'rate', anchor: first, rateNPerMm: (second.forceN - first.forceN) / (second.lengthMm - first.lengthMm), points }
-  if (rateNPerMm !== undefined) return { kind: 'rate', anchor: first, rateNPerMm, points }
-  if (freeLengthMm !== undefined) return { kind: 'free-length', anchor: first, freeLengthMm, points }
-  return { kind: 'one-load', anchor: first, points }
-}
-
-/** Load at the anchor for a rate that steps have moved off the asked one, and the relative error of the asked loads. */
-export function steppedAnchorN(travel: ExtensionTravel, rateNPerMm: number): { readonly forceN: number, readonly error: number } {
-  const { anchor, points } = travel
-  const [first, second] = points
-  if (travel.kind !== 'rate') return { forceN: anchor.forceN, error: 0 }
-  if (!first || !second) return { forceN: anchor.forceN, error: Math.abs(rateNPerMm / travel.rateNPerMm - 1) }
-  const error = (rateNPerMm * (second.lengthMm - first.lengthMm) - (second.forceN - first.forceN)) / (first.forceN + second.forceN)
-  return { forceN: first.forceN * (1 - error), error: Math.abs(error) }
-}
-
-/** Fills the state with the spring of mean diameter D and body coils that carries the anchor's load, its free length as given or usual. */
-export function fillExtension(
-  model: ExtensionModel, state: ExtensionState, travel: ExtensionTravel, meanDiameterMm: number, bodyCoils: number, anchorN = travel.anchor.forceN,
-): ExtensionState {
+/** Fills the state with the spring of mean diameter D and body coils: its hooks usual, its tension as the first load leaves it, or in the middle of the sensible range without a load. */
+export function fillExtension(model: ExtensionModel, state: ExtensionState, travel: ExtensionTravel, meanDiameterMm: number, bodyCoils: number): ExtensionState {
+  const d = model.wireDiameterMm
+  const D = meanDiameterMm
   const activeCoils = bodyCoils + model.hookCoils
-  const freeLengthMm = usualFreeLengthMm(model, meanDiameterMm, bodyCoils)
-  const rate = stiffness(model) / (meanDiameterMm * meanDiameterMm * meanDiameterMm * activeCoils)
-  return fillExtensionState(state, model, meanDiameterMm, bodyCoils, activeCoils, freeLengthMm, anchorN - rate * (travel.anchor.lengthMm - freeLengthMm))
+  const freeLengthMm = usualFreeLengthMm(model, D, bodyCoils)
+  const rate = stiffness(model) / (D * D * D * activeCoils)
+  const initialTensionN = Number.isNaN(travel.forceN)
+    ? forceAtStressN(usualInitialStressMpa(D / d), D, d)
+    : firstForceN(travel, rate) - rate * (travel.lengthMm - freeLengthMm)
+  return fillExtensionState(state, model, D, bodyCoils, activeCoils, freeLengthMm, initialTensionN)
 }
 
-/** Body coils that a request leaves for a mean diameter where it fixes the rate or the free length. */
-export function bodyCoilsAt(model: ExtensionModel, travel: Exclude<ExtensionTravel, { kind: 'one-load' }>, meanDiameterMm: number): number {
-  if (travel.kind === 'rate') {
-    return stiffness(model) / (meanDiameterMm * meanDiameterMm * meanDiameterMm * travel.rateNPerMm) - model.hookCoils
+/*
+ * The body coils that a request leaves at a mean diameter lie between two numbers, and both fall as D rises (S = G d^4/(8 D^3)
+ * falls, the hooks H and with them 2 H grow):
+ * - a rate R, off by t at most: Nb = S/R' - G/E with R' from R (1 - t) to R (1 + t);
+ * - a free length L0, off by u at most: Nb = (L0' - 2 H)/d - 1 with L0' from L0 (1 - u) to L0 (1 + u);
+ * - one load F at L alone: the tension F - S (L - d - 2 H - Nb d)/(Nb + G/E) is T where
+ *   Nb = (S (L - d - 2 H) - (F - T) G/E)/(F - T + S d),
+ *   which rises with S and T. It lies between nought and the greatest that is sensible, which falls with D; and the spring is
+ *   no longer than L.
+ */
+
+// Body coils at which one load leaves the tension T; Infinity where any number leaves less.
+function coilsOfTension(model: ExtensionModel, travel: ExtensionTravel, D: number, tensionN: number): number {
+  const d = model.wireDiameterMm
+  const S = stiffness(model) / (D * D * D)
+  const pull = travel.forceN - tensionN
+  if (pull <= 0) return Infinity
+  return (S * (travel.lengthMm - d - 2 * hookLengthMm(model.hookForm, D, d)) - pull * model.hookCoils) / (pull + S * d)
+}
+
+/** Body coils of a rate at a mean diameter. */
+export const coilsOfRate = (model: ExtensionModel, D: number, rateNPerMm: number): number => stiffness(model) / (D * D * D * rateNPerMm) - model.hookCoils
+/** Body coils of a free length at a mean diameter. */
+export const coilsOfLength = (model: ExtensionModel, D: number, lengthMm: number): number =>
+  (lengthMm - 2 * hookLengthMm(model.hookForm, D, model.wireDiameterMm)) / model.wireDiameterMm - 1
+
+/** Fewest body coils that a request leaves at a mean diameter, never under three; falls as D rises. */
+export function fewestBodyCoils(model: ExtensionModel, travel: ExtensionTravel, D: number): number {
+  switch (travel.kind) {
+    case 'rate': return Math.max(LEAST_BODY_COILS, coilsOfRate(model, D, travel.rateNPerMm * (1 + travel.rateTolerance)))
+    case 'free-length': return Math.max(LEAST_BODY_COILS, coilsOfLength(model, D, travel.freeLengthMm * (1 - travel.lengthTolerance)))
+    case 'one-load': return Math.max(LEAST_BODY_COILS, coilsOfTension(model, travel, D, 0))
+    case 'rate-and-length': return Math.max(
+      LEAST_BODY_COILS, coilsOfRate(model, D, travel.rateNPerMm * (1 + travel.rateTolerance)), coilsOfLength(model, D, travel.freeLengthMm * (1 - travel.lengthTolerance)),
+    )
   }
-  return (travel.freeLengthMm - 2 * hookLengthMm(model.hookForm, meanDiameterMm, model.wireDiameterMm)) / model.wireDiameterMm - 1
+}
+
+/** Most body coils that a request leaves at a mean diameter; falls as D rises. */
+export function mostBodyCoils(model: ExtensionModel, travel: ExtensionTravel, D: number): number {
+  const d = model.wireDiameterMm
+  switch (travel.kind) {
+    case 'rate': return coilsOfRate(model, D, travel.rateNPerMm * (1 - travel.rateTolerance))
+    case 'free-length': return coilsOfLength(model, D, travel.freeLengthMm * (1 + travel.lengthTolerance))
+    case 'one-load': return Math.min(
+      coilsOfLength(model, D, travel.lengthMm), coilsOfTension(model, travel, D, forceAtStressN(greatestInitialStressMpa(D / d), D, d)),
+    )
+    case 'rate-and-length': return Math.min(
+      coilsOfRate(model, D, travel.rateNPerMm * (1 - travel.rateTolerance)), coilsOfLength(model, D, travel.freeLengthMm * (1 + travel.lengthTolerance)),
+    )
+  }
+}
+
+/** Body coils that make rate or free length exact; of one load alone the fewest, whose spring is the lightest of its diameter. */
+export function exactBodyCoils(model: ExtensionModel, travel: ExtensionTravel, D: number): number {
+  switch (travel.kind) {
+    case 'rate': case 'rate-and-length': return coilsOfRate(model, D, travel.rateNPerMm)
+    case 'free-length': return coilsOfLength(model, D, travel.freeLengthMm)
+    case 'one-load': return fewestBodyCoils(model, travel, D)
+  }
 }

@@ -1,12 +1,14 @@
 import { describeAll, passesAll } from '../../checks/check'
-import { surroundingsCheck, temperatureCheck } from '../../checks/place'
-import { indexCheck, wireRangeCheck } from '../../checks/wire'
+import { surroundingsCheck } from '../../checks/place'
+import { indexCheck, methodCheck, wireRangeCheck } from '../../checks/wire'
 import type { Check } from '../../types'
 import type { CompressionModel } from '../model'
 import type { CompressionState } from '../state'
 import type { CompressionCheck } from './check'
 import { boreCheck, freeLengthCheck, rodCheck, solidLengthCheck } from './fit'
+import { impactCheck } from './impact'
 import { fatigueCheck, peeningCheck } from './life'
+import { temperatureCheck } from './place'
 import { coilsCheck } from './proportion'
 import { bucklingCheck, resonanceCheck } from './stability'
 import { stressSolidCheck, stressWorkingCheck } from './stress'
@@ -16,8 +18,8 @@ import { clearanceCheck, orderCheck } from './travel'
 /** All checks of a compression spring, in the order they are shown. */
 export const COMPRESSION_CHECKS: readonly CompressionCheck[] = [
   wireRangeCheck, indexCheck, coilsCheck, orderCheck, clearanceCheck, stressSolidCheck, stressWorkingCheck, fatigueCheck,
-  boreCheck, rodCheck, bucklingCheck, solidLengthCheck, freeLengthCheck, temperatureCheck, resonanceCheck, peeningCheck,
-  tanglingCheck, surroundingsCheck,
+  boreCheck, rodCheck, bucklingCheck, solidLengthCheck, freeLengthCheck, temperatureCheck, resonanceCheck, impactCheck, peeningCheck,
+  tanglingCheck, surroundingsCheck, methodCheck,
 ]
 
 /** True where no check of severity stop fails: the constraint of sizing. */

@@ -85,7 +85,8 @@ export const peeningCheck: CompressionCheck = {
           ? `Shot peening is workable: ${rule}.`
           : `Not shot peened; peening would not be workable here: it needs ${rule}.`,
       },
-      'note',
+      // A life that counts on peening that shot cannot do is no life.
+      model.shotPeened && !workable && model.cycles >= FATIGUE_CYCLES ? 'caution' : 'note',
     )
   },
 }

@@ -20,7 +20,7 @@ export const coilsCheck: ExtensionCheck = {
       {
         stop: `${n} coils in the body: at least ${LEAST_BODY_COILS} are needed (common practice).`,
         caution: `${n} coils in the body: under ${EASY_BODY_COILS} the hooks make the rate uncertain (common practice).`,
-        pass: `${n} coils in the body, at least ${EASY_BODY_COILS}.`,
+        pass: `${n} coils in the body, at least ${EASY_BODY_COILS} (common practice).`,
       },
     )
   },

@@ -41,7 +41,7 @@ export const orderCheck: ExtensionCheck = {
 export const initialTensionCheck: ExtensionCheck = {
   code: 'initial-tension',
   applies: () => true,
-  stops: (model, state) => fallsShort(state.initialTensionN, 0) || state.initialTensionN < -1e-9 * greatestOrOne(state)
+  stops: (model, state) => state.initialTensionN < -1e-9 * greatestOrOne(state)
     || exceeds(initialStressMpa(model, state), greatestInitialStressMpa(state.springIndex)),
   describe: (model, state) => {
     const stress = initialStressMpa(model, state)

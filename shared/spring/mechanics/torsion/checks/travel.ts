@@ -38,7 +38,7 @@ export const coilsCheck: TorsionCheck = {
     return finishCheck('coils', { stop: coilsCheck.stops(model, state), caution: fallsShort(state.bodyCoils, EASY_BODY_COILS) }, state.bodyCoils, LEAST_BODY_COILS, {
       stop: `${n} coils in the body: at least ${LEAST_BODY_COILS} are needed (common practice).`,
       caution: `${n} coils in the body: under ${EASY_BODY_COILS} the legs make the rate uncertain (common practice).`,
-      pass: `${n} coils in the body, at least ${EASY_BODY_COILS}.`,
+      pass: `${n} coils in the body, at least ${EASY_BODY_COILS} (common practice).`,
     })
   },
 }
