@@ -1,9 +1,8 @@
 import { getNode } from '@formkit/core'
-import type { ConflictView } from '#shared/schemas/quote'
 import { unitSymbol } from '#shared/units/convert'
 import { EXAMPLE_NEEDS } from '~/utils/example-spring'
 import { formatWeekday } from '~/utils/day-words'
-import { isChoice, missingFields, previewBody, readDraft, typedNumber, type OrderDraft } from '~/utils/order-draft'
+import { missingFields, previewBody, readDraft, typedNumber, type OrderDraft } from '~/utils/order-draft'
 import { ORDER_FIELDS, orderFieldId, quantityOf, type OrderFieldName } from '~/utils/order-fields'
 import { ORDER_READ_KEY } from '~/utils/order-keys'
 import { openItems } from '~/utils/order-open'
@@ -70,24 +69,9 @@ export function useOrderForm() {
     const field = read.value.fieldOfPath[path]
     return field ? [{ fieldId: orderFieldId(field), words: ORDER_FIELDS[field].words, message }] : []
   }))
-  const conflictFields = computed(() => (isOld.value ? [] : preview.view.value?.conflict?.changes ?? []).flatMap(({ path }) => fieldOfChange(path) ?? []))
-  const conflictSection = computed(() => preview.view.value?.conflict && !isOld.value ? conflictFields.value[0] ? ORDER_FIELDS[conflictFields.value[0]].section : 1 : null)
-  const open = computed(() => openItems(new Set([...missingFields(store.draft), ...Object.keys(read.value.faults) as OrderFieldName[], ...conflictFields.value.slice(0, 2)])))
+  const clash = useOrderClash({ view: () => preview.view.value, isOld: () => isOld.value, read: () => read.value, say: (words) => { said.value = words } })
+  const open = computed(() => openItems(new Set([...missingFields(store.draft), ...Object.keys(read.value.faults) as OrderFieldName[], ...clash.fields.value.slice(0, 2)])))
 
-  function fieldOfChange(path: string): OrderFieldName | undefined {
-    return read.value.fieldOfPath[path.startsWith('requirement.') ? path : `requirement.${path}`]
-  }
-
-  /** Makes one of the changes that would give a spring, in the units of the form. */
-  function applyChange({ path, to }: ConflictView['changes'][number]): void {
-    const field = fieldOfChange(path)
-    if (!field || isChoice(field)) return
-    const quantity = quantityOf(field)
-    const text = typeof to === 'number' && quantity ? typedNumber(to, quantity, store.units) : String(to)
-    if (typeof to === 'number' && quantity) store.written = { ...store.written, [field]: { text, valueSi: to } }
-    change({ [field]: text })
-    document.getElementById(orderFieldId(field))?.focus()
-  }
   const change = (values: Partial<OrderDraft>) => { store.draft = { ...store.draft, ...values } }
 
   async function send(): Promise<void> {
@@ -116,7 +100,7 @@ export function useOrderForm() {
 
   return {
     store, units, ...preview, errors: submit.errors, failure: submit.failure, outcome: submit.outcome, isSending: submit.isSending,
-    isOld, chosen, rung, said, complaints, conflictSection, open, foot, applyChange, send,
+    isOld, chosen, rung, said, complaints, clash, open, foot, send,
     neededOn: computed(() => typeof read.value.requirement.neededOn === 'string' ? read.value.requirement.neededOn : ''),
     dayReading: computed(() => typeof read.value.requirement.neededOn === 'string' ? formatWeekday(read.value.requirement.neededOn) : ''),
     setNeededOn: (day: string) => change({ neededOn: formatDay(day) }),

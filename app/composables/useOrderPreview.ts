@@ -56,6 +56,7 @@ export function useOrderPreview(body: () => PreviewBody | null) {
     if (question) void ask(question)
   }
 
+  // At once too: whoever comes here from another page brings a draft along.
   watch(() => JSON.stringify(body()), (question) => {
     if (question === asked) return
     asked = question
@@ -65,7 +66,7 @@ export function useOrderPreview(body: () => PreviewBody | null) {
       return
     }
     timer = setTimeout(retry, DEBOUNCE_MS)
-  })
+  }, { immediate: import.meta.client })
   onScopeDispose(stop)
 
   return { view, error, isAsking: readonly(isAsking), isSlow: readonly(isSlow), retry }

@@ -1,21 +1,34 @@
 import { defineStore } from 'pinia'
+import type { SpringKind } from '#shared/spring/codes'
 import type { UnitSystem } from '#shared/units/convert'
+import { readKept, type KeptDraft } from '~/utils/kept-draft'
 import { convertDraft, emptyDraft, PERSONAL_FIELDS, type OrderDraft, type WrittenBySystem } from '~/utils/order-draft'
+import { convertShelf, isShelfEmpty, withKind, type KindShelf } from '~/utils/order-shelf'
 
 const KEY = 'wirewright.order-draft.1'
-type Kept = { draft: Partial<OrderDraft>, units: UnitSystem, keptAt: string, written: WrittenBySystem }
 
 /** The order form as typed. All but who asks is kept on the device, so that a reload loses nothing. */
 export const useOrderDraftStore = defineStore('order-draft', () => {
   const draft = ref<OrderDraft>(emptyDraft())
   const written = shallowRef<WrittenBySystem>({})
+  /** What was typed for the kinds that are not chosen now. */
+  const shelf = shallowRef<KindShelf>({})
   /** The units that the draft is typed in. */
   const units = ref<UnitSystem>('metric')
   const keptAt = ref<string | null>(null)
 
+  /** Chooses which way the spring works; what was typed for each kind stays its own. */
+  function chooseKind(kind: SpringKind): void {
+    const now = withKind({ draft: draft.value, written: written.value, shelf: shelf.value }, kind)
+    draft.value = now.draft
+    written.value = now.written
+    shelf.value = now.shelf
+  }
+
   function convertTo(to: UnitSystem): void {
     if (to === units.value) return
     const converted = convertDraft(draft.value, { from: units.value, to, written: written.value })
+    shelf.value = convertShelf(shelf.value, { from: units.value, to })
     draft.value = converted.draft
     written.value = converted.written
     units.value = to
@@ -28,10 +41,10 @@ export const useOrderDraftStore = defineStore('order-draft', () => {
       Reflect.deleteProperty(kept, field)
       Reflect.deleteProperty(usual, field)
     }
-    const isUntouched = Object.entries(usual).every(([field, value]) => field === 'country' || kept[field as keyof OrderDraft] === value)
+    const isUntouched = isShelfEmpty(shelf.value) && Object.entries(usual).every(([field, value]) => field === 'country' || kept[field as keyof OrderDraft] === value)
     if (isUntouched) return forget()
     const at = now.toISOString()
-    if (writeLocal(KEY, JSON.stringify({ draft: kept, units: units.value, keptAt: at, written: written.value } satisfies Kept))) keptAt.value = at
+    if (writeLocal(KEY, JSON.stringify({ draft: kept, units: units.value, keptAt: at, written: written.value, shelf: shelf.value } satisfies KeptDraft))) keptAt.value = at
   }
 
   function recall(): void {
@@ -40,6 +53,7 @@ export const useOrderDraftStore = defineStore('order-draft', () => {
     draft.value = { ...draft.value, ...kept.draft }
     units.value = kept.units
     written.value = kept.written
+    shelf.value = kept.shelf
     keptAt.value = kept.keptAt
   }
 
@@ -49,6 +63,7 @@ export const useOrderDraftStore = defineStore('order-draft', () => {
     const fresh = { ...emptyDraft(), name, firm, email, country, vatNumber }
     draft.value = fresh
     written.value = {}
+    shelf.value = {}
     forget()
   }
   function forget(): void {
@@ -56,26 +71,5 @@ export const useOrderDraftStore = defineStore('order-draft', () => {
     removeLocal(KEY)
   }
 
-  return { draft, written, units, keptAt, convertTo, keep, recall, startAgain }
+  return { draft, written, shelf, units, keptAt, chooseKind, convertTo, keep, recall, startAgain }
 })
-
-/** A kept draft as far as it has the form of one: an older or damaged one is left. */
-function readKept(text: string | null): Kept | null {
-  if (!text) return null
-  try {
-    const value: unknown = JSON.parse(text)
-    if (typeof value !== 'object' || value === null || !('draft' in value) || typeof value.draft !== 'object' || value.draft === null) return null
-    const given = value.draft as Record<string, unknown>
-    const draft: Record<string, unknown> = {}
-    for (const [field, usual] of Object.entries(emptyDraft())) {
-      if (typeof given[field] === typeof usual) draft[field] = given[field]
-    }
-    const units = 'units' in value && value.units === 'inch' ? 'inch' : 'metric'
-    const keptAt = 'keptAt' in value && typeof value.keptAt === 'string' ? value.keptAt : ''
-    const written = 'written' in value && typeof value.written === 'object' && value.written !== null ? value.written as WrittenBySystem : {}
-    return keptAt ? { draft, units, keptAt, written } : null
-  }
-  catch {
-    return null
-  }
-}

@@ -66,6 +66,10 @@ export const EXAMPLE_TORSION = {
 /** An example of each kind. */
 export const EXAMPLE_SPRINGS = { compression: EXAMPLE_COMPRESSION, extension: EXAMPLE_EXTENSION, torsion: EXAMPLE_TORSION } as const satisfies Record<SpringKind, unknown>
 
+/** What the examples are drawn for, and where they are held at first: mm, or degrees from free. */
+export const EXAMPLE_WORDS: Readonly<Record<SpringKind, string>> = { compression: '60 N at 50 mm and 150 N at 35 mm', extension: 'about 22 N at 60 mm and 60 N at 80 mm', torsion: 'about 300 N·mm at 30° and 900 N·mm at 90°' }
+export const EXAMPLE_AT: Readonly<Record<SpringKind, number>> = { compression: 42, extension: 70, torsion: 60 }
+
 /** The examples as they would be typed. */
 export const EXAMPLE_NEEDS = {
   compression: { knows: 'two-loads', firstForce: '60', firstLength: '50', secondForce: '150', secondLength: '35' },

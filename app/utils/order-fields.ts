@@ -59,6 +59,8 @@ export const ORDER_FIELDS = {
 export type OrderFieldName = keyof typeof ORDER_FIELDS
 /** Fields that hold a choice of a few words, or a tick. */
 export type OrderChoiceName = 'kind' | 'knows' | 'knowsExtension' | 'knowsTorsion' | 'certificate'
+/** Fields that hold text, as typed. */
+export type OrderTextName = Exclude<OrderFieldName, OrderChoiceName>
 export const ORDER_FIELD_NAMES = Object.keys(ORDER_FIELDS) as OrderFieldName[]
 
 /** The physical quantity typed into a field, if it is one. */

@@ -14,7 +14,7 @@ export function quoteTitleCells(view: QuoteView, { day, units }: { day: (at: str
     { label: 'Title', value: view.title, span: 4 },
     { label: 'Drawn', value: sentAt ? `from your form, ${day(sentAt)}` : 'not yet', span: 3 },
     { label: 'Checked', value: view.checkedBy && sentAt ? `${view.checkedBy}, ${day(sentAt)}` : design ? 'by rule, all limits kept' : 'not yet', span: 3 },
-    { label: 'Scale', value: design ? 'as the length axis' : 'none' },
+    { label: 'Scale', value: design ? design.kind === 'torsion' ? 'in proportion' : 'as the length axis' : 'none' },
     { label: 'Made to', value: 'ISO 2162, EN 15800', span: 4 },
     { label: 'Wire, mass', value: design ? `${formatLength(design.evaluation.wireLengthMm, units, { decimals: units === 'inch' ? 1 : 0 })}, ${formatMass(design.evaluation.massG, units)} each` : 'not yet', span: 3 },
     { label: 'Price book', value: view.priceBookNumber === null ? 'not yet' : String(view.priceBookNumber), span: 3 },

@@ -30,7 +30,8 @@ import type { ExtensionTravel } from './travel'
 // Wider than the slack of the checks, so that rounding leaves no spring out that passes.
 const SLACK = 2e-9
 
-const RISING_CHECKS: readonly ExtensionCheck[] = [wireRangeCheck, temperatureCheck, hookBendCheck, stressWorkingCheck, hookBendingCheck, hookTorsionCheck, fatigueCheck]
+/** Checks that fail beyond some diameter, whatever the coils, or do not know it. */
+export const RISING_CHECKS: readonly ExtensionCheck[] = [wireRangeCheck, temperatureCheck, hookBendCheck, stressWorkingCheck, hookBendingCheck, hookTorsionCheck, fatigueCheck]
 
 /**
  * False where diameter D is too large for the loads, whatever the coils; true without a load, unless wire or heat stop it.
