@@ -2,7 +2,7 @@ import { isDrawable } from './drawn-spring'
 import { extensionFigure } from './extension-figure'
 import { figureShapes, type Figure, type FigureOptions } from './figure'
 import { drawnCompression, drawnExtension, drawnTorsion, isDrawableExtension, isDrawableTorsion, type MovedSpring } from './moved'
-import { torsionFigure } from './torsion-figure'
+import { hasSideView, torsionFigure } from './torsion-figure'
 import { extensionSentence, figureSentence, torsionSentence } from './words'
 
 /** A still figure with its dimensions, and the sentence that names it. */
@@ -21,7 +21,7 @@ export function figureOf(design: MovedSpring, options: FigureOptions): NamedFigu
     }
     case 'torsion': {
       const drawn = drawnTorsion(design)
-      return isDrawableTorsion(drawn) ? { ...torsionFigure(drawn, options), sentence: torsionSentence(drawn, options.units, 'in side view and seen from its end') } : null
+      return isDrawableTorsion(drawn) ? { ...torsionFigure(drawn, options), sentence: torsionSentence(drawn, options.units, hasSideView(options) ? 'in side view and seen from its end' : 'seen from its end') } : null
     }
   }
 }

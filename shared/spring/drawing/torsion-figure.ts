@@ -3,7 +3,7 @@ import { dimensionAngle } from './angle-dimension'
 import { axisAcross, dimensionAcross, dimensionAlong, dimensionUpright, leader } from './dimensions'
 import type { Figure, FigureOptions } from './figure'
 import { legCorner } from './leg-corner'
-import { endExtentMm, fixedLegMm, freeAngleDeg, loadedLegMm, type LegLine } from './legs'
+import { endExtentMm, fixedLegMm, freeAngleDeg, loadedLegMm, type Extent, type LegLine } from './legs'
 import type { DrawnTorsion } from './moved'
 import { diameterSign, lengthLabel } from './press'
 import { lineV, px, text, textWidthPx, type Shape } from './shapes'
@@ -12,6 +12,8 @@ import { sideExtentMm, torsionEndShapes, torsionSideShapes, type EndPlacement } 
 const LEAST_WIDTH_PX = 280
 /** From this width on the two views stand beside each other. */
 const BESIDE_PX = 430
+/** A narrow figure that must be lower than this has the end view alone, its sizes in words. */
+const LEAST_STACKED_PX = 200
 const LEFT_PX = 46
 const RIGHT_PX = 16
 const TOP_PX = 40
@@ -22,6 +24,9 @@ const GAP_PX = 44
 const ROW_PX = 24
 /** Dimensions outside the loaded leg. */
 const OFF_LEG_PX = 20
+
+/** True where there is room for the side view too: beside the end view or, in a figure that may be tall, under it. */
+export const hasSideView = ({ widthPx, tallestPx = 260 }: Pick<FigureOptions, 'widthPx' | 'tallestPx'>): boolean => widthPx >= BESIDE_PX || tallestPx >= LEAST_STACKED_PX
 
 /** The end view with its legs, the angle between them and their lengths. */
 function endView(spring: DrawnTorsion, place: EndPlacement, { units }: FigureOptions, widthPx: number): Shape[] {
@@ -58,7 +63,21 @@ function endView(spring: DrawnTorsion, place: EndPlacement, { units }: FigureOpt
   return shapes
 }
 
-/** A torsion spring, unloaded: side view and end view with their dimensions, beside each other where there is room, else one over the other. */
+function endFigure(spring: DrawnTorsion, options: FigureOptions, widthPx: number, endMm: Extent): Figure {
+  const { units, tallestPx = 260 } = options
+  const { wireDiameterMm: d, meanDiameterMm: D } = spring
+  const marginPx = 30
+  const pxPerMm = Math.min((widthPx - 2 * marginPx) / (endMm.right - endMm.left), tallestPx / (endMm.bottom - endMm.top))
+  const place = { pxPerMm, xPx: widthPx / 2 - (pxPerMm * (endMm.left + endMm.right)) / 2, yPx: TOP_PX - pxPerMm * endMm.top }
+  const shapes: Shape[] = [
+    ...endView(spring, place, options, widthPx),
+    text('dim-text', 2, 16, 'start', `${diameterSign}${formatLength(D + d, units, { unit: false })} outside`),
+    text('dim-text', widthPx - 2, 16, 'end', `${diameterSign}${formatWireDiameter(d, units, { unit: false })} wire`),
+  ]
+  return { widthPx: Number(px(widthPx)), heightPx: Number(px(place.yPx + pxPerMm * endMm.bottom + BOTTOM_PX)), shapes, pxPerMm, isInterrupted: false }
+}
+
+/** A torsion spring, unloaded: side view and end view with their dimensions, beside each other where there is room, else one over the other; the end view alone where the figure must be low and narrow. */
 export function torsionFigure(spring: DrawnTorsion, options: FigureOptions): Figure {
   const { units, tallestPx = 260 } = options
   const widthPx = Math.max(LEAST_WIDTH_PX, options.widthPx)
@@ -67,6 +86,7 @@ export function torsionFigure(spring: DrawnTorsion, options: FigureOptions): Fig
   const end = endExtentMm(spring, 0)
   const corner = legCorner(spring)
   const endMm = corner ? { left: Math.min(end.left, corner.extent.left), right: Math.max(end.right, corner.extent.right), top: Math.min(end.top, corner.extent.top), bottom: Math.max(end.bottom, corner.extent.bottom) } : end
+  if (!hasSideView({ widthPx, tallestPx })) return endFigure(spring, options, widthPx, endMm)
   const isBeside = widthPx >= BESIDE_PX
   const [topMm, bottomMm] = isBeside ? [Math.min(side.top, endMm.top), Math.max(side.bottom, endMm.bottom)] : [Math.min(endMm.top, side.top), Math.max(endMm.bottom, side.bottom)]
   const sideMm = side.right - side.left

@@ -185,6 +185,16 @@ describe('a torsion spring that is turned', () => {
     }
   })
 
+  it.each(Object.keys(VARIANTS))('has the end view alone in a low and narrow figure of one with %s, and keeps to its box', (name) => {
+    const design = VARIANTS[name]
+    if (!design) throw new Error('Not a variant')
+    const figure = figureOf(design, { widthPx: 280, units: 'inch', tallestPx: 150 })
+    if (!figure) throw new Error('It must be drawn')
+    expect(figure.sentence).toContain('Torsion spring seen from its end, outside')
+    expect(figure.heightPx).toBeLessThan(250)
+    expect([partsOutside(figure, figure.shapes), wordsThatMeet(figure.shapes)]).toEqual([[], []])
+  })
+
   it('names itself in one sentence', () => {
     expect(figureOf(torsionDesign(), { widthPx: 540, units: 'metric' })?.sentence.replaceAll('\u202f', ' ')).toBe(
       'Torsion spring in side view and seen from its end, outside diameter 18.0 mm, inside diameter 14.0 mm, wire 2.00 mm, 5.25 coils in the body, legs 30.0 mm and 30.0 mm off the coil, 90.0\u00b0 apart, right-hand.',
