@@ -3,6 +3,9 @@ import type { RateGroup } from '../rate-groups'
 import { pageQuerySchema, textSchema } from './shared-fields'
 import { MATERIAL_CODES } from '../spring/codes'
 
+/** A draft is edited until an administrator approves it from a day on; from then it never changes. */
+export const PRICE_BOOK_STATES = ['draft', 'approved'] as const
+
 /** One version of the price book with its rates, as Works shows it. Values are decimal text in their own unit. */
 export type PriceBookView = { number: number, currency: string, inForceFrom: string, isInForce: boolean, rates: { code: string, label: string, unit: string, group: RateGroup, value: string }[] }
 export type PriceBookList = { books: PriceBookView[] }

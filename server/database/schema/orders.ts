@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm'
-import { bigint, boolean, check, date, index, integer, jsonb, numeric, pgEnum, pgTable, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core'
+import { bigint, boolean, check, date, index, integer, jsonb, numeric, pgEnum, pgTable, text, uniqueIndex, uuid, type AnyPgColumn } from 'drizzle-orm/pg-core'
 import { ORDER_STATES, QUOTE_STATES } from '../../../shared/schemas/order-states'
 import type { EnquiryRequest } from '../../../shared/schemas/enquiry'
 import type { GateReason, StoredDesign } from '../../../shared/schemas/quote'
@@ -32,6 +32,9 @@ export const orders = pgTable('orders', {
   neededOn: date('needed_on', { mode: 'string' }),
   answerBy: moment('answer_by'),
   assignedTo: uuid('assigned_to').references(() => people.id),
+  /** The enquiry of several springs this one is a line of, and its place there. */
+  parentId: uuid('parent_id').references((): AnyPgColumn => orders.id),
+  position: integer('position'),
   acceptedQuantity: integer('accepted_quantity'),
   acceptedQuoteId: uuid('accepted_quote_id'),
   createdAt: createdAt(),
@@ -41,6 +44,8 @@ export const orders = pgTable('orders', {
   index('orders_company').on(t.companyId, t.createdAt),
   index('orders_contact_email').on(t.contactEmail),
   index('orders_person').on(t.personId),
+  uniqueIndex('orders_line').on(t.parentId, t.position),
+  check('orders_line_placed', sql`(${t.parentId} is null) = (${t.position} is null) and ${t.parentId} is distinct from ${t.id}`),
   check('orders_email_lower', sql`${t.contactEmail} = lower(${t.contactEmail})`),
   check('orders_accepted', sql`${t.state} in ('enquiry', 'quoted', 'withdrawn', 'expired', 'cancelled') or (${t.acceptedQuantity} is not null and ${t.acceptedQuoteId} is not null)`),
 ])
@@ -76,6 +81,18 @@ export const quotes = pgTable('quotes', {
   wireProductId: uuid('wire_product_id').references(() => wireProducts.id),
   /** Null while no spring that passes is known. */
   design: jsonb('design').$type<StoredDesign>(),
+  /** The spring that was found, where an estimator chose another in its place; with the reason and who. */
+  computedDesign: jsonb('computed_design').$type<StoredDesign>(),
+  designReason: text('design_reason'),
+  designChangedBy: uuid('design_changed_by').references(() => people.id),
+  /** The revision whose prices this one brings up to date. */
+  renewsQuoteId: uuid('renews_quote_id').references((): AnyPgColumn => quotes.id),
+  /** Below the floor margin an administrator is asked, with the reason, and approves this very draft. */
+  approvalAskedAt: moment('approval_asked_at'),
+  approvalAskedBy: uuid('approval_asked_by').references(() => people.id),
+  approvalReason: text('approval_reason'),
+  approvedAt: moment('approved_at'),
+  approvedBy: uuid('approved_by').references(() => people.id),
   marginPercentOverride: numeric('margin_percent_override', { precision: 7, scale: 3 }),
   marginReason: text('margin_reason'),
   currency: text('currency').notNull(),
@@ -91,6 +108,8 @@ export const quotes = pgTable('quotes', {
   uniqueIndex('quotes_order_revision').on(t.orderId, t.revision),
   uniqueIndex('quotes_one_draft').on(t.orderId).where(sql`${t.state} = 'draft'`),
   uniqueIndex('quotes_one_sent').on(t.orderId).where(sql`${t.state} = 'sent'`),
+  check('quotes_design_changed', sql`(${t.designReason} is null and ${t.designChangedBy} is null) or (length(${t.designReason}) > 0 and ${t.designChangedBy} is not null and ${t.design} is not null)`),
+  check('quotes_approval', sql`(${t.approvalAskedAt} is null) = (${t.approvalReason} is null) and (${t.approvedAt} is null) = (${t.approvedBy} is null)`),
   check('quotes_sent_complete', sql`${t.state} = 'draft' or (${t.sentAt} is not null and ${t.design} is not null)`),
 ])
 
@@ -110,8 +129,13 @@ export const quotePrices = pgTable('quote_prices', {
   /** Planned minutes of each operation, from which the job's routing is made. */
   plannedMinutes: jsonb('planned_minutes').$type<PlannedMinutes>().notNull(),
   dispatchOn: date('dispatch_on', { mode: 'string' }),
+  /** The day the plan gave, where an estimator named another in its place; with the reason and who. */
+  computedDispatchOn: date('computed_dispatch_on', { mode: 'string' }),
+  dispatchReason: text('dispatch_reason'),
+  dispatchChangedBy: uuid('dispatch_changed_by').references(() => people.id),
 }, t => [
   uniqueIndex('quote_prices_quantity').on(t.quoteId, t.quantity),
+  check('quote_prices_dispatch_changed', sql`(${t.dispatchReason} is null and ${t.dispatchChangedBy} is null) or (length(${t.dispatchReason}) > 0 and ${t.dispatchChangedBy} is not null and ${t.dispatchOn} is not null)`),
   check('quote_prices_add_up', sql`${t.netMinor} + ${t.taxMinor} = ${t.grossMinor} and ${t.depositMinor} between 0 and ${t.grossMinor} and ${t.quantity} > 0 and ${t.netMinor} >= 0`),
 ])
 

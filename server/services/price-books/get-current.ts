@@ -1,4 +1,4 @@
-import { desc, lte, sql } from 'drizzle-orm'
+import { and, desc, eq, lte, sql } from 'drizzle-orm'
 import { priceBooks } from '../../database/schema'
 import type { ServiceContext } from '../context'
 import { DomainError } from '../errors'
@@ -10,7 +10,7 @@ const zones = new Map<string, ReturnType<typeof readerFor>>()
 
 const readerFor = (timeZone: string) => rememberFor(5_000, async (db) => {
   const today = sql`(now() at time zone ${timeZone})::date`
-  const [row] = await db.select({ id: priceBooks.id }).from(priceBooks).where(lte(priceBooks.inForceFrom, today))
+  const [row] = await db.select({ id: priceBooks.id }).from(priceBooks).where(and(eq(priceBooks.state, 'approved'), lte(priceBooks.inForceFrom, today)))
     .orderBy(desc(priceBooks.inForceFrom), desc(priceBooks.number)).limit(1)
   return row?.id ?? null
 })

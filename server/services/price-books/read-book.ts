@@ -15,6 +15,7 @@ export type StoredPriceBook = PriceBook & { id: string }
 export async function readBook(db: Queryable, id: string): Promise<StoredPriceBook> {
   const [book] = await db.select().from(priceBooks).where(eq(priceBooks.id, id))
   if (!book) throw new Error(`price book ${id} is gone`)
+  if (book.inForceFrom === null) throw new Error(`price book ${book.number} is a draft`)
   const rows = await db.select({ code: priceBookRates.code, value: priceBookRates.value }).from(priceBookRates).where(eq(priceBookRates.priceBookId, id))
   const values = new Map(rows.map(row => [row.code, row.value]))
   const rates = Object.fromEntries(RATE_CODES.map(({ code }) => {
