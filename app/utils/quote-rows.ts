@@ -12,6 +12,8 @@ type Duty = { strokes: number, strokesPerMinute: number }
 /** A limit is written rounded down to a tenth, never up, as the notes beside it are. */
 const atMost = (value: number): number => Math.floor(value * 10) / 10
 const ORDINALS = ['First', 'Second', 'Third', 'Fourth', 'Fifth', 'Sixth']
+/** Keeps the degree sign of a rate beside its stroke at a line's end. */
+const WORD_JOINER = '\u2060'
 const NO_UNIT = { unit: false }
 /** Coil counts with no more places than they have. */
 const coils = (count: number): string => formatNumber(count, 2).replace(/\.?0+$/, '')
@@ -119,11 +121,11 @@ function torsionRows(design: StoredDesignOf<'torsion'>, units: UnitSystem, duty:
       name: loadName(points.length, at, `${formatAngle(point.angleDeg)} from free`, 'moment'), symbol: `M_${at + 1}`, value: formatMoment(point.momentNmm, units), limit: pen.plusMinus(`moment${at + 1}Nmm`, moment => formatMoment(moment, units)),
     })),
     ...(evaluation.greatestAngleDeg === null || evaluation.greatestMomentNmm === null ? [] : [{ name: 'Never turn beyond', symbol: 'α_n', value: formatAngle(atMost(evaluation.greatestAngleDeg)), limit: formatMoment(evaluation.greatestMomentNmm, units) }]),
-    { name: 'Rate', symbol: 'R', value: formatMomentRate(evaluation.rateNmmPerDeg, units), limit: '' },
+    { name: 'Rate', symbol: 'R', value: formatMomentRate(evaluation.rateNmmPerDeg, units).replace('/', `/${WORD_JOINER}`), limit: '' },
     ...(points.length > 0
       ? [
           { name: 'Bending stress', symbol: indexed('σ_', points.length), value: pen.stresses(points.map(point => point.bendingStressMpa)), limit: allowed(evaluation.allowableStressMpa, pen) },
-          { name: 'Inside when turned', symbol: 'D_i', value: points.map(point => pen.fine(point.innerDiameterAtPointMm)).join(', '), limit: `rod up to ${pen.length(atMost(evaluation.recommendedRodMm))}` },
+          { name: 'Inside when turned', symbol: 'D_i', value: points.map(point => pen.fine(point.innerDiameterAtPointMm)).join(', '), limit: `usual rod ${pen.length(atMost(evaluation.recommendedRodMm))}` },
         ]
       : []),
     ...dutyRows(design, units, duty),

@@ -1,3 +1,4 @@
+import type { Page } from '@playwright/test'
 import { look } from './support/look'
 import { OrderForm } from './support/order-form'
 import { expect, test } from './support/test'
@@ -5,6 +6,12 @@ import { expect, test } from './support/test'
 const PULL = { firstForce: '20', firstLength: '60', secondForce: '50', secondLength: '80' } as const
 const TWIST = { firstMoment: '300', firstAngle: '30', secondMoment: '900', secondAngle: '90', firstLeg: '30', secondLeg: '30', rod: '10' } as const
 const ASKER = { name: 'Orla Fenwick', firm: 'Brackwater Fillers', email: 'orla.pulls@brackwater.example' } as const
+
+/** How many pages of paper a page prints on. */
+async function pagesOf(page: Page): Promise<number> {
+  const pdf = await page.pdf({ preferCSSPageSize: true, printBackground: true })
+  return pdf.toString('latin1').match(/\/Type\s*\/Page\b/g)?.length ?? 0
+}
 
 test('a spring that pulls is described, drawn, priced and quoted or passed to a person', async ({ page, watch }) => {
   const form = new OrderForm(page)
@@ -40,6 +47,7 @@ test('a spring that pulls is described, drawn, priced and quoted or passed to a 
   await expect(page.getByRole('heading', { level: 1 })).toBeVisible()
   await expect(page.getByText(/OX-\d+/).first()).toBeVisible()
   await look(page, 'order-pulls-sent')
+  expect(await pagesOf(page), 'a quote is one sheet of paper').toBe(1)
 
   // What was asked for comes back into the form to be changed, and is worked out again.
   await page.getByRole('button', { name: 'Change something' }).click()
@@ -101,6 +109,7 @@ test('a spring that twists is ordered on a phone, after a wrong answer is put ri
   await page.setViewportSize({ width: 1280, height: 900 })
   const overPx = await page.getByRole('table', { name: 'What is made' }).evaluate(table => table.getBoundingClientRect().right - (table.parentElement?.getBoundingClientRect().right ?? 0))
   expect(overPx, 'the table stays in its sheet').toBeLessThanOrEqual(0.5)
+  expect(await pagesOf(page), 'a quote is one sheet of paper').toBe(1)
   await page.goBack()
   await form.choose('It twists')
   await expect(form.field('firstMoment')).toHaveValue('')
