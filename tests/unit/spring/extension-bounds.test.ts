@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { buildExtensionModel } from '../../../shared/spring/mechanics/extension/model'
 import { EXTENSION_CHECKS, passesExtensionStopChecks } from '../../../shared/spring/mechanics/extension/checks'
 import { createExtensionState, extensionMassG } from '../../../shared/spring/mechanics/extension/state'
-import { RISING_CHECKS, carriesAt, couldPass, diameterRange, leastMassG, leastWireMassG } from '../../../shared/spring/sizing/extension/bounds'
+import { RISING_CHECKS, carriesAt, couldPass, diameterRange, leastMassG, leastWireMassG, possibleDiameters } from '../../../shared/spring/sizing/extension/bounds'
 import { fewestBodyCoils, fillExtension, mostBodyCoils } from '../../../shared/spring/sizing/extension/geometry'
 import { resolveExtensionTravel } from '../../../shared/spring/sizing/extension/travel'
 import { evenly } from './arbitrary-compression'
@@ -105,6 +105,27 @@ describe.each(ASKED)('asked for %s', (asked: Asked) => {
     expect(seen.passes).toBeGreaterThan(300)
     expect(seen.fails).toBeGreaterThan(300)
   })
+})
+
+it.each(STEPS)('the range of two loads ends where the softest spring that steps leave no longer carries them: %o', (steps) => {
+  const ended = { byFatigue: 0, byStress: 0 }
+  fc.assert(fc.property(extensionAsks('two-loads'), (ask) => {
+    const at = setUp(ask, steps)
+    const { model, travel, state } = at
+    const range = diameterRange(model, state, travel)
+    if (!range || range.high >= (possibleDiameters(model, travel)?.high ?? 0)) return
+    // With the most coils the rate is softest, the second load least and the first greatest.
+    const failing = (D: number) => {
+      fillExtension(model, state, travel, D, mostBodyCoils(model, travel, D))
+      return RISING_CHECKS.filter(check => check.applies(model, state) && check.stops(model, state)).map(check => check.code)
+    }
+    expect(failing(range.high * (1 - 1e-8))).toEqual([])
+    const beyond = failing(range.high * (1 + 1e-4))
+    expect(beyond).not.toEqual([])
+    ended[beyond.includes('fatigue') ? 'byFatigue' : 'byStress']++
+  }), { numRuns: 3000, seed: 8 })
+  expect(ended.byFatigue).toBeGreaterThan(20)
+  expect(ended.byStress).toBeGreaterThan(20)
 })
 
 describe('one load alone', () => {
